@@ -1,0 +1,87 @@
+package fieldwright.quantity;
+
+import java.util.Collection;
+import java.util.Locale;
+
+/** A name that nothing on the sheet defines. The message offers the closest defined name when one is close. */
+public final class UnknownNameException extends AuthorException {
+    private static final long serialVersionUID = 1L;
+    private final String name;
+    private final String nearest;
+    private final int position;
+
+    public UnknownNameException(String name, Collection<String> defined) {
+        this(name, defined, -1, "");
+    }
+
+    /**
+     * @param position 0-based offset in the formula text, or -1 when there is none
+     * @param hint a further sentence for the message, or ""
+     */
+    public UnknownNameException(String name, Collection<String> defined, int position, String hint) {
+        this(name, nearest(name, defined), position, hint);
+    }
+
+    private UnknownNameException(String name, String nearest, int position, String hint) {
+        super("no quantity '" + name + "'."
+            + (nearest == null ? "" : " Closest defined name: '" + nearest + "'.")
+            + (hint.isEmpty() ? "" : " " + hint)
+            + (nearest == null && hint.isEmpty() ? " Define it above this line." : ""));
+        this.name = name;
+        this.nearest = nearest;
+        this.position = position;
+    }
+
+    public String name() {
+        return name;
+    }
+
+    /** The closest defined name, or null when none is close. */
+    public String nearest() {
+        return nearest;
+    }
+
+    /** 0-based offset in the formula text, or -1. */
+    public int position() {
+        return position;
+    }
+
+    /** The name within an edit distance of about a third of its length, upper and lower case counting half; or null. */
+    public static String nearest(String name, Collection<String> defined) {
+        String best = null;
+        double bestDistance = Math.max(1.0, name.length() / 3.0) + 0.25;
+        for (String candidate : defined) {
+            double distance = distance(name, candidate);
+            if (distance < bestDistance || (distance == bestDistance && best != null && candidate.compareTo(best) < 0)) {
+                best = candidate;
+                bestDistance = distance;
+            }
+        }
+        return best;
+    }
+
+    /** Levenshtein distance; a change of case only costs one half. */
+    private static double distance(String a, String b) {
+        double[] row = new double[b.length() + 1];
+        for (int j = 0; j <= b.length(); j++) {
+            row[j] = j;
+        }
+        for (int i = 1; i <= a.length(); i++) {
+            double diagonal = row[0];
+            row[0] = i;
+            for (int j = 1; j <= b.length(); j++) {
+                double substituted = diagonal + cost(a.substring(i - 1, i), b.substring(j - 1, j));
+                diagonal = row[j];
+                row[j] = Math.min(substituted, Math.min(row[j], row[j - 1]) + 1);
+            }
+        }
+        return row[b.length()];
+    }
+
+    private static double cost(String a, String b) {
+        if (a.equals(b)) {
+            return 0;
+        }
+        return a.toLowerCase(Locale.ROOT).equals(b.toLowerCase(Locale.ROOT)) ? 0.5 : 1;
+    }
+}
