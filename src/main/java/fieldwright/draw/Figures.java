@@ -8,8 +8,8 @@ import java.math.RoundingMode;
  * Numbers as they stand on paper: rounded to what their doubt warrants, with real minus signs and superscripts.
  *
  * <p>How many digits. A value with a tolerance shows the decimals of the tolerance's second digit, or three digits of
- * its own where that says more (59.9 µC ± 17 µC), at most one decimal further. A value without shows six digits.
- * Either way no digit stands that the numerical error reaches. Doubts are rounded away from zero, tolerances to two
+ * its own where that says more (59.9 µC ± 17 µC), at most one decimal further. A value without shows six digits
+ * (an exact one no more than it needs). Either way no digit stands that the numerical error reaches. Doubts are rounded away from zero, tolerances to two
  * digits (JCGM 100:2008, 7.2.6), numerical errors to one.
  */
 public final class Figures {
@@ -30,7 +30,8 @@ public final class Figures {
             return Double.isNaN(si) ? "no number" : si > 0 ? "∞" : MINUS + "∞";
         }
         double v = scale.shown(si);
-        return fixed(v, decimals(v, shown(tolerance, scale), shown(numericalError, scale)));
+        boolean exact = tolerance == null && numericalError != null && numericalError == 0;
+        return exact ? brief(v, DIGITS_WITHOUT_TOLERANCE) : fixed(v, decimals(v, shown(tolerance, scale), shown(numericalError, scale)));
     }
 
     /**
@@ -78,9 +79,9 @@ public final class Figures {
         return v == 0 ? Math.min(wanted, 6) : Math.min(wanted, 16 - magnitude(v));
     }
 
-    /** Power of ten of the first digit: 0 for 1 to 9.99. */
+    /** Power of ten of the first digit: 0 for 1 to 9.99; what rounds to 10 within 12 digits counts as 10. */
     static int magnitude(double v) {
-        BigDecimal d = new BigDecimal(Math.abs(v)).round(new MathContext(17, RoundingMode.HALF_EVEN));
+        BigDecimal d = new BigDecimal(Math.abs(v)).round(new MathContext(12, RoundingMode.HALF_EVEN));
         return d.precision() - d.scale() - 1;
     }
 

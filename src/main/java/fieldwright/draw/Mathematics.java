@@ -1,35 +1,53 @@
 package fieldwright.draw;
 
-import java.awt.Color;
 import java.awt.Graphics2D;
+import java.awt.geom.AffineTransform;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
-import org.scilab.forge.jlatexmath.ParseException;
+import org.scilab.forge.jlatexmath.Box;
 import org.scilab.forge.jlatexmath.TeXConstants;
 import org.scilab.forge.jlatexmath.TeXFormula;
-import org.scilab.forge.jlatexmath.TeXIcon;
 
 /**
- * A typeset formula. Wider than its column, it is broken before a relation or an operator; what cannot be broken is
- * scaled down, to no less than half; a formula that cannot be read as LaTeX stands as its plain text, in the colour of
- * a fault, never as nothing.
+ * A typeset formula. Wider than its column, it is broken before relations, and where that does not suffice before the
+ * operators of a sum; what is still too wide is scaled down, to no less than half. A formula that cannot be read as
+ * LaTeX stands as its plain text, in the colour of a fault, never as nothing.
  */
 public final class Mathematics implements Picture {
     private static final double SMALLEST = 0.5;
     private static final int KEPT = 400;
-    private static final float GAP_BETWEEN_LINES = 0.5f;   // ex, in the formula's own size
+    private static final double INDENT = 1.5;       // of a line that goes on, in letter heights
+    private static final double LEFT_SIDE = 0.3;    // of the column: a wider left side is not hung under
+    private static final double LEADING = 0.35;
 
-    private final TeXIcon icon;
+    /** One line as set: where its left end and the line it stands on are. The box measures in letter heights. */
+    private record Line(Box box, double size, double x, double baseline) {
+        static Line of(String latex, double size, double x) {
+            Box box = new TeXFormula(latex).new TeXIconBuilder()
+                    .setStyle(TeXConstants.STYLE_DISPLAY).setSize((float) size).setTrueValues(true).build().getBox();
+            return new Line(box, size, x, box.getHeight() * size);
+        }
+
+        double width() {
+            return box.getWidth() * size;
+        }
+
+        double depth() {
+            return box.getDepth() * size;
+        }
+    }
+
+    private final List<Line> lines;
     private final String words;
     private final double scale;
-    private final Color ink;
     private final boolean readable;
 
-    private Mathematics(TeXIcon icon, String words, double scale, Color ink, boolean readable) {
-        this.icon = icon;
+    private Mathematics(List<Line> lines, String words, double maxWidth, boolean readable) {
+        this.lines = lines;
         this.words = words;
-        this.scale = scale;
-        this.ink = ink;
+        this.scale = Math.max(SMALLEST, Math.min(1, maxWidth / Math.max(1, fullWidth())));
         this.readable = readable;
     }
 
@@ -48,35 +66,82 @@ public final class Mathematics implements Picture {
      * @param maxWidth column width, 1/96 inch; infinite for as wide as it comes
      */
     public static synchronized Mathematics of(String latex, String words, double size, double maxWidth) {
-        return SET.computeIfAbsent(size + " " + maxWidth + " " + latex, k -> set(latex, words, size, maxWidth));
+        String key = size + " " + maxWidth + " " + latex;
+        Mathematics known = SET.get(key);
+        if (known == null) {
+            known = set(latex, words, size, maxWidth);
+            SET.put(key, known);
+        }
+        return known;
     }
 
     private static Mathematics set(String latex, String words, double size, double maxWidth) {
         try {
-            TeXIcon icon = icon(latex, size, Double.POSITIVE_INFINITY);
-            if (icon.getTrueIconWidth() > maxWidth) {
-                icon = icon(latex, size, maxWidth);
+            Breaks.requireClosedBraces(latex);
+            return new Mathematics(broken(spaced(latex), size, maxWidth), words, maxWidth, true);
+        } catch (RuntimeException e) {
+            // The typesetter throws several kinds on text that is not LaTeX; the formula itself must still be read.
+            return new Mathematics(List.of(Line.of("\\text{" + escaped(words) + "}", size, 0)), words, maxWidth, false);
+        }
+    }
+
+    /** The typesetter leaves no gap between the columns of a case distinction. */
+    private static String spaced(String latex) {
+        return latex.contains("{cases}") ? latex.replace("&", "&\\quad ") : latex;
+    }
+
+    private static List<Line> broken(String latex, double size, double maxWidth) {
+        Line whole = Line.of(latex, size, 0);
+        if (whole.width() <= maxWidth) {
+            return List.of(whole);
+        }
+        List<Breaks.Part> parts = Breaks.parts(latex);
+        double left = parts.size() > 1 ? Line.of(parts.get(0).latex(), size, 0).width() : 0;
+        boolean hangs = left < LEFT_SIDE * maxWidth;
+        double indent = hangs ? left : INDENT * size;
+        List<Line> lines = new ArrayList<>();
+        for (String chain : filled(parts, Breaks.Rank.RELATION, hangs, size, maxWidth, indent)) {
+            double start = lines.isEmpty() ? 0 : indent;
+            for (String sum : filled(Breaks.parts(chain), Breaks.Rank.SUM, false, size, maxWidth - start, INDENT * size)) {
+                lines.add(Line.of(sum, size, start));
+                start = (lines.size() == 1 ? 0 : start) + INDENT * size;
             }
-            return fitted(icon, words, maxWidth, Ink.INK, true);
-        } catch (ParseException | IllegalArgumentException | IndexOutOfBoundsException | NullPointerException e) {
-            // The typesetter throws all of these on text that is not LaTeX; the formula itself must still be read.
-            return fitted(icon("\\text{" + escaped(words) + "}", size, maxWidth), words, maxWidth, Ink.BAD, false);
         }
+        return stacked(lines, size);
     }
 
-    private static Mathematics fitted(TeXIcon icon, String words, double maxWidth, Color ink, boolean readable) {
-        double scale = Math.max(SMALLEST, Math.min(1, maxWidth / Math.max(1, icon.getTrueIconWidth())));
-        return new Mathematics(icon, words, scale, ink, readable);
+    /**
+     * As many parts on a line as fit, broken only before places of the rank; further lines have less room by the indent.
+     *
+     * @param keepFirst a short left side stays with its relation, so that those below can stand under it
+     */
+    private static List<String> filled(List<Breaks.Part> parts, Breaks.Rank rank, boolean keepFirst, double size, double maxWidth,
+            double indent) {
+        List<String> lines = new ArrayList<>();
+        String line = "";
+        boolean kept = !keepFirst;
+        for (Breaks.Part part : parts) {
+            double room = maxWidth - (lines.isEmpty() ? 0 : indent);
+            boolean mayBreak = part.before() == rank && kept;
+            if (mayBreak && Line.of(line + part.latex(), size, 0).width() > room) {
+                lines.add(line);
+                line = "";
+            }
+            kept |= part.before() == rank;
+            line += part.latex();
+        }
+        lines.add(line);
+        return lines;
     }
 
-    private static TeXIcon icon(String latex, double size, double maxWidth) {
-        TeXFormula.TeXIconBuilder builder = new TeXFormula(latex).new TeXIconBuilder()
-                .setStyle(TeXConstants.STYLE_DISPLAY).setSize((float) size).setTrueValues(true);
-        if (Double.isFinite(maxWidth)) {
-            builder.setWidth(TeXConstants.UNIT_PIXEL, (float) maxWidth, TeXConstants.ALIGN_LEFT).setIsMaxWidth(true)
-                    .setInterLineSpacing(TeXConstants.UNIT_EX, GAP_BETWEEN_LINES);
+    private static List<Line> stacked(List<Line> lines, double size) {
+        List<Line> stacked = new ArrayList<>();
+        double top = 0;
+        for (Line line : lines) {
+            stacked.add(new Line(line.box, size, line.x, top + line.baseline));
+            top += line.baseline + line.depth() + LEADING * size;
         }
-        return builder.build();
+        return List.copyOf(stacked);
     }
 
     private static String escaped(String words) {
@@ -88,19 +153,29 @@ public final class Mathematics implements Picture {
         return readable;
     }
 
+    /** On how many lines it stands. */
+    public int lineCount() {
+        return lines.size();
+    }
+
+    private double fullWidth() {
+        return lines.stream().mapToDouble(l -> l.x + l.width()).max().orElse(0);
+    }
+
     @Override
     public double width() {
-        return icon.getTrueIconWidth() * scale;
+        return fullWidth() * scale;
     }
 
     @Override
     public double height() {
-        return (icon.getTrueIconHeight() + icon.getTrueIconDepth()) * scale;
+        Line last = lines.get(lines.size() - 1);
+        return (last.baseline + last.depth()) * scale;
     }
 
     @Override
     public double baseline() {
-        return icon.getTrueIconHeight() * scale;
+        return lines.get(0).baseline * scale;
     }
 
     @Override
@@ -110,11 +185,17 @@ public final class Mathematics implements Picture {
 
     @Override
     public void paint(Graphics2D g) {
-        var before = g.getTransform();
+        AffineTransform before = g.getTransform();
         g.scale(scale, scale);
-        icon.setForeground(ink);
+        g.setColor(readable ? Ink.INK : Ink.BAD);
         synchronized (Mathematics.class) {
-            icon.paintIcon(null, g, 0, 0);
+            for (Line line : lines) {
+                AffineTransform page = g.getTransform();
+                g.translate(line.x, line.baseline);
+                g.scale(line.size, line.size);
+                line.box.draw(g, 0, 0);
+                g.setTransform(page);
+            }
         }
         g.setTransform(before);
     }

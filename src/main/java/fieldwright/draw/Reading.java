@@ -1,0 +1,87 @@
+package fieldwright.draw;
+
+import fieldwright.output.Display;
+import fieldwright.output.Status;
+import fieldwright.output.Value;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.stream.Stream;
+
+/**
+ * One number of a value as a reader sees it.
+ *
+ * @param part   which part of the value it is: {@code x}, {@code on side +z, x}; empty for a number that is the whole
+ * @param figure digits and unit, {@code 59.9 µC}; {@code unbounded} when there is none
+ * @param doubt  tolerance and numerical error; empty when unbounded
+ * @param status whether it may be relied on
+ * @param reason why not; empty when it may
+ */
+public record Reading(String part, String figure, String doubt, Status status, String reason) {
+
+    /** All numbers of a value. The parts of a vector share one unit. */
+    public static List<Reading> of(Value value) {
+        Scale scale = scale(value);
+        List<Reading> readings = new ArrayList<>();
+        collect(value, "", scale, readings);
+        return List.copyOf(readings);
+    }
+
+    /** One number in the unit chosen on the sheet, or in SI with a fitting prefix. */
+    public static Reading of(Value.Scalar value) {
+        return read("", value, scale(value));
+    }
+
+    private static void collect(Value value, String part, Scale scale, List<Reading> readings) {
+        if (value instanceof Value.Scalar scalar) {
+            readings.add(read(part, scalar, scale));
+        } else if (value instanceof Value.Triple triple) {
+            String before = part.isEmpty() ? "" : part + ", ";
+            readings.add(read(before + "x", triple.x(), scale));
+            readings.add(read(before + "y", triple.y(), scale));
+            readings.add(read(before + "z", triple.z(), scale));
+        } else if (value instanceof Value.Sides sides) {
+            collect(sides.plus(), "side " + minus(sides.plusSide()), scale, readings);
+            collect(sides.minus(), "side " + minus(sides.minusSide()), scale, readings);
+        } else {
+            throw new IllegalArgumentException("a value of kind " + value.getClass().getSimpleName() + " cannot be shown.");
+        }
+    }
+
+    private static String minus(String side) {
+        return side.replace('-', '−');
+    }
+
+    private static Reading read(String part, Value.Scalar s, Scale scale) {
+        if (s.status() == Status.UNBOUNDED) {
+            String sign = s.value() < 0 ? "unbounded, towards −∞" : "unbounded";
+            return new Reading(part, sign, "", s.status(), s.reason());
+        }
+        if (Double.isNaN(s.value())) {
+            return new Reading(part, "no number", "", s.status(), s.reason());
+        }
+        return new Reading(part, Figures.value(s.value(), s.tolerance(), s.numericalError(), scale),
+                Figures.doubt(s.tolerance(), s.numericalError(), scale, s.unit()), s.status(), s.reason());
+    }
+
+    /** The unit chosen on the sheet; where SI stands, SI with the prefix that fits the largest part. */
+    private static Scale scale(Value value) {
+        Display shown = value.shown();
+        boolean si = shown.factor() == 1 && shown.unit().equals(value.unit());
+        return si ? Scale.fitting(largest(value), value.unit()) : new Scale(shown.unit(), shown.factor());
+    }
+
+    private static double largest(Value value) {
+        return numbers(value).map(Value.Scalar::value).filter(Double::isFinite).mapToDouble(Math::abs).max().orElse(0);
+    }
+
+    private static Stream<Value.Scalar> numbers(Value value) {
+        if (value instanceof Value.Scalar scalar) {
+            return Stream.of(scalar);
+        }
+        if (value instanceof Value.Triple triple) {
+            return Stream.of(triple.x(), triple.y(), triple.z());
+        }
+        Value.Sides sides = (Value.Sides) value;
+        return Stream.concat(numbers(sides.plus()), numbers(sides.minus()));
+    }
+}

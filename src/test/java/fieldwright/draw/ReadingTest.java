@@ -1,0 +1,44 @@
+package fieldwright.draw;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+
+import fieldwright.output.Display;
+import fieldwright.output.Status;
+import fieldwright.output.Value;
+import java.util.List;
+import org.junit.jupiter.api.Test;
+
+class ReadingTest {
+    private static Value.Scalar scalar(double v) {
+        return Value.Scalar.of(v, 1e-9, "V/m");
+    }
+
+    @Test
+    void theUnitChosenOnTheSheetStands() {
+        Value.Scalar inVolts = Value.Scalar.of(276969, 1e-4, "V/m").withDisplay(new Display("V/mm", 1e3));
+        assertEquals("276.969\u00a0V/mm", Reading.of(inVolts).figure());
+    }
+
+    @Test
+    void theComponentsOfAVectorShareTheUnitOfTheLargest() {
+        List<Reading> parts = Reading.of(new Value.Triple(scalar(12), scalar(0), scalar(-45600), null));
+        assertEquals(List.of("x", "y", "z"), parts.stream().map(Reading::part).toList());
+        assertEquals(List.of("0.0120000\u00a0kV/m", "0\u00a0kV/m", "−45.6000\u00a0kV/m"), parts.stream().map(Reading::figure).toList());
+    }
+
+    @Test
+    void aPairNamesItsSides() {
+        Value.Triple up = new Value.Triple(scalar(0), scalar(0), scalar(1), null);
+        List<Reading> parts = Reading.of(new Value.Sides("+z", up, "-z", up));
+        assertEquals(List.of("side +z, x", "side +z, y", "side +z, z", "side −z, x", "side −z, y", "side −z, z"),
+                parts.stream().map(Reading::part).toList());
+    }
+
+    @Test
+    void unboundedAndNoNumberAreSaidWithTheirReason() {
+        Value.Scalar unbounded = new Value.Scalar(Double.NaN, null, null, "V/m", null, Status.UNBOUNDED, "on the rim of 'film'");
+        assertEquals(new Reading("", "unbounded", "", Status.UNBOUNDED, "on the rim of 'film'"), Reading.of(unbounded));
+        Value.Scalar none = new Value.Scalar(Double.NaN, null, null, "V/m", null, Status.NOT_CONVERGED, "stopped at 20000");
+        assertEquals("no number", Reading.of(none).figure());
+    }
+}
