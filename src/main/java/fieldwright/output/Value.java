@@ -42,8 +42,8 @@ public sealed interface Value extends Serializable {
             requireBound("tolerance", tolerance);
         }
 
-        /** A converged number, shown in SI, its tolerance not established. */
-        public static Scalar of(double value, double numericalError, String unit) {
+        /** A converged number, shown in SI, its tolerance not established; a numerical error of null was not carried. */
+        public static Scalar of(double value, Double numericalError, String unit) {
             return new Scalar(value, numericalError, null, unit, null, Status.CONVERGED, "");
         }
 
@@ -75,7 +75,7 @@ public sealed interface Value extends Serializable {
     }
 
     /**
-     * A vector by its Cartesian components.
+     * A vector by its Cartesian components, all shown in the unit of the first.
      *
      * @param place where it was asked for; null when it belongs to no place (a dipole moment, a force)
      */
@@ -86,6 +86,8 @@ public sealed interface Value extends Serializable {
                 throw new IllegalArgumentException("components in " + x.unit() + ", " + y.unit() + ", " + z.unit()
                         + ": a vector has one unit.");
             }
+            y = y.withDisplay(x.shown());
+            z = z.withDisplay(x.shown());
         }
 
         @Override
@@ -128,6 +130,10 @@ public sealed interface Value extends Serializable {
             if (!plus.unit().equals(minus.unit())) {
                 throw new IllegalArgumentException("sides in " + plus.unit() + " and " + minus.unit() + ": a pair has one unit.");
             }
+            if (!Objects.equals(plus.place(), minus.place())) {
+                throw new IllegalArgumentException("sides at " + plus.place() + " and " + minus.place() + ": a pair has one place.");
+            }
+            minus = minus.withDisplay(plus.shown());
         }
 
         @Override
