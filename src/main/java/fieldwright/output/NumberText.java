@@ -26,41 +26,15 @@ public final class NumberText {
 
     /** The number rounded to so many significant digits, trailing zeros dropped. */
     public static String rounded(double value, int digits) {
-        BigDecimal number = roundedNumber(value, digits).stripTrailingZeros();
-        return number.signum() == 0 ? zero(value) : write(number);
-    }
-
-    /** The number rounded to so many significant digits, trailing zeros kept: {@code 1.80}. */
-    public static String padded(double value, int digits) {
-        BigDecimal number = roundedNumber(value, digits);
-        if (number.signum() == 0) {
-            return zero(value);
-        }
-        return write(number.setScale(digits - 1 - exponent(number), RoundingMode.HALF_EVEN));
-    }
-
-    private static BigDecimal roundedNumber(double value, int digits) {
         if (!Double.isFinite(value)) {
             throw new IllegalArgumentException(value + " is not a number that can be written. Ask for its status first.");
         }
-        return new BigDecimal(value).round(new MathContext(digits, RoundingMode.HALF_EVEN));
-    }
-
-    private static String zero(double value) {
-        return 1 / value < 0 ? "-0" : "0";
-    }
-
-    /** Power of ten of the leading digit. */
-    private static int exponent(BigDecimal number) {
-        return number.precision() - number.scale() - 1;
-    }
-
-    private static String write(BigDecimal number) {
-        int exponent = exponent(number);
-        if (exponent >= -3 && exponent < 7) {
-            return number.toPlainString();
+        if (value == 0) {
+            return 1 / value < 0 ? "-0" : "0";
         }
-        BigDecimal mantissa = number.movePointLeft(exponent);
-        return mantissa.toPlainString() + "e" + exponent;
+        BigDecimal number = new BigDecimal(value).round(new MathContext(digits, RoundingMode.HALF_EVEN)).stripTrailingZeros();
+        int exponent = number.precision() - number.scale() - 1;
+        boolean plain = exponent >= -3 && exponent < 7;
+        return plain ? number.toPlainString() : number.movePointLeft(exponent).toPlainString() + "e" + exponent;
     }
 }

@@ -43,7 +43,7 @@ public final class Cell {
     /** A new cell, to be inserted into a sheet. */
     public static Cell of(Kind kind, String label, String source) {
         String cleanLabel = label == null ? "" : label.strip();
-        if (Line.split(cleanLabel).size() > 1) {
+        if (!Line.isOne(cleanLabel)) {
             throw new IllegalArgumentException("label '" + cleanLabel + "': it must stand on one line.");
         }
         return new Cell(kind, cleanLabel, new Line(headText(kind, cleanLabel), "\n"), List.of(), 0).withSource(source, "\n");
@@ -124,8 +124,11 @@ public final class Cell {
     }
 
     Cell withSource(String newSource, String end) {
+        if (newSource.equals(source)) {
+            return this;
+        }
         List<Line> newBody = new ArrayList<>();
-        for (Line line : Line.split(newSource)) {
+        for (Line line : Line.split(newSource.replace("\r\n", "\n").replace('\r', '\n'))) {
             newBody.add(Line.ofSource(line.text(), end));
         }
         while (!newBody.isEmpty() && newBody.get(newBody.size() - 1).isBlank()) {

@@ -49,7 +49,7 @@ public final class Header {
     }
 
     Header with(String name, String value, String end) {
-        if (!isField(name + ":") || !value.equals(value.strip()) || Line.split(value).size() > 1) {
+        if (!isField(name + ":") || !value.equals(value.strip()) || !Line.isOne(value)) {
             throw new IllegalArgumentException("header line '" + name + ": " + value + "': a name of letters, and a value on one line.");
         }
         Line changed = new Line(value.isEmpty() ? name + ":" : name + ": " + value, end);

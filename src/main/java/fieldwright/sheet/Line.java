@@ -3,7 +3,7 @@ package fieldwright.sheet;
 import java.util.ArrayList;
 import java.util.List;
 
-/** One line of the file: its text and the characters that end it ({@code \n}, {@code \r\n} or {@code \r}). */
+/** One line of the file: its text and the characters that end it, {@code \n} or {@code \r\n}. */
 record Line(String text, String end) {
 
     /** Splits a text into lines. The last line has an empty end when the text does not end with a line end. */
@@ -11,18 +11,18 @@ record Line(String text, String end) {
         List<Line> lines = new ArrayList<>();
         int start = 0;
         while (start < text.length()) {
-            int stop = start;
-            while (stop < text.length() && text.charAt(stop) != '\n' && text.charAt(stop) != '\r') {
-                stop++;
-            }
-            int next = stop;
-            if (next < text.length()) {
-                next += text.startsWith("\r\n", stop) ? 2 : 1;
-            }
+            int feed = text.indexOf('\n', start);
+            int next = feed < 0 ? text.length() : feed + 1;
+            int stop = feed < 0 ? next : feed > start && text.charAt(feed - 1) == '\r' ? feed - 1 : feed;
             lines.add(new Line(text.substring(start, stop), text.substring(stop, next)));
             start = next;
         }
         return lines;
+    }
+
+    /** True when a text stands on one line, in the eyes of every reader. */
+    static boolean isOne(String text) {
+        return text.indexOf('\n') < 0 && text.indexOf('\r') < 0;
     }
 
     /** True when it belongs to the form, not to the source of a cell. */
