@@ -1,0 +1,121 @@
+package fieldwright.session.snippet;
+
+import fieldwright.quantity.UnknownNameException;
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Set;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import jdk.jshell.DeclarationSnippet;
+import jdk.jshell.Diag;
+import jdk.jshell.JShell;
+import jdk.jshell.Snippet;
+
+/** Turns what JShell says of a snippet into faults in the author's terms: offsets in the text as written, no inner names. */
+final class Faults {
+    private static final Pattern SYMBOL = Pattern.compile("symbol:\\s*(\\w+)\\s+([^\\n]+)");
+    private static final Pattern LOCATION = Pattern.compile("location:\\s*([^\\n]+)");
+    private static final Pattern OF_TYPE = Pattern.compile("(?:variable \\S+ of type|class|interface|record|enum)\\s+([\\w.$]+)");
+    private static final Pattern INNER = Pattern.compile("(?:REPL\\.)?\\$JShell\\$\\d+[A-Z]*\\.?");
+    private static final Pattern PACKAGES = Pattern.compile("\\b(?:fieldwright|java|javax)(?:\\.[a-z]\\w*)+\\.(?=[A-Z])");
+
+    private final JShell shell;
+    private final String source;
+    private final JavaText.Declared variable;
+    private final Map<String, Declaration> environment;
+    private final Collection<String> words;
+
+    /**
+     * @param variable the declared variable, which was compiled under a name with a {@code $} behind; or null
+     * @param words    names that can be used anywhere, to suggest one
+     */
+    Faults(JShell shell, String source, JavaText.Declared variable, Map<String, Declaration> environment,
+           Collection<String> words) {
+        this.shell = shell;
+        this.source = source;
+        this.variable = variable;
+        this.environment = environment;
+        this.words = words;
+    }
+
+    List<SnippetException.Fault> of(Snippet snippet) {
+        Set<SnippetException.Fault> faults = new LinkedHashSet<>();
+        shell.diagnostics(snippet).filter(Diag::isError)
+                .forEach(error -> faults.add(new SnippetException.Fault(offset(error), message(error))));
+        if (faults.isEmpty() && snippet instanceof DeclarationSnippet declaration) {
+            shell.unresolvedDependencies(declaration).forEach(missing -> faults.add(unresolved(missing)));
+        }
+        if (faults.isEmpty()) {
+            faults.add(new SnippetException.Fault(0, "this is not a complete Java statement or declaration."));
+        }
+        return new ArrayList<>(faults);
+    }
+
+    private int offset(Diag error) {
+        int offset = (int) Math.max(0, error.getPosition());
+        boolean shifted = variable != null && offset >= variable.end();
+        return Math.min(shifted ? offset - 1 : offset, Math.max(0, source.length() - 1));
+    }
+
+    private String message(Diag error) {
+        String text = error.getMessage(Locale.ROOT);
+        Matcher symbol = SYMBOL.matcher(text);
+        if (text.startsWith("cannot find symbol") && symbol.find()) {
+            return missing(symbol.group(1), symbol.group(2).strip(), text);
+        }
+        if (text.contains("reached end of file while parsing")) {
+            return "the statement does not end here: a ';', a bracket or a quote is missing.";
+        }
+        return clean(text) + ".";
+    }
+
+    /** {@code variable zz} or {@code method foo(int)}, missing in a method or class that otherwise compiles. */
+    private SnippetException.Fault unresolved(String missing) {
+        String[] parts = missing.split("\\s+", 2);
+        String name = parts.length > 1 ? parts[1].replaceAll("\\(.*", "") : missing;
+        Matcher place = Pattern.compile("\\b" + Pattern.quote(name) + "\\b").matcher(source);
+        return new SnippetException.Fault(place.find() ? place.start() : 0,
+                missing(parts.length > 1 ? parts[0] : "name", parts.length > 1 ? parts[1] : missing, ""));
+    }
+
+    private String missing(String kind, String symbol, String text) {
+        String name = symbol.replaceAll("\\(.*", "");
+        Matcher location = LOCATION.matcher(text);
+        Matcher type = OF_TYPE.matcher(location.find() ? location.group(1) : "");
+        if (type.find() && !clean(type.group(1)).isBlank()) {
+            return clean(type.group(1)) + " has no " + kind + " '" + clean(symbol) + "'." + suggestion(name, members(type.group(1)));
+        }
+        Set<String> names = new LinkedHashSet<>(environment.keySet());
+        names.addAll(words);
+        return "no " + kind + " '" + clean(symbol) + "'." + suggestion(name, names);
+    }
+
+    private static String suggestion(String name, Collection<String> names) {
+        String nearest = UnknownNameException.nearest(name, names);
+        return nearest == null || nearest.equals(name) ? "" : " Closest: '" + nearest + "'.";
+    }
+
+    private static Collection<String> members(String type) {
+        Set<String> members = new LinkedHashSet<>();
+        try {
+            for (var method : Class.forName(type, false, Faults.class.getClassLoader()).getMethods()) {
+                members.add(method.getName());
+            }
+        } catch (ClassNotFoundException | LinkageError e) {
+            return members;     // a class of the sheet itself: nothing to suggest
+        }
+        return members;
+    }
+
+    private String clean(String text) {
+        String cleaned = INNER.matcher(text).replaceAll("");
+        if (variable != null) {
+            cleaned = cleaned.replaceAll("\\b" + Pattern.quote(variable.name()) + "\\$_?", Matcher.quoteReplacement(variable.name()));
+        }
+        return PACKAGES.matcher(cleaned).replaceAll("").replaceAll("\\s*\\n\\s*", "; ").strip();
+    }
+}

@@ -1,0 +1,26 @@
+package fieldwright.session.snippet;
+
+import java.util.List;
+
+/** A piece of Java that does not compile. Says where in its text, and what is wrong, in the author's terms. */
+public final class SnippetException extends Exception {
+    private static final long serialVersionUID = 1L;
+
+    /** @param offset 0-based in the text of the snippet */
+    public record Fault(int offset, String message) implements java.io.Serializable { }
+
+    private final List<Fault> faults;
+
+    SnippetException(List<Fault> faults) {
+        super(faults.get(0).message());
+        this.faults = List.copyOf(faults);
+    }
+
+    SnippetException(int offset, String message) {
+        this(List.of(new Fault(offset, message)));
+    }
+
+    public List<Fault> faults() {
+        return faults;
+    }
+}
