@@ -7,12 +7,14 @@ import static fieldwright.field.closed.Rounding.EPS;
  *
  * <p>Source: the polyhedron forms of Wilton et al., IEEE Trans. Antennas Propag. 32 (1984) 276, and MacMillan, The Theory of the
  * Potential, 1930, on the homogeneous rectangular parallelepiped (from memory; the linear part derived anew by the divergence theorem): E = Σ n V over
- * the faces, V = ½ Σ h V over the faces, every face by its four sides and its solid angle. Beyond three half-diagonals a Gauss
- * rule on the kernel less the kernel at the middle.
+ * the faces, V = ½ Σ h V over the faces, every face by its four sides and its solid angle. Beyond three half-diagonals (two for a sloping density) a
+ * Gauss rule on the kernel less the kernel at the middle; a thin box from outside by a Gauss sum of sheets or rods.
  */
 public record Box(double x1, double x2, double y1, double y2, double z1, double z2, double density, double slopeX, double slopeY,
         double slopeZ) implements ClosedForm {
     private static final double FAR = 3;
+    /** The sums of a sloping density lose digits sooner. */
+    private static final double FAR_SLOPING = 2;
 
     public Box {
         requireSide("x", x1, x2);
@@ -50,16 +52,22 @@ public record Box(double x1, double x2, double y1, double y2, double z1, double 
         double dx = x - 0.5 * (x1 + x2);
         double dy = y - 0.5 * (y1 + y2);
         double dz = z - 0.5 * (z1 + z2);
-        boolean far = dx * dx + dy * dy + dz * dz > FAR * FAR * (ax * ax + ay * ay + az * az);
-        return far ? far(dx, dy, dz, ax, ay, az, placeError) : near(x, y, z, placeError);
+        double enough = slopeX == 0 && slopeY == 0 && slopeZ == 0 ? FAR : FAR_SLOPING;
+        boolean far = dx * dx + dy * dy + dz * dz > enough * enough * (ax * ax + ay * ay + az * az);
+        if (far) {
+            return far(dx, dy, dz, ax, ay, az, placeError);
+        }
+        Closed thin = ThinBox.at(this, x, y, z, placeError);
+        return thin != null ? thin : near(x, y, z, placeError);
     }
 
     private Closed near(double x, double y, double z, double placeError) {
         double[] from = {x1 - x, y1 - y, z1 - z};
         double[] to = {x2 - x, y2 - y, z2 - z};
+        double[] side = {x2 - x1, y2 - y1, z2 - z1};
         double[] slope = {slopeX, slopeY, slopeZ};
         double atPlace = density + slopeX * x + slopeY * y + slopeZ * z;
-        BoxSums sums = new BoxSums(from, to, slope, placeError);
+        BoxSums sums = new BoxSums(from, to, side, slope, placeError);
         double[] e = new double[3];
         double v = atPlace * sums.potential;
         for (int i = 0; i < 3; i++) {

@@ -8,6 +8,7 @@ import static fieldwright.field.closed.Rounding.EPS;
  */
 final class BoxSums {
     private final double[][] limit;
+    private final double[] side;
     private final double[] slope;
     private final double placeError;
     /** The twelve edges: first the axis they run along, then which end of the next axis, then of the one after. */
@@ -28,7 +29,8 @@ final class BoxSums {
     double fieldTerms;
     double potentialTerms;
 
-    BoxSums(double[] from, double[] to, double[] slope, double placeError) {
+    BoxSums(double[] from, double[] to, double[] side, double[] slope, double placeError) {
+        this.side = side;
         limit = new double[][] {{from[0], to[0]}, {from[1], to[1]}, {from[2], to[2]}};
         this.slope = slope;
         this.placeError = placeError;
@@ -49,6 +51,30 @@ final class BoxSums {
             addFace(axis, 0);
             addFace(axis, 1);
         }
+        double tide = tide();
+        errField += placeError * tide;
+        errPotential += placeError * (Math.abs(field[0]) + Math.abs(field[1]) + Math.abs(field[2]) + placeError * tide);
+    }
+
+    /**
+     * Bound on the gradient of the field: 2/R³ summed from outside; everywhere the solid angles (at most 4 pi together) and
+     * the alternating sums of the edges' logarithms, which are its elements across axes.
+     */
+    private double tide() {
+        double gap2 = 0;
+        double elements = 4 * Math.PI;
+        for (int axis = 0; axis < 3; axis++) {
+            double out = Math.max(0, Math.max(limit[axis][0], -limit[axis][1]));
+            gap2 += out * out;
+            Edge[][] e = edges[axis];
+            double nearest = 0;
+            for (int i = 0; i < 4; i++) {
+                Edge at = e[i >> 1][i & 1];
+                nearest += at.touched ? 2 * Math.log(4 * (at.s2 - at.s1) / Math.max(placeError, Double.MIN_NORMAL) + 4) : 0;
+            }
+            elements += 2 * (Math.abs(e[0][0].log - e[0][1].log - e[1][0].log + e[1][1].log) + nearest);
+        }
+        return Math.min(elements, 2 * Math.abs(potential) / gap2);
     }
 
     private Edge edge(int axis, int i, int j) {
@@ -56,7 +82,7 @@ final class BoxSums {
         double c = limit[(axis + 2) % 3][j];
         double s1 = limit[axis][0];
         double s2 = limit[axis][1];
-        return new Edge(s1, s2, s2 - s1, b * b + c * c, placeError);
+        return new Edge(s1, s2, side[axis], b * b + c * c, placeError);
     }
 
     private double cornerAt(int axis, int end, int i, int j) {
@@ -110,12 +136,12 @@ final class BoxSums {
         potential += 0.5 * h * face;
         moment[axis] += sign * square;
         weighted[axis] += sign * (sign * slope[axis] * h * face + slopeMoment);
-        errField += errFace;
+        errField += 4 * EPS * faceTerms;
         fieldTerms += faceTerms;
-        errPotential += 0.5 * (height * (errFace + EPS * faceTerms) + placeError * faceTerms);
+        errPotential += 3 * EPS * height * faceTerms;
         potentialTerms += 0.5 * height * faceTerms;
-        errWeighted += height * errFace + placeError * (faceTerms + 4 * reach) + 8 * EPS * (height * faceTerms + momentTerms);
-        errMoment += (8 * EPS * (reach * momentTerms + height * height * faceTerms) + height * height * errFace
+        errWeighted += height * errFace + placeError * (faceTerms + 4 * reach) + 3 * EPS * (height * faceTerms + momentTerms);
+        errMoment += (4 * EPS * (reach * momentTerms + height * height * faceTerms) + height * height * errFace
                 + placeError * (4 * momentTerms + 2 * height * faceTerms)) / 3;
     }
 }

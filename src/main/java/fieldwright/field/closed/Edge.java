@@ -19,7 +19,10 @@ final class Edge {
     /** The place is nearer to the edge than its own rounding. */
     final boolean touched;
 
-    /** @param touch distance from the edge below which the place counts as on it */
+    /**
+     * @param length s2 - s1, given apart because it is better known than the difference
+     * @param touch distance from the edge below which the place counts as on it
+     */
     Edge(double s1, double s2, double length, double d2, double touch) {
         this.s1 = s1;
         this.s2 = s2;
