@@ -25,7 +25,8 @@ public final class Bounds {
         return Math.nextUp(a * b);
     }
 
-    static double roundingOfSum(double a, double b, double sum) {
+    /** The rounding error of {@code sum}, which is {@code a + b} rounded; absolute. */
+    public static double roundingOfSum(double a, double b, double sum) {
         if (!Double.isFinite(sum)) {
             return 0;
         }
@@ -33,7 +34,8 @@ public final class Bounds {
         return Math.abs((a - (sum - bVirtual)) + (b - bVirtual));
     }
 
-    static double ofProduct(double a, double ea, double b, double eb, double product) {
+    /** Error of the product of a ± ea and b ± eb, {@code product} being a*b rounded. */
+    public static double ofProduct(double a, double ea, double b, double eb, double product) {
         double carried = sum(product(Math.abs(a), eb), product(Math.abs(b), ea), product(ea, eb));
         return sum(carried, roundingOfProduct(a, b, product));
     }
@@ -48,8 +50,8 @@ public final class Bounds {
         return Math.abs(Math.fma(a, b, -product));
     }
 
-    /** |a/b - true| <= (ea + |a/b| eb)/(|b| - eb) + rounding; infinite when b may be zero. */
-    static double ofQuotient(double a, double ea, double b, double eb, double quotient) {
+    /** Error of the quotient of a ± ea and b ± eb: |a/b - true| <= (ea + |a/b| eb)/(|b| - eb) + rounding; infinite when b may be zero. */
+    public static double ofQuotient(double a, double ea, double b, double eb, double quotient) {
         double rounding = Double.isFinite(quotient) && Math.fma(quotient, b, -a) != 0 || Math.abs(quotient) < 1e-280 && quotient != 0
             ? Math.ulp(quotient) : 0;
         if (Double.isNaN(ea + eb)) {
