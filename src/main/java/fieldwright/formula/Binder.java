@@ -80,7 +80,7 @@ final class Binder {
         }
         Node body = put(d.body(), parameters, values, at);
         Node condition = d.condition() == null ? null : put(d.condition(), parameters, values, at);
-        return new Node.Inlined(written, d.parameters(), arguments, condition, body, at);
+        return new Node.Inlined(written, d.condition() == null ? null : d.condition().text(), d.parameters(), arguments, condition, body, at);
     }
 
     private Node put(Formula f, Set<String> parameters, Map<String, Node> values, Node.At at) {

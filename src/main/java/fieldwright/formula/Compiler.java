@@ -172,7 +172,7 @@ final class Compiler {
     }
 
     private Program.Kernel guard(Node.Inlined f) {
-        FormulaException violated = new FormulaException(text, f.at().offset(), f.written() + " holds only for " + Printer.text(f.condition())
+        FormulaException violated = new FormulaException(text, f.at().offset(), f.written() + " holds only for " + f.holdsFor()
             + ", and it is asked for outside. Stay inside the condition or write a formula for this case.");
         return Kernels.notFolded((r, s, out, n) -> {
             for (int i = 0; i < n; i++) {

@@ -43,11 +43,11 @@ class FormulaTest {
 
     @ParameterizedTest(name = "{0}")
     @CsvSource(delimiter = ';', value = {
-        "2 x; 2; is not a unit", "2(x + 1); 1; brackets hold a unit", "R_s H; 4; without an operator", "(1 + 2; 0; not closed", "1 + ; 4; ends where",
+        "2 x; 2; is not a unit", "2(x + 1); 1; brackets hold a unit", "R_s H; 4; without an operator", "(1 + 2; 0; not closed", "1 + ; 3; ends where",
         "sin; 0; without arguments", "sin(1, 2); 0; Write sin(x)", "5 V/m; 2; round brackets: 5 (V/m)", "2 m^2; 2; round brackets", "a = b; 2; '='",
-        "1 < 2 + 3 < ; 12; ends where", "integral(x); 0; without limits", "integral(x, x: 0 to x); 12; depend on x itself",
+        "1 < 2 + 3 < ; 11; ends where", "integral(x); 0; without limits", "integral(x, x: 0 to x); 12; depend on x itself",
         "integral(x, x: 0 to y, y: 0 to x); 12; in a circle", "when(1, 2, 3); 5; comparison is expected", "1 + (a < b); 7; comparison stands where",
-        "2 ** 3; 2; '**'", "a ? b; 2; no meaning", "1..2; 1; decimal point", "'a, b'; 1; unexpected ','", "integral(x, x, 1); 13; colon", "x(3); 1; not a function"})
+        "2 ** 3; 2; '**'", "a ? b; 2; no meaning", "1..2; 2; decimal point", "'a, b'; 1; unexpected ','", "integral(x, x, 1); 13; colon", "x(3); 1; not a function"})
     void syntaxErrorsHaveAPlace(String text, int position, String part) {
         FormulaException e = assertThrows(FormulaException.class, () -> Formula.parse(text));
         assertTrue(e.getMessage().contains(part), e.getMessage());
@@ -57,7 +57,7 @@ class FormulaTest {
     @ParameterizedTest(name = "{0}")
     @CsvSource(delimiter = ';', value = {
         "H + 1 V; 2; a length (m) stands with a potential (V)", "sin(H); 4; argument of sin must be a plain number", "2^H; 2; exponent must be",
-        "H^k2; 1; ", "when(H < 1 V, 1, 2); 7; only like quantities compare", "when(1 < 2, H, 1 V); 17; both values",
+        "H^k2; 1; ", "when(H < 1 V, 1, 2); 7; only like quantities compare", "when(1 < 2, H, 1 V); 15; both values",
         "max(H, k); 0; arguments of max", "integral(rho, rho: 0 to 2); 24; the limits of 'rho'", "H^pi; 1; no simple fraction"})
     void unitErrorsHaveAPlace(String text, int position, String part) {
         scope.value("k2", 2, "");
@@ -86,8 +86,7 @@ class FormulaTest {
         assertEquals(2.1e-6 * 2 / Constants.EPS0, f.amount().si(), 1e-9);
         FormulaException outside = assertThrows(FormulaException.class, () -> Formula.parse("1 + E(2*H)/(1 V/1 m)").bind(scope).amount());
         assertEquals(4, outside.position());
-        assertTrue(outside.getMessage().contains("E(2*H) holds only for z <= H") || outside.getMessage().contains("E(2*H) holds only for 2*H <= H"),
-            outside.getMessage());
+        assertTrue(outside.getMessage().contains("E(2*H) holds only for z <= H"), outside.getMessage());
         FormulaException unit = assertThrows(FormulaException.class, () -> Formula.parse("E(k)").bind(scope).dimension(Map.of()));
         assertTrue(unit.getMessage().contains("argument 'z'"), unit.getMessage());
         Formula pieces = Formula.parse("when(z <= H, E(z), 0)").bind(scope);
