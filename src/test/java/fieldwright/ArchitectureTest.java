@@ -33,7 +33,7 @@ class ArchitectureTest {
                     "output", "words", "sheet")),
             Map.entry("draw", Set.of("output")),
             Map.entry("app", Set.of("output", "sheet", "session", "draw")),
-            Map.entry("cli", Set.of("output", "sheet", "session", "app")));
+            Map.entry("cli", Set.of("output", "sheet", "session", "draw", "app")));
     private static final Set<String> PICTURES = Set.of("app", "draw");
 
     private static JavaClasses classes;

@@ -1,10 +1,31 @@
 package fieldwright.cli;
 
+import fieldwright.output.RunOutcome;
+import fieldwright.sheet.Trust;
+import java.io.PrintWriter;
+import picocli.CommandLine;
+import picocli.CommandLine.Command;
+
 /** Entry point of the program. */
 public final class Main {
+
     private Main() { }
 
+    @Command(name = "fieldwright", description = "Worksheets for electric fields from charge.", mixinStandardHelpOptions = true,
+            version = "fieldwright 0.1.0", exitCodeOnInvalidInput = RunOutcome.WRONG_USE,
+            exitCodeOnExecutionException = RunOutcome.SHEET_ERROR)
+    static final class Root { }
+
     public static void main(String[] arguments) {
-        System.out.println("fieldwright");
+        System.exit(run(Terminal.real(), Trust.ofUser(), null, arguments));
+    }
+
+    /** Runs one command and gives its exit code. */
+    static int run(Terminal terminal, Trust trust, Engine engine, String... arguments) {
+        CommandLine commands = new CommandLine(new Root());
+        commands.addSubcommand(new RunCommand(terminal, trust, engine));
+        commands.setOut(new PrintWriter(terminal.out(), true));
+        commands.setErr(new PrintWriter(terminal.err(), true));
+        return commands.execute(arguments);
     }
 }

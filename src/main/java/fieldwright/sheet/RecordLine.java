@@ -38,6 +38,11 @@ public record RecordLine(String text, Output content, String trouble) {
         }
     }
 
+    /** True for what a record holds: results, checks, assessments. */
+    public static boolean isStored(Output output) {
+        return output instanceof Output.Result || output instanceof Output.Check || output instanceof Output.Assessment;
+    }
+
     public boolean isReadable() {
         return content != null;
     }
