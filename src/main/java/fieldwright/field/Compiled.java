@@ -1,0 +1,181 @@
+package fieldwright.field;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+
+import javax.measure.Dimension;
+
+import fieldwright.charge.Charge;
+import fieldwright.charge.PointCharge;
+import fieldwright.charge.Source;
+import fieldwright.charge.Sources;
+import fieldwright.formula.BlockFunction;
+import fieldwright.formula.Coordinates;
+import fieldwright.formula.Formula;
+import fieldwright.geometry.Chart;
+import fieldwright.geometry.CoordinateRegion;
+import fieldwright.geometry.CoordinateSystem;
+import fieldwright.geometry.Extent;
+import fieldwright.geometry.Frame;
+import fieldwright.geometry.NodeFunction;
+import fieldwright.geometry.PlacedRegion;
+import fieldwright.geometry.Region;
+import fieldwright.geometry.RegionParts;
+import fieldwright.integral.RegionIntegral;
+import fieldwright.quantity.AuthorException;
+import fieldwright.quantity.Units;
+
+/** A source with its formulas compiled: patches and point charges. */
+final class Compiled {
+    final List<Patch> patches = new ArrayList<>();
+    final List<PointCharge> points = new ArrayList<>();
+    final List<Charge> charges = new ArrayList<>();
+
+    static Compiled of(Source source) {
+        Compiled c = new Compiled();
+        c.add(source);
+        return c;
+    }
+
+    private void add(Source source) {
+        if (source instanceof Sources many) {
+            many.parts().forEach(this::add);
+        } else if (source instanceof PointCharge point) {
+            points.add(point);
+        } else if (source instanceof Charge charge) {
+            charges.add(charge);
+            add(charge.region(), charge.density(), charge.region().dimension(), Frame.OWN);
+        }
+    }
+
+    private void add(Region region, Formula density, int dimension, Frame frame) {
+        if (region instanceof PlacedRegion placed) {
+            add(placed.inner(), density, dimension, placed.frame().then(frame));
+        } else if (region instanceof RegionParts parts) {
+            parts.parts().forEach(p -> add(p, density, dimension, frame));
+        } else {
+            Kernel kernel = Kernel.POINT;
+            Region reduced = region;
+            if (region instanceof CoordinateRegion c) {
+                Reduction r = Reduction.of(c, density);
+                kernel = r.kernel;
+                reduced = r.region;
+            }
+            for (Region.PlacedChart part : reduced.charts()) {
+                Frame all = frame.isOwn() ? part.frame() : part.frame().then(frame);
+                patches.add(patch(part.chart(), all, density, dimension, kernel));
+            }
+        }
+    }
+
+    private static Patch patch(Chart chart, Frame frame, Formula density, int dimension, Kernel kernel) {
+        checkUnit(chart, density, dimension);
+        NodeFunction weight = NodeFunction.of(density, chart);
+        SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
+        double[][] breaks = RegionIntegral.breaks(chart, density);
+        return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks);
+    }
+
+    private static void checkUnit(Chart chart, Formula density, int dimension) {
+        Map<String, Dimension> known = new LinkedHashMap<>(Coordinates.DIMENSIONS);
+        for (String name : chart.coordinates()) {
+            known.putIfAbsent(name, chart.coordinateDimension(name));
+        }
+        if (density.variables().isEmpty() && density.fitsAnyUnit()) {
+            return;
+        }
+        Dimension found = density.dimension(known);
+        Dimension wanted = Charge.densityDimension(dimension);
+        if (!found.equals(wanted)) {
+            String kind = dimension == 1 ? "line" : dimension == 2 ? "surface" : "volume";
+            throw new AuthorException("density " + density.text() + " is " + Units.describe(found) + ", but the region has " + dimension
+                + (dimension == 1 ? " dimension" : " dimensions") + " and takes a " + kind + " density, " + Units.describe(wanted)
+                + ". Check the unit, or which coordinates have limits.");
+        }
+    }
+
+    /** Endless coordinates along which nothing changes, taken out of the region and into the kernel. */
+    private record Reduction(CoordinateRegion region, Kernel kernel) {
+        static Reduction of(CoordinateRegion region, Formula density) {
+            List<String> uniform = new ArrayList<>();
+            for (Map.Entry<String, Extent> e : region.extents().entrySet()) {
+                if (e.getValue() instanceof Extent.Limits limits && isAxis(region.system(), e.getKey())
+                    && (isInfinite(limits.from(), -1) || isInfinite(limits.to(), 1)) && isConstant(limits)
+                    && isUniform(region, density, e.getKey())) {
+                    uniform.add(e.getKey());
+                }
+            }
+            uniform.sort((a, b) -> Boolean.compare(isWhole(region, b), isWhole(region, a)));
+            if (uniform.isEmpty()) {
+                return new Reduction(region, Kernel.POINT);
+            }
+            String first = uniform.get(0);
+            int axis = "xyz".indexOf(first);
+            if (uniform.size() > 1 && isWhole(region, first) && isWhole(region, uniform.get(1))) {
+                int other = "xyz".indexOf(uniform.get(1));
+                return new Reduction(held(held(region, first), uniform.get(1)), Kernel.plane(3 - axis - other));
+            }
+            if (isWhole(region, first)) {
+                return new Reduction(held(region, first), Kernel.line(axis));
+            }
+            Extent.Limits limits = (Extent.Limits) region.extents().get(first);
+            boolean up = isInfinite(limits.to(), 1);
+            double end = number(up ? limits.from() : limits.to());
+            return new Reduction(held(region, first), Kernel.halfLine(axis, end, up ? 1 : -1));
+        }
+
+        private static boolean isAxis(CoordinateSystem system, String name) {
+            return system == CoordinateSystem.CARTESIAN || system == CoordinateSystem.CYLINDRICAL && name.equals("z");
+        }
+
+        private static boolean isConstant(Extent.Limits limits) {
+            return limits.variables().isEmpty();
+        }
+
+        private static boolean isInfinite(Formula f, int sign) {
+            return f.variables().isEmpty() && number(f) == sign * Double.POSITIVE_INFINITY;
+        }
+
+        private static double number(Formula f) {
+            BlockFunction b = f.compile(List.of());
+            double[] out = new double[1];
+            b.evaluate(new double[0][], 1, out);
+            return out[0];
+        }
+
+        private static boolean isWhole(CoordinateRegion region, String name) {
+            Extent.Limits limits = (Extent.Limits) region.extents().get(name);
+            return isInfinite(limits.from(), -1) && isInfinite(limits.to(), 1);
+        }
+
+        private static boolean isUniform(CoordinateRegion region, Formula density, String name) {
+            for (Extent e : region.extents().values()) {
+                if (e.variables().contains(name)) {
+                    return false;
+                }
+            }
+            Set<String> used = density.variables();
+            if (used.contains(name) || used.contains("r") || used.contains("theta")) {
+                return false;
+            }
+            return name.equals("z") || !used.contains("rho") && !used.contains("phi");
+        }
+
+        private static CoordinateRegion held(CoordinateRegion region, String name) {
+            Map<String, Extent> all = new LinkedHashMap<>(region.extents());
+            all.put(name, new Extent.Fixed(Formula.constant(fieldwright.quantity.Amount.si(0, 0, Units.LENGTH))));
+            return new CoordinateRegion(region.system(), all);
+        }
+    }
+
+    boolean hasEndlessKernel() {
+        return patches.stream().anyMatch(p -> p.kernel().isEndless());
+    }
+
+    boolean hasEndlessChart() {
+        return patches.stream().anyMatch(p -> p.chart().isEndless());
+    }
+}

@@ -1,0 +1,513 @@
+package fieldwright.field;
+
+import java.util.ArrayList;
+import java.util.List;
+
+import javax.measure.Dimension;
+
+import fieldwright.charge.Charge;
+import fieldwright.charge.PointCharge;
+import fieldwright.charge.Source;
+import fieldwright.charge.Surroundings;
+import fieldwright.formula.Constants;
+import fieldwright.geometry.Chart;
+import fieldwright.geometry.Nodes;
+import fieldwright.integral.Cubature;
+import fieldwright.integral.Estimate;
+import fieldwright.integral.RegionIntegral;
+import fieldwright.quantity.Amount;
+import fieldwright.quantity.AuthorException;
+import fieldwright.quantity.Place;
+import fieldwright.quantity.Standing;
+import fieldwright.quantity.Units;
+import fieldwright.quantity.Vector;
+
+/**
+ * Answers for one source: total charge (C), E (V/m), D (C/m²), V (V, zero at infinity or on the grounded conductor).
+ *
+ * <p>Any place is allowed. On a charged surface, a conductor or an interface the field is a pair of one-sided values; on an
+ * edge, a line or a point charge it is unbounded; inside a conductor it is zero. What was not reached within the accuracy says
+ * so in its standing, with value and error. Each answer depends on its own question only.
+ * Errors: AuthorException when the surroundings were not stated, for anything wrong in the region or the density, for charge behind
+ * or in a conductor, and for a potential that does not exist.
+ * Immutable but for scratch space: one thread at a time.
+ */
+public final class FieldSolver {
+    private final Source source;
+    private final Accuracy accuracy;
+    private final Compiled compiled;
+    private final Workspace space = new Workspace();
+    private boolean checked;
+    private int evaluations;
+
+    private FieldSolver(Source source, Accuracy accuracy) {
+        this.source = source;
+        this.accuracy = accuracy;
+        compiled = Compiled.of(source);
+    }
+
+    /** Compiles the source once for many questions. */
+    public static FieldSolver of(Source source, Accuracy accuracy) {
+        return new FieldSolver(source, accuracy);
+    }
+
+    public static Vector electricField(Source source, Place at, Accuracy accuracy) {
+        return of(source, accuracy).electricField(at);
+    }
+
+    public static Vector fluxDensity(Source source, Place at, Accuracy accuracy) {
+        return of(source, accuracy).fluxDensity(at);
+    }
+
+    public static Amount potential(Source source, Place at, Accuracy accuracy) {
+        return of(source, accuracy).potential(at);
+    }
+
+    public static Amount totalCharge(Source source, Accuracy accuracy) {
+        return of(source, accuracy).totalCharge();
+    }
+
+    /** Kernel evaluations of the last answer. */
+    public int evaluations() {
+        return evaluations;
+    }
+
+    // ---- total charge
+
+    /** Sum of all charge; needs no surroundings. Errors: AuthorException for endless uniform charge, which has no total. */
+    public Amount totalCharge() {
+        if (compiled.hasEndlessKernel()) {
+            throw new AuthorException("totalCharge of endless charge: it has no finite total. Give the region finite limits, or multiply the density by a length.");
+        }
+        Amount sum = Amount.si(0, 0, Units.CHARGE);
+        evaluations = 0;
+        for (Charge charge : compiled.charges) {
+            double floor = accuracy.absoluteFloor();
+            Estimate e = RegionIntegral.over(charge.region(), charge.density(), Math.max(1e-15, accuracy.relative() * 1e-4), floor, 200_000);
+            evaluations += e.evaluations();
+            double allowed = Math.max(floor, accuracy.relative() * Math.abs(e.value()));
+            if (e.status() == Estimate.Status.EVALUATION_LIMIT && e.errorEstimate() > allowed && accuracy.maxEvaluations() > 200_000) {
+                e = RegionIntegral.over(charge.region(), charge.density(), accuracy.relative(), floor, accuracy.maxEvaluations());
+                evaluations += e.evaluations();
+            }
+            Standing standing = Standing.CONVERGED;
+            if (e.status() == Estimate.Status.NOT_A_NUMBER) {
+                standing = Standing.notConverged("total charge: the density is not a number, or has no finite total, somewhere in the region");
+                e = new Estimate(Double.NaN, Double.POSITIVE_INFINITY, e.evaluations(), e.status());
+            } else if (!e.isConverged() && e.errorEstimate() > Math.max(allowed, 1e-13 * Math.abs(e.value()))) {
+                standing = notConverged("total charge", e.evaluations(), e.errorEstimate(), allowed, "C");
+            }
+            sum = sum.plus(Amount.si(e.value(), e.errorEstimate(), Units.CHARGE, standing));
+        }
+        for (PointCharge point : compiled.points) {
+            sum = sum.plus(point.charge());
+        }
+        return sum;
+    }
+
+    // ---- field
+
+    /** E in V/m. */
+    public Vector electricField(Place at) {
+        return field(at, false);
+    }
+
+    /** D in C/m². */
+    public Vector fluxDensity(Place at) {
+        return field(at, true);
+    }
+
+    private Vector field(Place at, boolean flux) {
+        Question q = Images.question(source.around(), at);
+        checkSurroundings();
+        evaluations = 0;
+        Dimension unit = flux ? Units.SURFACE_DENSITY : Units.FIELD;
+        double here = scale(q, flux, q.side() == null ? q.permittivityBehind() : q.permittivity());
+        if (q.isInsideConductor()) {
+            return zero(at, unit);
+        }
+        if (q.side() == null) {
+            return vector(at, q.probes(), here, unit);
+        }
+        Vector plus = vector(at, q.probes(), here, unit);
+        Vector minus = q.behind() == null ? zero(at, unit) : vector(at, q.behind(), scale(q, flux, q.permittivityBehind()), unit);
+        if (plus.isSided() || minus.isSided()) {
+            plus = plus.isSided() ? plus.onSide(q.side()[0], q.side()[1], q.side()[2]) : plus;
+            minus = minus.isSided() ? minus.onSide(-q.side()[0], -q.side()[1], -q.side()[2]) : minus;
+        }
+        if (plus.standing().kind() == Standing.Kind.UNBOUNDED) {
+            return plus;
+        }
+        return Vector.sided(at, q.side(), plus, minus);
+    }
+
+    /** From kernel units: 1/(4π eps0 eps_r), for D times the permittivity at the place. */
+    private static double scale(Question q, boolean flux, double local) {
+        return flux ? local / (4 * Math.PI * q.permittivity()) : 1 / (4 * Math.PI * Constants.EPS0 * q.permittivity());
+    }
+
+    private static Vector zero(Place at, Dimension unit) {
+        Amount nothing = Amount.si(0, 0, unit);
+        return Vector.of(at, nothing, nothing, nothing);
+    }
+
+    private Vector vector(Place at, List<Probe> probes, double scale, Dimension unit) {
+        Paver paver = new Paver(false, space);
+        double[] placeError = new double[3];
+        for (Probe probe : probes) {
+            points(probe, paver, placeError);
+            for (Patch patch : compiled.patches) {
+                paver.pave(patch, probe);
+            }
+        }
+        Contact contact = paver.contact;
+        if (contact.unboundedReason() != null) {
+            return Vector.unbounded(at, unit, contact.unboundedDirection(), contact.unboundedReason());
+        }
+        Cubature.Result r = integrate(paver, 3, true, scale);
+        double[] error = new double[3];
+        double size = 0;
+        double errorSize = 0;
+        for (int a = 0; a < 3; a++) {
+            size += r.value()[a] * r.value()[a];
+        }
+        size = Math.sqrt(size);
+        for (int a = 0; a < 3; a++) {
+            error[a] = r.error()[a] + placeError[a] + paver.roughness() * size + 8 * Sampler.EPS * Math.abs(r.value()[a]);
+            errorSize += error[a] * error[a];
+        }
+        Standing standing = standing("field", r, Math.sqrt(errorSize), size, norm(r.magnitude()), paver.roughness(), scale,
+            unit.equals(Units.FIELD) ? "V/m" : "C/m^2");
+        if (contact.isFolded()) {
+            standing = Standing.notConverged("two charged surfaces meet or cross here: the field has more than two values at this place");
+        }
+        double[] v = r.value();
+        if (!contact.isSided()) {
+            return make(at, v, error, null, 0, scale, unit, standing);
+        }
+        return Vector.sided(at, contact.normal(), make(at, v, error, contact.jump(), 0.5, scale, unit, standing),
+            make(at, v, error, contact.jump(), -0.5, scale, unit, standing));
+    }
+
+    private static double norm(double[] v) {
+        return Math.sqrt(v[0] * v[0] + v[1] * v[1] + v[2] * v[2]);
+    }
+
+    private static Vector make(Place at, double[] v, double[] error, double[] jump, double part, double scale, Dimension unit, Standing standing) {
+        Amount[] c = new Amount[3];
+        for (int a = 0; a < 3; a++) {
+            double step = jump == null ? 0 : part * jump[a];
+            double value = scale * (v[a] + step);
+            double e = scale * (error[a] + 4 * Sampler.EPS * Math.abs(step)) + 4 * Sampler.EPS * Math.abs(value);
+            c[a] = Amount.si(value, Double.isNaN(e) ? Double.POSITIVE_INFINITY : e, unit, standing);
+        }
+        return Vector.of(at, c[0], c[1], c[2]);
+    }
+
+    private void points(Probe probe, Paver paver, double[] placeError) {
+        for (PointCharge point : compiled.points) {
+            double q = point.charge().si();
+            if (q == 0) {
+                continue;
+            }
+            double[] at = Images.coordinates(point.at());
+            double[] d = new double[3];
+            double size = 0;
+            for (int a = 0; a < 3; a++) {
+                d[a] = at[a] - probe.place()[a];
+                size += Math.abs(at[a]) + Math.abs(probe.place()[a]);
+            }
+            double distance = norm(d);
+            if (!(distance > 4 * Sampler.EPS * size)) {
+                paver.contact.unbounded("on a point charge: the field grows without bound as 1 over the distance squared", null);
+                return;
+            }
+            double unit = q / distance / distance;
+            double relative = 8 * Sampler.EPS + 2 * Sampler.EPS * size / distance + point.charge().error() / Math.abs(q);
+            for (int a = 0; a < 3; a++) {
+                double sum = 0;
+                for (int k = 0; k < 3; k++) {
+                    sum -= probe.a()[3 * a + k] * (d[k] / distance) * unit;
+                }
+                double own = Math.abs(sum);
+                if (probe.b() != null) {
+                    double v = probe.b()[a] * q / distance;
+                    sum += v;
+                    own += Math.abs(v);
+                }
+                paver.start[a] += sum;
+                placeError[a] += relative * (own + Math.abs(unit) * 0.5);
+            }
+        }
+    }
+
+    // ---- potential
+
+    /**
+     * V, zero at infinity or on the grounded conductor.
+     * Errors: AuthorException when the charge is endless and has no such potential: use {@link #potential(Place, Place)}.
+     */
+    public Amount potential(Place at) {
+        Question q = Images.question(source.around(), at);
+        checkSurroundings();
+        evaluations = 0;
+        if (q.isInsideConductor()) {
+            return Amount.si(0, 0, Units.POTENTIAL);
+        }
+        if (q.side() != null && q.behind() == null) {
+            return Amount.si(0, 0, Units.POTENTIAL);
+        }
+        if (!q.isBalanced()) {
+            if (compiled.hasEndlessKernel()) {
+                throw endlessPotential();
+            }
+            if (compiled.hasEndlessChart() && !tailsConverge(at)) {
+                throw endlessPotential();
+            }
+        }
+        return potential(q.probes(), scale(q, false, 1));
+    }
+
+    private static AuthorException endlessPotential() {
+        return new AuthorException("potential of endless charge: it is not zero at infinity, so it has no value of its own. "
+            + "Name the place where it is zero: .potential(place) with zeroAt(place).");
+    }
+
+    /** V(at) − V(zero), for charge of any extent. */
+    public Amount potential(Place at, Place zero) {
+        Question here = Images.question(source.around(), at);
+        Question there = Images.question(source.around(), zero);
+        if (!compiled.hasEndlessKernel() && !compiled.hasEndlessChart() || here.isInsideConductor() || there.isInsideConductor()) {
+            return potential(at).minus(potential(zero));
+        }
+        checkSurroundings();
+        evaluations = 0;
+        double scale = scale(here, false, 1);
+        if (!compiled.hasEndlessChart() || here.isBalanced() && there.isBalanced()) {
+            List<Probe> all = new ArrayList<>(here.probes());
+            for (Probe p : there.probes()) {
+                all.add(new Probe(p.place(), p.a(), p.b(), -p.c()));
+            }
+            return potential(all, scale);
+        }
+        return alongPath(at, zero);
+    }
+
+    /** −∫ E·dl on the straight way from {@code zero}. */
+    private Amount alongPath(Place at, Place zero) {
+        double[] step = {at.x() - zero.x(), at.y() - zero.y(), at.z() - zero.z()};
+        int[] count = {0};
+        double[] worst = {0};
+        fieldwright.integral.Integrand f = new fieldwright.integral.Integrand() {
+            @Override
+            public int dimension() {
+                return 1;
+            }
+
+            @Override
+            public int components() {
+                return 1;
+            }
+
+            @Override
+            public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
+                for (int i = 0; i < n; i++) {
+                    double t = u[0][i];
+                    Vector e = electricField(new Place(zero.x() + t * step[0], zero.y() + t * step[1], zero.z() + t * step[2]));
+                    e = e.isSided() ? e.mean() : e;
+                    count[0] += evaluations;
+                    out[0][i] = -(e.x().si() * step[0] + e.y().si() * step[1] + e.z().si() * step[2]);
+                    noise[i] = Math.abs(e.x().error() * step[0]) + Math.abs(e.y().error() * step[1]) + Math.abs(e.z().error() * step[2]);
+                    worst[0] = e.standing().isConverged() ? worst[0] : 1;
+                }
+            }
+        };
+        Cubature.Result r = Cubature.integrate(List.of(Cubature.Piece.whole(f, 12)), 1, false,
+            new Cubature.Goal(accuracy.relative(), 1e-3, accuracy.absoluteFloor(), 3000), null);
+        evaluations = count[0];
+        Standing standing = r.isConverged() && worst[0] == 0 ? Standing.CONVERGED
+            : notConverged("potential difference", evaluations, r.error()[0], accuracy.relative() * Math.abs(r.value()[0]), "V");
+        return Amount.si(r.value()[0], r.error()[0], Units.POTENTIAL, standing);
+    }
+
+    private Amount potential(List<Probe> probes, double scale) {
+        Paver paver = new Paver(true, space);
+        double pointError = 0;
+        for (Probe probe : probes) {
+            for (PointCharge point : compiled.points) {
+                double[] at = Images.coordinates(point.at());
+                double[] d = new double[3];
+                double size = 0;
+                for (int a = 0; a < 3; a++) {
+                    d[a] = at[a] - probe.place()[a];
+                    size += Math.abs(at[a]) + Math.abs(probe.place()[a]);
+                }
+                double q = point.charge().si();
+                if (q != 0 && !(norm(d) > 4 * Sampler.EPS * size)) {
+                    paver.contact.unbounded("on a point charge: the potential grows without bound", null);
+                } else if (q != 0) {
+                    double v = probe.c() * q / norm(d);
+                    paver.start[0] += v;
+                    pointError += Math.abs(v) * (4 * Sampler.EPS + Sampler.EPS * size / norm(d) + point.charge().error() / Math.abs(q));
+                }
+            }
+            for (Patch patch : compiled.patches) {
+                paver.pave(patch, probe);
+            }
+        }
+        if (paver.contact.isUnboundedLine()) {
+            return Amount.si(Double.NaN, Double.POSITIVE_INFINITY, Units.POTENTIAL,
+                Standing.unbounded(paver.contact.unboundedReason().replace("field", "potential").replace(" as 1 over the distance", "")));
+        }
+        Cubature.Result r = integrate(paver, 1, false, scale);
+        double value = r.value()[0];
+        double error = r.error()[0] + pointError + 8 * Sampler.EPS * Math.abs(value) + paver.roughness() * Math.abs(value);
+        Standing standing = standing("potential", r, error, Math.abs(value), r.magnitude()[0], paver.roughness(), scale, "V");
+        double stated = scale * error;
+        return Amount.si(scale * value, Double.isNaN(stated) ? Double.POSITIVE_INFINITY : stated, Units.POTENTIAL, standing);
+    }
+
+    /** Whether the potential integral of mapped endless charge settles, from few evaluations. */
+    private boolean tailsConverge(Place at) {
+        Paver paver = new Paver(true, space);
+        for (Probe probe : Images.question(source.around(), at).probes()) {
+            for (Patch patch : compiled.patches) {
+                paver.pave(patch, probe);
+            }
+        }
+        Cubature.Result r = Cubature.integrate(paver.pieces, 1, false, new Cubature.Goal(1e-6, 0, 0, 150_000), paver.start);
+        return r.isConverged();
+    }
+
+    // ---- common
+
+    private Cubature.Result integrate(Paver paver, int components, boolean grouped, double scale) {
+        double relative = Math.max(0.5 * accuracy.relative(), 0.5 * paver.roughness());
+        Cubature.Goal goal = new Cubature.Goal(relative, 1e-3, accuracy.absoluteFloor() / Math.abs(scale), accuracy.maxEvaluations());
+        Cubature.Result r = Cubature.integrate(paver.pieces, components, grouped, goal, paver.start);
+        evaluations += r.evaluations();
+        return r;
+    }
+
+    private Standing standing(String what, Cubature.Result r, double error, double size, double magnitude, double roughness, double scale,
+        String unit) {
+        if (r.status() == Estimate.Status.NOT_A_NUMBER) {
+            return Standing.notConverged(what + ": a number came out that is none; the integral has no finite value here, or the density is infinite near by");
+        }
+        double relative = Math.max(accuracy.relative(), 4 * roughness);
+        double allowed = Math.max(accuracy.absoluteFloor() / Math.abs(scale), relative * Math.max(size, 1e-3 * magnitude));
+        if (r.isConverged() || error <= allowed) {
+            return Standing.CONVERGED;
+        }
+        return notConverged(what, r.evaluations(), scale * error, scale * allowed, unit);
+    }
+
+    private static Standing notConverged(String what, int evaluations, double error, double allowed, String unit) {
+        return Standing.notConverged(String.format(java.util.Locale.ROOT,
+            "%s: %d evaluations, estimated error %.2g %s > tolerance %.2g %s. Loosen the accuracy, or split the region where the density bends",
+            what, evaluations, error, unit, allowed, unit));
+    }
+
+    /** Charge must be on the right side of a conductor or interface; looked at on a grid of each part. */
+    private void checkSurroundings() {
+        Surroundings around = source.around();
+        if (checked || around instanceof Surroundings.FreeSpace || around instanceof Surroundings.Medium) {
+            return;
+        }
+        checked = true;
+        for (PointCharge point : compiled.points) {
+            double s = clearance(around, Images.coordinates(point.at()));
+            if (!(s > 0)) {
+                throw wrongSide(around, "a point charge", Images.coordinates(point.at()));
+            }
+        }
+        for (Patch patch : compiled.patches) {
+            check(around, patch);
+        }
+    }
+
+    private void check(Surroundings around, Patch patch) {
+        Chart chart = patch.chart();
+        int d = chart.dimension();
+        int side = d == 1 ? 65 : d == 2 ? 15 : 6;
+        int total = (int) Math.round(Math.pow(side, d));
+        double[] middle = new double[d];
+        java.util.Arrays.fill(middle, 0.5);
+        Chart.Anchor anchor = chart.anchor(middle);
+        Nodes nodes = space.nodes;
+        double[][] du = new double[3][1];
+        double most = Double.NEGATIVE_INFINITY;
+        for (int i = 0; i < total; i++) {
+            int rest = i;
+            for (int k = 0; k < d; k++) {
+                double u = (double) (rest % side) / (side - 1);
+                rest /= side;
+                u = chart.isEndless(k) ? Math.min(0.999, Math.max(0.001, u)) : u;
+                du[k][0] = u - 0.5;
+            }
+            chart.evaluate(anchor, du, 1, nodes);
+            double[] own = new double[3];
+            for (int a = 0; a < 3; a++) {
+                own[a] = anchor.position()[a] + nodes.offset[a][0];
+            }
+            double[] p = patch.frame().toSheet(own);
+            double s = clearance(around, p);
+            if (s < 0) {
+                throw wrongSide(around, "charge", p);
+            }
+            most = Math.max(most, s);
+        }
+        if (patch.kernel().isEndless() && across(around, patch)) {
+            throw new AuthorException("endless charge runs through the " + around.title() + ". Keep the charge on one side of it.");
+        }
+        if (!(most > 0)) {
+            throw new AuthorException("charge lies in the face of the " + around.title()
+                + ": its image cancels it. Move it off the face, or leave it out.");
+        }
+    }
+
+    private static boolean across(Surroundings around, Patch patch) {
+        double[] along = new double[3];
+        if (patch.kernel().kind == Kernel.Kind.PLANE) {
+            return !(around instanceof Surroundings.GroundPlane g) || Math.abs(patch.frame().directionToSheet(unit(patch.kernel().axis))["xyz".indexOf(g.axis())]) < 1 - 1e-12;
+        }
+        along[patch.kernel().axis] = 1;
+        double[] direction = patch.frame().directionToSheet(along);
+        String axis = around instanceof Surroundings.GroundPlane g ? g.axis() : around instanceof Surroundings.DielectricHalfSpace h ? h.axis() : null;
+        if (axis == null || patch.kernel().kind != Kernel.Kind.LINE) {
+            return false;
+        }
+        return Math.abs(direction["xyz".indexOf(axis)]) > 1e-12;
+    }
+
+    private static double[] unit(int axis) {
+        double[] v = new double[3];
+        v[axis] = 1;
+        return v;
+    }
+
+    /** Distance to the wall, positive on the allowed side, 0 within rounding. */
+    private static double clearance(Surroundings around, double[] p) {
+        if (around instanceof Surroundings.GroundPlane g) {
+            return loosely(Images.depth(g.axis(), g.offset(), g.side(), p), g.offset());
+        }
+        if (around instanceof Surroundings.DielectricHalfSpace h) {
+            return loosely(Images.depth(h.axis(), h.offset(), h.side(), p), h.offset());
+        }
+        if (around instanceof Surroundings.GroundedSphere s) {
+            double r = norm(new double[] {p[0] - s.x(), p[1] - s.y(), p[2] - s.z()});
+            return loosely(s.outside() ? r - s.radius() : s.radius() - r, s.radius());
+        }
+        return 1;
+    }
+
+    private static double loosely(double distance, double scale) {
+        return Math.abs(distance) <= 1e-12 * Math.abs(scale) ? 0 : distance;
+    }
+
+    private static AuthorException wrongSide(Surroundings around, String what, double[] p) {
+        return new AuthorException(String.format(java.util.Locale.ROOT,
+            "%s at (%.6g, %.6g, %.6g) m is behind or on the face of the %s. Move the charge to its own side, or turn the side round.",
+            what, p[0], p[1], p[2], around.title()));
+    }
+}

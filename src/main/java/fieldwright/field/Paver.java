@@ -1,0 +1,1042 @@
+package fieldwright.field;
+
+import java.util.ArrayList;
+import java.util.List;
+
+import fieldwright.geometry.Chart;
+import fieldwright.geometry.Nodes;
+import fieldwright.integral.Cubature.Piece;
+import fieldwright.integral.Integrand;
+import fieldwright.quantity.Stop;
+
+/**
+ * Cuts patches into pieces that suit a place. A box of parameters far from the place (against its own size) is integrated
+ * as it stands; a near one that is bent is halved; a near one that is nearly flat is cut into rays from its nearest point.
+ */
+final class Paver {
+    /** A box is far when the place is further from it than this many of its lengths. */
+    private static final double FAR = 0.6;
+    /** Tangents of a box that is cut into rays differ by less than this part of their own length. */
+    private static final double BENT = 0.8;
+    private static final int DEEPEST = 70;
+    /** Extent of one piece along sinh coordinates; the kernel's poles are at π/2 from the real axis. */
+    private static final double SPAN = 2.5;
+
+    final List<Piece> pieces = new ArrayList<>();
+    final double[] start;
+    final Contact contact = new Contact();
+    private final boolean potential;
+    private final Workspace space;
+    private double roughness;
+
+    /** Part of the answer that is lost to the rounding of the place itself: near lines, eps·size/gap. */
+    double roughness() {
+        return roughness;
+    }
+
+    Paver(boolean potential, Workspace space) {
+        this.potential = potential;
+        this.space = space;
+        start = new double[potential ? 1 : 3];
+    }
+
+    void pave(Patch patch, Probe probe) {
+        double[] own = patch.frame().toOwn(probe.place());
+        Chart chart = patch.chart().towards(own);
+        if (patch.weight().isConstant() && patch.weight().constant() == 0) {
+            return;
+        }
+        Sampler.Coulomb sampler = new Sampler.Coulomb(patch, probe, potential, space, chart);
+        if (patch.dimension() == 0) {
+            single(sampler);
+            return;
+        }
+        if (patch.dimension() == 3 && patch.inSpace() != null && patch.kernel() == Kernel.POINT && !chart.isEndless() && faces(patch, probe, chart, sampler)) {
+            return;
+        }
+        boxes(patch, chart, sampler);
+    }
+
+    /** An endless line or plane: the kernel itself is the answer. */
+    private void single(Sampler s) {
+        Chart.Anchor anchor = s.anchor();
+        double[] b = s.toAnchor(anchor);
+        double distance = norm(b);
+        Kernel kernel = s.patch.kernel();
+        double lift = lift(s);
+        if (!(Math.hypot(distance, lift) > touching(s, anchor))) {
+            double sigma = s.densityAt(anchor);
+            if (sigma == 0) {
+                return;
+            }
+            if (kernel.kind != Kernel.Kind.PLANE) {
+                contact.unbounded("on a line charge: the field grows without bound as 1 over the distance", null);
+                return;
+            }
+            if (!potential) {
+                double[] n = new double[3];
+                n[kernel.axis] = 1;
+                contact.surface(sigma, 1, s.mapped(n[0], n[1], n[2]), new double[3]);
+            }
+            return;
+        }
+        s.place(anchor, space.du, 0);
+        for (double[] du : space.du) {
+            du[0] = 0;
+        }
+        s.place(anchor, space.du, 1);
+        double[][] out = new double[3][1];
+        s.values(anchor, b, new double[] {1}, 1, out, new double[1]);
+        for (int c = 0; c < start.length; c++) {
+            start[c] += out[c][0];
+        }
+    }
+
+    /** Boxes between the breaks and, for endless coordinates, the tails beyond a few lengths, which are taken whole. */
+    private void boxes(Patch patch, Chart chart, Sampler sampler) {
+        int dims = chart.dimension();
+        double[][] cuts = new double[dims][];
+        boolean[][] tail = new boolean[dims][];
+        for (int k = 0; k < dims; k++) {
+            cuts[k] = patch.breaks()[k];
+            tail[k] = new boolean[cuts[k].length - 1];
+            if (chart.isEndless(k)) {
+                endlessCuts(chart, k, cuts, tail);
+            }
+        }
+        int[] index = new int[dims];
+        while (true) {
+            double[] from = new double[dims];
+            double[] to = new double[dims];
+            boolean isTail = false;
+            for (int k = 0; k < dims; k++) {
+                from[k] = cuts[k][index[k]];
+                to[k] = cuts[k][index[k] + 1];
+                isTail |= tail[k][index[k]];
+            }
+            if (isTail) {
+                addTail(sampler, from, to);
+            } else {
+                pave(sampler, from, to, 0);
+            }
+            int k = 0;
+            while (k < dims && ++index[k] == cuts[k].length - 1) {
+                index[k++] = 0;
+            }
+            if (k == dims) {
+                return;
+            }
+        }
+    }
+
+    private static void endlessCuts(Chart chart, int k, double[][] cuts, boolean[][] tail) {
+        double far = 8;
+        boolean down = chart.lower(k) == Double.NEGATIVE_INFINITY;
+        boolean up = chart.upper(k) == Double.POSITIVE_INFINITY;
+        if (down && up) {
+            double t = (Math.sqrt(1 + 4 * far * far) - 1) / (4 * far);
+            cuts[k] = new double[] {0, 0.5 - t, 0.5 + t, 1};
+            tail[k] = new boolean[] {true, false, true};
+        } else if (up) {
+            cuts[k] = new double[] {0, far / (1 + far), 1};
+            tail[k] = new boolean[] {false, true};
+        } else {
+            cuts[k] = new double[] {0, 1 / (1 + far), 1};
+            tail[k] = new boolean[] {true, false};
+        }
+    }
+
+    private void addTail(Sampler s, double[] from, double[] to) {
+        int dims = from.length;
+        int[] orders = new int[dims];
+        java.util.Arrays.fill(orders, dims == 3 ? 16 : 24);
+        pieces.add(Piece.whole(new Pieces.Box(s, from, to), orders));
+    }
+
+    private void pave(Sampler s, double[] from, double[] to, int depth) {
+        Stop.check();
+        switch (from.length) {
+            case 1 -> line(s, from[0], to[0], depth);
+            case 2 -> surface(s, from, to, depth);
+            default -> volume(s, from, to, depth);
+        }
+    }
+
+    // ---- common
+
+    private static double norm(double[] v) {
+        return Math.sqrt(v[0] * v[0] + v[1] * v[1] + v[2] * v[2]);
+    }
+
+    /** A distance below this cannot be told from zero. */
+    private static double touching(Sampler s, Chart.Anchor anchor) {
+        return 4 * Sampler.EPS * (norm(s.seen) + norm(anchor.position()));
+    }
+
+    /** For half-endless kernels: how far the place is beyond the end, which keeps it away from all sources. */
+    private static double lift(Sampler s) {
+        Kernel k = s.patch.kernel();
+        return k.kind == Kernel.Kind.HALF_LINE ? Math.max(0, k.sign * (k.end - s.target[k.axis])) : 0;
+    }
+
+    /** Gauss order for a pole at {@code distance} from an interval of length {@code length} (Bernstein ellipse), and for bends. */
+    private static int order(double distance, double length, double bend, int least) {
+        double delta = 2 * distance / Math.max(length, 1e-300);
+        double rho = delta + Math.sqrt(delta * delta + 1);
+        int n = (int) Math.ceil(13 / Math.log(rho)) + (int) Math.round(2.5 * bend);
+        return Math.max(least, Math.min(24, n));
+    }
+
+    private void split(Sampler s, double[] from, double[] to, int direction, int depth) {
+        double middle = (from[direction] + to[direction]) / 2;
+        double[] a = to.clone();
+        double[] b = from.clone();
+        a[direction] = middle;
+        b[direction] = middle;
+        pave(s, from, a, depth + 1);
+        pave(s, b, to, depth + 1);
+    }
+
+    /** Cuts [0, 1]² of a piece so that no part spans more than SPAN in sinh coordinates. */
+    private void add(Integrand f, double span0, double span1, int least0, int least1) {
+        int n0 = Math.max(1, (int) Math.ceil(span0 / SPAN));
+        int n1 = Math.max(1, (int) Math.ceil(span1 / SPAN));
+        int[] orders = {Math.max(least0, order(Math.PI / 2, span0 / n0, 0, 6)), Math.max(least1, order(Math.PI / 2, span1 / n1, 0, 6))};
+        for (int i = 0; i < n0; i++) {
+            for (int j = 0; j < n1; j++) {
+                pieces.add(new Piece(f, new double[] {(double) i / n0, (double) j / n1},
+                    new double[] {(i + 1.0) / n0, (j + 1.0) / n1}, orders));
+            }
+        }
+    }
+
+    // ---- lines
+
+    private static final double[] ALONG = {0, 0.23, 0.5, 0.71, 1};
+
+    private void line(Sampler s, double from, double to, int depth) {
+        Chart.Anchor middle = s.anchor((from + to) / 2);
+        double[] b = s.toAnchor(middle);
+        for (int i = 0; i < ALONG.length; i++) {
+            space.du[0][i] = from + (to - from) * ALONG[i] - (from + to) / 2;
+        }
+        Nodes nodes = s.place(middle, space.du, ALONG.length);
+        double length = 0;
+        double least = Double.POSITIVE_INFINITY;
+        int nearest = 0;
+        double bend = bend(s.tangent(0), ALONG.length);
+        for (int i = 0; i < ALONG.length; i++) {
+            double d = distance(nodes, b, i);
+            if (d < least) {
+                least = d;
+                nearest = i;
+            }
+            length += i == 0 ? 0 : step(nodes, i - 1, i);
+        }
+        if (!(length > 0)) {
+            return;
+        }
+        double lift = lift(s);
+        double distance = Math.hypot(Math.max(0, least - length / 8), lift);
+        if (Math.hypot(least, lift) > FAR * length && bend < 1.5) {
+            int n = order(distance, length, bend, 6);
+            pieces.add(Piece.whole(new Pieces.Box(s, new double[] {from}, new double[] {to}), n));
+            return;
+        }
+        if (bend > BENT && depth < DEEPEST) {
+            split(s, new double[] {from}, new double[] {to}, 0, depth);
+            return;
+        }
+        nearLine(s, from, to, from + (to - from) * ALONG[nearest], lift);
+    }
+
+    private void nearLine(Sampler s, double from, double to, double guess, double lift) {
+        double at = footOnLine(s, from, to, guess);
+        Chart.Anchor foot = s.anchor(at);
+        double[] b = s.toAnchor(foot);
+        for (double[] du : space.du) {
+            du[0] = 0;
+        }
+        s.place(foot, space.du, 1);
+        double[][] t = s.tangent(0);
+        double[] tangent = {t[0][0], t[1][0], t[2][0]};
+        double speed = norm(tangent);
+        if (s.patch.kernel().kind == Kernel.Kind.PLANE) {
+            layers(s, from, to, at);
+            return;
+        }
+        double height = Math.hypot(norm(b), lift);
+        double[] pole = null;
+        if (!s.patch.kernel().isEndless()) {
+            roughness = Math.max(roughness, (potential ? 0.1 : 1) * Sampler.EPS * (norm(s.seen) + norm(foot.position())) / height);
+        }
+        if (!(height > touching(s, foot))) {
+            height = 0;
+            double sigma = s.densityAt(foot);
+            if (!s.patch.kernel().isEndless()) {
+                contact.unbounded("on a line charge: the field grows without bound as 1 over the distance", null);
+                return;
+            }
+            if (!potential && sigma != 0) {
+                pole = onEndlessSheet(s, tangent, speed, sigma, to - at > 0, at - from > 0);
+                if (contact.unboundedReason() != null && contact.isUnboundedLine()) {
+                    return;
+                }
+            }
+        }
+        segment(s, at, to, speed, height, pole, 1);
+        segment(s, at, from, speed, height, pole, -1);
+    }
+
+    /** A stack of endless planes: the field of each jumps at itself, so the stack is cut at the place. */
+    private void layers(Sampler s, double from, double to, double at) {
+        if (at > from) {
+            pieces.add(Piece.whole(new Pieces.Box(s, new double[] {from}, new double[] {at}), 12));
+        }
+        if (at < to) {
+            pieces.add(Piece.whole(new Pieces.Box(s, new double[] {at}, new double[] {to}), 12));
+        }
+    }
+
+    private void segment(Sampler s, double at, double end, double speed, double height, double[] pole, int sign) {
+        if (end == at) {
+            return;
+        }
+        double length = Math.max(speed * Math.abs(end - at), 1e-300);
+        double[] own = null;
+        if (pole != null) {
+            own = new double[] {sign * pole[0], sign * pole[1], sign * pole[2]};
+            for (int c = 0; c < 3; c++) {
+                start[c] += own[c] * Math.log(length);
+            }
+        }
+        Pieces.Segment piece = new Pieces.Segment(s, at, end, length, height, own);
+        double span = piece.span();
+        int n = Math.max(1, (int) Math.ceil(span / SPAN));
+        int order = Math.max(10, order(Math.PI / 2, span / n, 0, 6));
+        for (int i = 0; i < n; i++) {
+            pieces.add(new Piece(piece, new double[] {(double) i / n}, new double[] {(i + 1.0) / n}, new int[] {order}));
+        }
+    }
+
+    /** A sheet that is endless along the kernel's axis, touched: its jump, and the 1/s coefficient of its field along the tangent. */
+    private double[] onEndlessSheet(Sampler s, double[] tangent, double speed, double sigma, boolean up, boolean down) {
+        Kernel k = s.patch.kernel();
+        double zeta = k.kind == Kernel.Kind.HALF_LINE ? k.sign * (k.end - s.target[k.axis]) : Double.NEGATIVE_INFINITY;
+        if (zeta >= 0) {
+            contact.unbounded("on an edge of a charged surface: the field grows without bound towards it", null);
+            return null;
+        }
+        double[] t = {tangent[0] / speed, tangent[1] / speed, tangent[2] / speed};
+        double[] axis = new double[3];
+        axis[k.axis] = 1;
+        double[] n = {t[1] * axis[2] - t[2] * axis[1], t[2] * axis[0] - t[0] * axis[2], t[0] * axis[1] - t[1] * axis[0]};
+        double ends = (up ? 1 : 0) - (down ? 1 : 0);
+        double share = (up ? 0.5 : 0) + (down ? 0.5 : 0);
+        double[] along = s.mapped(t[0], t[1], t[2]);
+        contact.surface(sigma, share, s.mapped(n[0], n[1], n[2]),
+            new double[] {2 * sigma * ends * along[0], 2 * sigma * ends * along[1], 2 * sigma * ends * along[2]});
+        return new double[] {-2 * sigma * along[0], -2 * sigma * along[1], -2 * sigma * along[2]};
+    }
+
+    private double footOnLine(Sampler s, double from, double to, double guess) {
+        double at = guess;
+        for (int step = 0; step < 30; step++) {
+            Chart.Anchor anchor = s.anchor(at);
+            double[] b = s.toAnchor(anchor);
+            for (double[] du : space.du) {
+                du[0] = 0;
+            }
+            s.place(anchor, space.du, 1);
+            double[][] t = s.tangent(0);
+            double square = t[0][0] * t[0][0] + t[1][0] * t[1][0] + t[2][0] * t[2][0];
+            double next = snap(at - (t[0][0] * b[0] + t[1][0] * b[1] + t[2][0] * b[2]) / square, from, to);
+            if (!(Math.abs(next - at) > 1e-15 * (to - from))) {
+                break;
+            }
+            at = next;
+        }
+        return at;
+    }
+
+    private static double snap(double u, double from, double to) {
+        double near = 1e-14 * (to - from);
+        return u < from + near ? from : u > to - near ? to : Double.isNaN(u) ? (from + to) / 2 : u;
+    }
+
+    private double distance(Nodes nodes, double[] b, int i) {
+        double x = b[0] + nodes.offset[0][i];
+        double y = b[1] + nodes.offset[1][i];
+        double z = b[2] + nodes.offset[2][i];
+        return Math.sqrt(x * x + y * y + z * z);
+    }
+
+    private static double step(Nodes nodes, int i, int j) {
+        double x = nodes.offset[0][i] - nodes.offset[0][j];
+        double y = nodes.offset[1][i] - nodes.offset[1][j];
+        double z = nodes.offset[2][i] - nodes.offset[2][j];
+        return Math.sqrt(x * x + y * y + z * z);
+    }
+
+    /** Largest difference between tangents against the largest tangent. */
+    private static double bend(double[][] t, int n) {
+        double largest = 0;
+        double difference = 0;
+        for (int i = 0; i < n; i++) {
+            largest = Math.max(largest, t[0][i] * t[0][i] + t[1][i] * t[1][i] + t[2][i] * t[2][i]);
+            for (int j = 0; j < i; j++) {
+                difference = Math.max(difference, square(t, i, j));
+            }
+        }
+        return largest > 0 ? Math.sqrt(difference / largest) : 0;
+    }
+
+    private static double square(double[][] t, int i, int j) {
+        double x = t[0][i] - t[0][j];
+        double y = t[1][i] - t[1][j];
+        double z = t[2][i] - t[2][j];
+        return x * x + y * y + z * z;
+    }
+
+    // ---- surfaces
+
+    /** Nine nodes of a box, index 3·i + j. */
+    private void surface(Sampler s, double[] from, double[] to, int depth) {
+        double[] at = {(from[0] + to[0]) / 2, (from[1] + to[1]) / 2};
+        Chart.Anchor middle = s.anchor(at);
+        double[] b = s.toAnchor(middle);
+        for (int i = 0; i < 9; i++) {
+            space.du[0][i] = (to[0] - from[0]) * (i / 3 - 1) / 2.0;
+            space.du[1][i] = (to[1] - from[1]) * (i % 3 - 1) / 2.0;
+        }
+        Nodes nodes = s.place(middle, space.du, 9);
+        double[] length = new double[2];
+        double[] shortest = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
+        int[] collapsed = {-1, -1};
+        for (int i = 0; i < 3; i++) {
+            double l1 = step(nodes, 3 * i, 3 * i + 1) + step(nodes, 3 * i + 1, 3 * i + 2);
+            double l0 = step(nodes, i, i + 3) + step(nodes, i + 3, i + 6);
+            length[0] = Math.max(length[0], l0);
+            length[1] = Math.max(length[1], l1);
+            if (l1 < shortest[1]) {
+                shortest[1] = l1;
+                collapsed[0] = i;
+            }
+            if (l0 < shortest[0]) {
+                shortest[0] = l0;
+                collapsed[1] = i;
+            }
+        }
+        double size = Math.max(length[0], length[1]);
+        if (!(size > 0)) {
+            return;
+        }
+        double least = Double.POSITIVE_INFINITY;
+        int nearest = 4;
+        for (int i = 0; i < 9; i++) {
+            double d = distance(nodes, b, i);
+            if (d < least) {
+                least = d;
+                nearest = i;
+            }
+        }
+        double lift = lift(s);
+        double[][] bends = bends(s);
+        double bend0 = Math.max(bends[0][0], bends[1][0]);
+        double bend1 = Math.max(bends[0][1], bends[1][1]);
+        if (Math.hypot(least, lift) > FAR * size && Math.max(bend0, bend1) < 2.5) {
+            double distance = Math.hypot(Math.max(0.5 * least, least - size / 4), lift);
+            pieces.add(Piece.whole(new Pieces.Box(s, from, to), order(distance, length[0], bend0, 5), order(distance, length[1], bend1, 5)));
+            return;
+        }
+        boolean fan0 = shortest[1] < 1e-9 * size && collapsed[0] != 1;
+        boolean fan1 = shortest[0] < 1e-9 * size && collapsed[1] != 1;
+        if (fan0 ^ fan1) {
+            int ray = fan0 ? 0 : 1;
+            boolean low = collapsed[ray] == 0;
+            int tip = ray == 0 ? low ? 1 : 7 : low ? 3 : 5;
+            double tipDistance = Math.hypot(distance(nodes, b, tip), lift);
+            if (Math.hypot(least, lift) > 0.2 * tipDistance && nearTip(s, from, to, ray, low, tipDistance, length[ray], bends[ray][ray], depth)) {
+                return;
+            }
+            if (depth < DEEPEST) {
+                boolean round = bends[ray][1 - ray] > 1.2 && length[1 - ray] > 0.5 * length[ray];
+                split(s, from, to, round ? 1 - ray : ray, depth);
+                return;
+            }
+        }
+        if (Math.max(bend0, bend1) > BENT && depth < DEEPEST) {
+            double cost0 = bend0 * (bend0 > BENT ? 1 : 0) + 1e-3 * length[0] / size;
+            double cost1 = bend1 * (bend1 > BENT ? 1 : 0) + 1e-3 * length[1] / size;
+            split(s, from, to, cost0 >= cost1 ? 0 : 1, depth);
+            return;
+        }
+        double[] guess = {from[0] + (to[0] - from[0]) * (nearest / 3) / 2.0, from[1] + (to[1] - from[1]) * (nearest % 3) / 2.0};
+        nearSurface(s, from, to, guess, lift, size, depth);
+    }
+
+    /** bends[k][j]: how much the tangent of parameter k changes along parameter j, against its own length. */
+    private double[][] bends(Sampler s) {
+        double[][] bends = new double[2][2];
+        for (int k = 0; k < 2; k++) {
+            double[][] t = s.tangent(k);
+            double largest = 0;
+            for (int i = 0; i < 9; i++) {
+                double square = t[0][i] * t[0][i] + t[1][i] * t[1][i] + t[2][i] * t[2][i];
+                largest = Math.max(largest, square);
+            }
+            if (!(largest > 0)) {
+                continue;
+            }
+            for (int i = 0; i < 3; i++) {
+                double d0 = Math.max(square(t, i, i + 6), Math.max(square(t, i, i + 3), square(t, i + 3, i + 6)));
+                double d1 = Math.max(square(t, 3 * i, 3 * i + 2), Math.max(square(t, 3 * i, 3 * i + 1), square(t, 3 * i + 1, 3 * i + 2)));
+                bends[k][0] = Math.max(bends[k][0], Math.sqrt(d0 / largest));
+                bends[k][1] = Math.max(bends[k][1], Math.sqrt(d1 / largest));
+            }
+        }
+        return bends;
+    }
+
+    /** A box with one edge shrunk to the tip, and the place (nearly) straight over the tip. */
+    private boolean nearTip(Sampler s, double[] from, double[] to, int ray, boolean low, double tipDistance, double length, double bend,
+        int depth) {
+        double[] tip = {(from[0] + to[0]) / 2, (from[1] + to[1]) / 2};
+        tip[ray] = low ? from[ray] : to[ray];
+        if (bend > BENT && depth < DEEPEST) {
+            return false;
+        }
+        double[] foot = footOnSurface(s, from, to, tip.clone());
+        Chart.Anchor nearest = s.anchor(foot);
+        Chart.Anchor apex = s.anchor(tip);
+        double[] b = s.toAnchor(apex);
+        double aside = Math.sqrt(sum(nearest.position(), apex.position()));
+        if (aside > 0.25 * tipDistance && tipDistance > touching(s, apex)) {
+            return false;
+        }
+        double height = Math.hypot(norm(b), lift(s));
+        if (!(height > touching(s, apex))) {
+            height = 0;
+            if (!potential && s instanceof Sampler.Coulomb && s.patch.kernel() == Kernel.POINT && !onTip(s, from, to, tip, ray)) {
+                return true;
+            }
+        }
+        Pieces.Fan fan = new Pieces.Fan(s, tip, ray, low ? to[ray] : from[ray], from[1 - ray], to[1 - ray], length, height);
+        double span = fan.span();
+        int n = height > 0 ? Math.max(1, (int) Math.ceil(span / SPAN)) : 1;
+        int order = Math.max(10, order(Math.PI / 2, span / n, 0, 6));
+        for (int i = 0; i < n; i++) {
+            pieces.add(new Piece(fan, new double[] {(double) i / n, 0}, new double[] {(i + 1.0) / n, 1}, new int[] {order, 20}));
+        }
+        return true;
+    }
+
+    private static double sum(double[] p, double[] q) {
+        double total = 0;
+        for (int a = 0; a < 3; a++) {
+            total += (p[a] - q[a]) * (p[a] - q[a]);
+        }
+        return total;
+    }
+
+    /** The place is on the tip of a fan: its jump and pull. False when a field without bound makes the pieces useless. */
+    private boolean onTip(Sampler s, double[] from, double[] to, double[] tip, int ray) {
+        int n = 24;
+        var rule = fieldwright.integral.GaussLegendre.of(n);
+        Chart.Anchor apex = s.anchor(tip);
+        for (int i = 0; i < n; i++) {
+            space.du[ray][i] = 0;
+            space.du[1 - ray][i] = from[1 - ray] + (to[1 - ray] - from[1 - ray]) * rule.node(i) - tip[1 - ray];
+        }
+        Nodes nodes = s.place(apex, space.du, n);
+        s.patch.weight().evaluate(nodes, apex.position(), n, space.density);
+        double[][] t = s.tangent(ray);
+        double[][] e = new double[n][3];
+        for (int i = 0; i < n; i++) {
+            double size = Math.sqrt(t[0][i] * t[0][i] + t[1][i] * t[1][i] + t[2][i] * t[2][i]);
+            for (int a = 0; a < 3; a++) {
+                e[i][a] = t[a][i] / size;
+            }
+        }
+        double[] around = new double[3];
+        double turn = 0;
+        double sigma = 0;
+        double[] normal = new double[3];
+        double width = to[1 - ray] - from[1 - ray];
+        double[] angleAt = new double[n];
+        for (int i = 0; i < n; i++) {
+            int j = i + 1 < n ? i + 1 : i - 1;
+            double[] c = {e[i][1] * e[j][2] - e[i][2] * e[j][1], e[i][2] * e[j][0] - e[i][0] * e[j][2], e[i][0] * e[j][1] - e[i][1] * e[j][0]};
+            angleAt[i] = Math.asin(Math.min(1, norm(c))) / Math.abs(rule.node(j) - rule.node(i));
+            double sign = i + 1 < n ? 1 : -1;
+            for (int a = 0; a < 3; a++) {
+                normal[a] += sign * c[a];
+            }
+        }
+        double largest = 0;
+        for (int i = 0; i < n; i++) {
+            turn += rule.weight(i) * angleAt[i];
+            sigma += rule.weight(i) * space.density[i];
+            largest = Math.max(largest, Math.abs(space.density[i]));
+            for (int a = 0; a < 3; a++) {
+                around[a] += rule.weight(i) * angleAt[i] * space.density[i] * e[i][a];
+            }
+        }
+        if (!(largest > 0) || !(width > 0)) {
+            return true;
+        }
+        double size = norm(normal);
+        double[] unit = size > 0 ? new double[] {normal[0] / size, normal[1] / size, normal[2] / size} : new double[] {0, 0, 1};
+        contact.surface(sigma, turn / (2 * Math.PI), s.mapped(unit[0], unit[1], unit[2]), s.mapped(around[0], around[1], around[2]));
+        return true;
+    }
+
+    private void nearSurface(Sampler s, double[] from, double[] to, double[] guess, double lift, double size, int depth) {
+        double[] at = footOnSurface(s, from, to, guess);
+        Chart.Anchor foot = s.anchor(at);
+        double[] b = s.toAnchor(foot);
+        for (double[] du : space.du) {
+            du[0] = 0;
+        }
+        s.place(foot, space.du, 1);
+        double[][] t0 = s.tangent(0);
+        double[][] t1 = s.tangent(1);
+        double[] p = {t0[0][0], t0[1][0], t0[2][0]};
+        double[] q = {t1[0][0], t1[1][0], t1[2][0]};
+        double[] n = {p[1] * q[2] - p[2] * q[1], p[2] * q[0] - p[0] * q[2], p[0] * q[1] - p[1] * q[0]};
+        double area = norm(n);
+        double[] e1 = norm(p) >= norm(q) ? unit(p) : unit(q);
+        if (!(area > 1e-12 * norm(p) * norm(q)) || e1 == null) {
+            if (depth < DEEPEST) {
+                split(s, from, to, depth % 2, depth);
+            } else {
+                pieces.add(Piece.whole(new Pieces.Box(s, from, to), 8, 8));
+            }
+            return;
+        }
+        double[] normal = unit(n);
+        double[] e2 = {normal[1] * e1[2] - normal[2] * e1[1], normal[2] * e1[0] - normal[0] * e1[2], normal[0] * e1[1] - normal[1] * e1[0]};
+        double[] metric = {dot(p, e1), dot(q, e1), dot(p, e2), dot(q, e2)};
+        double height = Math.hypot(norm(b), lift);
+        double[][] pole = null;
+        double sigma = 0;
+        if (!(height > touching(s, foot))) {
+            height = 0;
+            if (!potential && s instanceof Sampler.Coulomb && s.patch.kernel() == Kernel.POINT) {
+                sigma = s.densityAt(foot);
+                if (sigma != 0) {
+                    double[] a = s.mapped(p[0], p[1], p[2]);
+                    double[] c = s.mapped(q[0], q[1], q[2]);
+                    pole = new double[2][3];
+                    for (int i = 0; i < 3; i++) {
+                        pole[0][i] = sigma * a[i];
+                        pole[1][i] = sigma * c[i];
+                    }
+                }
+            }
+        }
+        double[][] corners = {{from[0], from[1]}, {to[0], from[1]}, {to[0], to[1]}, {from[0], to[1]}};
+        for (int k = 0; k < 4; k++) {
+            double[] a = {corners[k][0] - at[0], corners[k][1] - at[1]};
+            double[] c = {corners[(k + 1) % 4][0] - at[0], corners[(k + 1) % 4][1] - at[1]};
+            Pieces.Triangle triangle = new Pieces.Triangle(s, at, a, c, metric, height, pole);
+            if (triangle.isEmpty()) {
+                continue;
+            }
+            if (pole != null) {
+                touch(s, sigma, a, c, metric, e1, e2, normal);
+            }
+            add(triangle, height > 0 ? triangle.spanW() : 1, triangle.spanV(), 8, 8);
+        }
+    }
+
+    private static double dot(double[] a, double[] b) {
+        return a[0] * b[0] + a[1] * b[1] + a[2] * b[2];
+    }
+
+    private static double[] unit(double[] v) {
+        double size = norm(v);
+        return size > 0 && Double.isFinite(size) ? new double[] {v[0] / size, v[1] / size, v[2] / size} : null;
+    }
+
+    /** One triangle's share of the turn about a place on the surface. */
+    private void touch(Sampler s, double sigma, double[] a, double[] c, double[] metric, double[] e1, double[] e2, double[] normal) {
+        double thetaA = Math.atan2(metric[2] * a[0] + metric[3] * a[1], metric[0] * a[0] + metric[1] * a[1]);
+        double thetaB = Math.atan2(metric[2] * c[0] + metric[3] * c[1], metric[0] * c[0] + metric[1] * c[1]);
+        double turn = thetaB - thetaA;
+        if (turn > Math.PI) {
+            turn -= 2 * Math.PI;
+        } else if (turn < -Math.PI) {
+            turn += 2 * Math.PI;
+        }
+        double sign = turn < 0 ? -1 : 1;
+        double along1 = sign * sigma * (Math.sin(thetaB) - Math.sin(thetaA));
+        double along2 = sign * sigma * (Math.cos(thetaA) - Math.cos(thetaB));
+        contact.surface(sigma, Math.abs(turn) / (2 * Math.PI), s.mapped(normal[0], normal[1], normal[2]),
+            s.mapped(along1 * e1[0] + along2 * e2[0], along1 * e1[1] + along2 * e2[1], along1 * e1[2] + along2 * e2[2]));
+    }
+
+    /** Nearest point of a box, by Gauss-Newton steps kept inside it. */
+    private double[] footOnSurface(Sampler s, double[] from, double[] to, double[] guess) {
+        double[] at = guess;
+        double best = Double.POSITIVE_INFINITY;
+        double[] bestAt = guess.clone();
+        for (int step = 0; step < 20; step++) {
+            Chart.Anchor anchor = s.anchor(at);
+            double[] b = s.toAnchor(anchor);
+            double d = norm(b);
+            if (d < best) {
+                best = d;
+                bestAt = at.clone();
+            } else if (step > 8) {
+                break;
+            }
+            for (double[] du : space.du) {
+                du[0] = 0;
+            }
+            s.place(anchor, space.du, 1);
+            double[][] t0 = s.tangent(0);
+            double[][] t1 = s.tangent(1);
+            double g00 = t0[0][0] * t0[0][0] + t0[1][0] * t0[1][0] + t0[2][0] * t0[2][0];
+            double g01 = t0[0][0] * t1[0][0] + t0[1][0] * t1[1][0] + t0[2][0] * t1[2][0];
+            double g11 = t1[0][0] * t1[0][0] + t1[1][0] * t1[1][0] + t1[2][0] * t1[2][0];
+            double r0 = -(t0[0][0] * b[0] + t0[1][0] * b[1] + t0[2][0] * b[2]);
+            double r1 = -(t1[0][0] * b[0] + t1[1][0] * b[1] + t1[2][0] * b[2]);
+            double[] next = quadratic(at, from, to, g00, g01, g11, r0, r1);
+            double move = Math.max(Math.abs(next[0] - at[0]) / (to[0] - from[0]), Math.abs(next[1] - at[1]) / (to[1] - from[1]));
+            at = next;
+            if (!(move > 1e-15)) {
+                break;
+            }
+        }
+        double d = norm(s.toAnchor(s.anchor(at)));
+        return d <= best ? at : bestAt;
+    }
+
+    /** Least of ½ dᵀGd − rᵀd for at + d in the box. */
+    private static double[] quadratic(double[] at, double[] from, double[] to, double g00, double g01, double g11, double r0, double r1) {
+        double det = g00 * g11 - g01 * g01;
+        if (det > 1e-14 * g00 * g11) {
+            double u = at[0] + (g11 * r0 - g01 * r1) / det;
+            double v = at[1] + (g00 * r1 - g01 * r0) / det;
+            if (u >= from[0] && u <= to[0] && v >= from[1] && v <= to[1]) {
+                return new double[] {snap(u, from[0], to[0]), snap(v, from[1], to[1])};
+            }
+        }
+        double[] best = at.clone();
+        double least = Double.POSITIVE_INFINITY;
+        for (int side = 0; side < 4; side++) {
+            double u;
+            double v;
+            if (side < 2) {
+                u = side == 0 ? from[0] : to[0];
+                v = g11 > 0 ? at[1] + (r1 - g01 * (u - at[0])) / g11 : at[1];
+                v = snap(v, from[1], to[1]);
+            } else {
+                v = side == 2 ? from[1] : to[1];
+                u = g00 > 0 ? at[0] + (r0 - g01 * (v - at[1])) / g00 : at[0];
+                u = snap(u, from[0], to[0]);
+            }
+            double du = u - at[0];
+            double dv = v - at[1];
+            double value = 0.5 * (g00 * du * du + 2 * g01 * du * dv + g11 * dv * dv) - r0 * du - r1 * dv;
+            if (value < least) {
+                least = value;
+                best = new double[] {u, v};
+            }
+        }
+        return best;
+    }
+
+    // ---- volumes
+
+    private static final int GRID = 4;
+
+    /** Faces with the radial integral done first, when the place is inside or near and the density allows it. */
+    private boolean faces(Patch patch, Probe probe, Chart chart, Sampler whole) {
+        Chart.Anchor middle = whole.anchor(0.5, 0.5, 0.5);
+        double[] b = whole.toAnchor(middle);
+        int n = 0;
+        for (int i = 0; i < GRID; i++) {
+            for (int j = 0; j < GRID; j++) {
+                for (int k = 0; k < GRID; k++) {
+                    space.du[0][n] = i / (GRID - 1.0) - 0.5;
+                    space.du[1][n] = j / (GRID - 1.0) - 0.5;
+                    space.du[2][n++] = k / (GRID - 1.0) - 0.5;
+                }
+            }
+        }
+        Nodes nodes = whole.place(middle, space.du, n);
+        double least = Double.POSITIVE_INFINITY;
+        double radius = 0;
+        double[] low = {1e300, 1e300, 1e300};
+        double[] high = {-1e300, -1e300, -1e300};
+        for (int i = 0; i < n; i++) {
+            least = Math.min(least, distance(nodes, b, i));
+            for (int a = 0; a < 3; a++) {
+                low[a] = Math.min(low[a], nodes.offset[a][i]);
+                high[a] = Math.max(high[a], nodes.offset[a][i]);
+            }
+        }
+        for (int a = 0; a < 3; a++) {
+            radius = Math.max(radius, (high[a] - low[a]) / 2);
+        }
+        if (!(least < 2 * radius)) {
+            return false;
+        }
+        int steps = raySteps(patch.inSpace(), whole, nodes, b, n);
+        if (steps == 0) {
+            return false;
+        }
+        int hand = chart.handedness(space.nodes);
+        for (int depth = 0; depth < 3; depth++) {
+            if (isFullTurn(chart, depth)) {
+                continue;
+            }
+            for (int side = 0; side < 2; side++) {
+                if (chart.closesAt(depth, side == 1)) {
+                    continue;
+                }
+                Sampler.Face face = new Sampler.Face(patch, probe, potential, space, chart, depth, side == 1, hand, steps);
+                if (hasArea(face)) {
+                    pave(face, new double[2], new double[] {1, 1}, 0);
+                }
+            }
+        }
+        return true;
+    }
+
+    /** Both ends of a full turn are the same surface seen from its two sides. */
+    private static boolean isFullTurn(Chart chart, int depth) {
+        if (chart.system() == null || !chart.hasConstantLimits(depth)) {
+            return false;
+        }
+        String name = chart.coordinates().get(chart.coordinateOf(depth));
+        return name.equals("phi") && Math.abs(chart.upper(depth) - chart.lower(depth) - 2 * Math.PI) < 1e-14;
+    }
+
+    private boolean hasArea(Sampler s) {
+        Chart.Anchor middle = s.anchor(0.5, 0.5);
+        for (int i = 0; i < 9; i++) {
+            space.du[0][i] = 0.31 * (i / 3 - 1);
+            space.du[1][i] = 0.31 * (i % 3 - 1);
+        }
+        s.place(middle, space.du, 9);
+        double[][] p = s.tangent(0);
+        double[][] q = s.tangent(1);
+        for (int i = 0; i < 9; i++) {
+            double x = p[1][i] * q[2][i] - p[2][i] * q[1][i];
+            double y = p[2][i] * q[0][i] - p[0][i] * q[2][i];
+            double z = p[0][i] * q[1][i] - p[1][i] * q[0][i];
+            double scale = Math.abs(p[0][i]) + Math.abs(p[1][i]) + Math.abs(p[2][i]);
+            scale *= Math.abs(q[0][i]) + Math.abs(q[1][i]) + Math.abs(q[2][i]);
+            double area = Math.sqrt(x * x + y * y + z * z);
+            if (area > 0 && area > 1e-14 * scale && scale > 1e-28 * extent(s)) {
+                return true;
+            }
+        }
+        return false;
+    }
+
+    private double extent(Sampler s) {
+        double[] p = s.anchor(0.5, 0.5).position();
+        return dot(p, p) + dot(s.seen, s.seen);
+    }
+
+    /**
+     * How many Gauss nodes the density takes along rays from the place to the grid of the body; exact for polynomials, by
+     * comparison of two orders otherwise; 0 when it is not smooth enough along them.
+     */
+    private int raySteps(SpaceFunction rho, Sampler s, Nodes nodes, double[] b, int n) {
+        if (rho.isConstant()) {
+            return 1;
+        }
+        if (rho.degree >= 0 && rho.degree <= 20) {
+            return (rho.degree + 3) / 2;
+        }
+        double[][] d = new double[3][n];
+        for (int a = 0; a < 3; a++) {
+            for (int i = 0; i < n; i++) {
+                d[a][i] = b[a] + nodes.offset[a][i];
+            }
+        }
+        double[] coarse = rayIntegral(rho, s, d, n, 6);
+        for (int order = 8; order <= 48; order += order < 24 ? 4 : 12) {
+            double[] fine = rayIntegral(rho, s, d, n, order);
+            double worst = 0;
+            double size = 0;
+            for (int i = 0; i < n; i++) {
+                if (!Double.isFinite(fine[i])) {
+                    return 0;
+                }
+                worst = Math.max(worst, Math.abs(fine[i] - coarse[i]));
+                size = Math.max(size, Math.abs(fine[i]));
+            }
+            if (worst <= 1e-13 * size) {
+                return Math.min(GAUSS_MOST, order + 2);
+            }
+            coarse = fine;
+        }
+        return 0;
+    }
+
+    private static final int GAUSS_MOST = 50;
+
+    private double[] rayIntegral(SpaceFunction rho, Sampler s, double[][] d, int n, int order) {
+        var rule = fieldwright.integral.GaussLegendre.of(order);
+        double[] sum = new double[n];
+        for (int j = 0; j < order; j++) {
+            for (int a = 0; a < 3; a++) {
+                for (int i = 0; i < n; i++) {
+                    space.ray[a][i] = rule.node(j) * d[a][i];
+                }
+            }
+            rho.evaluate(s.seen, space.ray, n, space.density);
+            for (int i = 0; i < n; i++) {
+                sum[i] += rule.weight(j) * space.density[i];
+            }
+        }
+        return sum;
+    }
+
+    /** 27 nodes of a box, index 9·i + 3·j + k. */
+    private void volume(Sampler s, double[] from, double[] to, int depth) {
+        double[] at = new double[3];
+        for (int k = 0; k < 3; k++) {
+            at[k] = (from[k] + to[k]) / 2;
+        }
+        Chart.Anchor middle = s.anchor(at);
+        double[] b = s.toAnchor(middle);
+        int[] stride = {9, 3, 1};
+        for (int i = 0; i < 27; i++) {
+            for (int k = 0; k < 3; k++) {
+                space.du[k][i] = (to[k] - from[k]) * (i / stride[k] % 3 - 1) / 2.0;
+            }
+        }
+        Nodes nodes = s.place(middle, space.du, 27);
+        double[] length = new double[3];
+        double[] bend = new double[3];
+        double least = Double.POSITIVE_INFINITY;
+        int nearest = 13;
+        for (int i = 0; i < 27; i++) {
+            double d = distance(nodes, b, i);
+            if (d < least) {
+                least = d;
+                nearest = i;
+            }
+        }
+        for (int j = 0; j < 3; j++) {
+            for (int i = 0; i < 27; i++) {
+                if (i / stride[j] % 3 == 0) {
+                    length[j] = Math.max(length[j], step(nodes, i, i + stride[j]) + step(nodes, i + stride[j], i + 2 * stride[j]));
+                    for (int k = 0; k < 3; k++) {
+                        double[][] t = s.tangent(k);
+                        double here = Math.max(size2(t, i), Math.max(size2(t, i + stride[j]), size2(t, i + 2 * stride[j])));
+                        double change = Math.max(square(t, i, i + 2 * stride[j]), square(t, i, i + stride[j]));
+                        if (here > 0) {
+                            bend[j] = Math.max(bend[j], Math.sqrt(change / here));
+                        }
+                    }
+                }
+            }
+        }
+        double size = Math.max(length[0], Math.max(length[1], length[2]));
+        if (!(size > 0)) {
+            return;
+        }
+        if (least > FAR * size && Math.max(bend[0], Math.max(bend[1], bend[2])) < 2.5) {
+            double distance = Math.max(0.5 * least, least - size / 4);
+            int[] orders = new int[3];
+            for (int k = 0; k < 3; k++) {
+                orders[k] = Math.min(20, order(distance, length[k], bend[k], 5));
+            }
+            pieces.add(Piece.whole(new Pieces.Box(s, from, to), orders));
+            return;
+        }
+        int worst = 0;
+        for (int k = 1; k < 3; k++) {
+            if (bend[k] * length[k] > bend[worst] * length[worst]) {
+                worst = k;
+            }
+        }
+        if (bend[worst] > BENT && depth < 40) {
+            split(s, from, to, worst, depth);
+            return;
+        }
+        double[] guess = new double[3];
+        for (int k = 0; k < 3; k++) {
+            guess[k] = from[k] + (to[k] - from[k]) * (nearest / stride[k] % 3) / 2.0;
+        }
+        nearVolume(s, from, to, guess);
+    }
+
+    private static double size2(double[][] t, int i) {
+        return t[0][i] * t[0][i] + t[1][i] * t[1][i] + t[2][i] * t[2][i];
+    }
+
+    private void nearVolume(Sampler s, double[] from, double[] to, double[] guess) {
+        double[] at = footInVolume(s, from, to, guess);
+        Chart.Anchor foot = s.anchor(at);
+        double height = Math.hypot(norm(s.toAnchor(foot)), lift(s));
+        if (!(height > touching(s, foot))) {
+            height = 0;
+        }
+        for (double[] du : space.du) {
+            du[0] = 0;
+        }
+        s.place(foot, space.du, 1);
+        double[] speed = new double[3];
+        for (int k = 0; k < 3; k++) {
+            speed[k] = Math.sqrt(size2(s.tangent(k), 0));
+        }
+        for (int depth = 0; depth < 3; depth++) {
+            for (int side = 0; side < 2; side++) {
+                double reach = (side == 1 ? to[depth] : from[depth]) - at[depth];
+                if (reach == 0 || !(speed[depth] > 0)) {
+                    continue;
+                }
+                double[] low = new double[3];
+                double[] high = new double[3];
+                double[] scale = new double[3];
+                double length = speed[depth] * Math.abs(reach);
+                for (int k = 0; k < 3; k++) {
+                    low[k] = from[k] - at[k];
+                    high[k] = to[k] - at[k];
+                    scale[k] = speed[k] > 0 ? Math.hypot(length, height) / speed[k] : to[k] - from[k];
+                }
+                Pieces.Pyramid pyramid = new Pieces.Pyramid(s, at, depth, reach, low, high, scale, length, height);
+                double span = height > 0 ? pyramid.span() : 1;
+                int n = height > 0 ? Math.max(1, (int) Math.ceil(span / SPAN)) : 1;
+                for (int i = 0; i < n; i++) {
+                    pieces.add(new Piece(pyramid, new double[] {(double) i / n, 0, 0}, new double[] {(i + 1.0) / n, 1, 1}, new int[] {10, 10, 10}));
+                }
+            }
+        }
+    }
+
+    private double[] footInVolume(Sampler s, double[] from, double[] to, double[] guess) {
+        double[] at = guess.clone();
+        for (int round = 0; round < 60; round++) {
+            double moved = 0;
+            for (int k = 0; k < 3; k++) {
+                Chart.Anchor anchor = s.anchor(at);
+                double[] b = s.toAnchor(anchor);
+                for (double[] du : space.du) {
+                    du[0] = 0;
+                }
+                s.place(anchor, space.du, 1);
+                double[][] t = s.tangent(k);
+                double square = size2(t, 0);
+                if (square > 0) {
+                    double next = snap(at[k] - (t[0][0] * b[0] + t[1][0] * b[1] + t[2][0] * b[2]) / square, from[k], to[k]);
+                    moved = Math.max(moved, Math.abs(next - at[k]) / (to[k] - from[k]));
+                    at[k] = next;
+                }
+            }
+            if (moved < 1e-14) {
+                break;
+            }
+        }
+        return at;
+    }
+}

@@ -1,0 +1,349 @@
+package fieldwright.field;
+
+import fieldwright.geometry.Chart;
+import fieldwright.integral.Integrand;
+
+/**
+ * The pieces a patch is cut into. Each maps its own unit box into the patch's, so that what is left to integrate is smooth:
+ * a plain box, or rays from the point nearest to the target, along which R = h sinh(w) with h the distance there
+ * (Johnston &amp; Elliott 2005).
+ */
+final class Pieces {
+    private Pieces() {
+    }
+
+    /** Shared by all: offsets from an anchor, and the values there. */
+    abstract static class Base implements Integrand {
+        final Sampler sampler;
+        final Chart.Anchor anchor;
+        final double[] b;
+        final double[] jacobian = new double[Workspace.BLOCK];
+
+        Base(Sampler sampler, double[] anchorAt) {
+            this.sampler = sampler;
+            anchor = sampler.anchor(anchorAt);
+            b = sampler.toAnchor(anchor);
+        }
+
+        @Override
+        public int dimension() {
+            return sampler.dimension();
+        }
+
+        @Override
+        public int components() {
+            return sampler.potential ? 1 : 3;
+        }
+
+        @Override
+        public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
+            map(u, n, sampler.space.du);
+            sampler.place(anchor, sampler.space.du, n);
+            sampler.values(anchor, b, jacobian, n, out, noise);
+            finish(u, n, out);
+        }
+
+        abstract void map(double[][] u, int n, double[][] du);
+
+        void finish(double[][] u, int n, double[][] out) { }
+    }
+
+    /** A box of parameters as it is. */
+    static final class Box extends Base {
+        private final double[] from;
+        private final double[] width;
+        private final double[] at;
+        private final double volume;
+
+        Box(Sampler sampler, double[] from, double[] to) {
+            super(sampler, middle(from, to));
+            this.from = from;
+            at = middle(from, to);
+            width = new double[from.length];
+            double product = 1;
+            for (int k = 0; k < from.length; k++) {
+                width[k] = to[k] - from[k];
+                product *= width[k];
+            }
+            volume = product;
+        }
+
+        private static double[] middle(double[] from, double[] to) {
+            double[] m = new double[from.length];
+            for (int k = 0; k < m.length; k++) {
+                m[k] = (from[k] + to[k]) / 2;
+            }
+            return m;
+        }
+
+        @Override
+        void map(double[][] u, int n, double[][] du) {
+            for (int k = 0; k < width.length; k++) {
+                double shift = from[k] - at[k];
+                for (int i = 0; i < n; i++) {
+                    du[k][i] = shift + width[k] * u[k][i];
+                }
+            }
+            java.util.Arrays.fill(jacobian, 0, n, volume);
+        }
+    }
+
+    /** A radius from 0 to {@code length} that is fine near {@code height}: R = h sinh(w), or R itself for h = 0. */
+    static final class Radius {
+        final double height;
+
+        Radius(double height) {
+            this.height = height;
+        }
+
+        double span(double length) {
+            return height > 0 ? asinh(length / height) : 1;
+        }
+
+        double at(double w, double length) {
+            return height > 0 ? height * Math.sinh(w) : w * length;
+        }
+
+        double slope(double w, double length) {
+            return height > 0 ? height * Math.cosh(w) : length;
+        }
+    }
+
+    static double asinh(double x) {
+        double a = Math.abs(x);
+        double y = a < 1e-4 ? a - a * a * a / 6 : Math.log(a + Math.sqrt(a * a + 1));
+        return x < 0 ? -y : y;
+    }
+
+    /** From the nearest point of a line to one end. */
+    static final class Segment extends Base {
+        private final double reach;
+        private final double length;
+        private final Radius radius;
+        private final double[] pole;
+
+        /** {@code pole}: coefficient of 1/s to take out when the target is on the line (endless kernels), or null. */
+        Segment(Sampler sampler, double at, double end, double length, double height, double[] pole) {
+            super(sampler, new double[] {at});
+            reach = end - at;
+            this.length = length;
+            radius = new Radius(height);
+            this.pole = pole;
+        }
+
+        double span() {
+            return radius.span(length);
+        }
+
+        @Override
+        void map(double[][] u, int n, double[][] du) {
+            double span = span();
+            for (int i = 0; i < n; i++) {
+                double w = span * u[0][i];
+                du[0][i] = reach * (radius.at(w, length) / length);
+                jacobian[i] = Math.abs(reach) * (radius.slope(w, length) / length) * span;
+            }
+        }
+
+        @Override
+        void finish(double[][] u, int n, double[][] out) {
+            takeOut(pole, u[0], n, out);
+        }
+    }
+
+    private static void takeOut(double[] pole, double[] s, int n, double[][] out) {
+        if (pole == null) {
+            return;
+        }
+        for (int i = 0; i < n; i++) {
+            for (int c = 0; c < 3; c++) {
+                out[c][i] -= pole[c] / s[i];
+            }
+        }
+    }
+
+    /**
+     * A triangle of parameters from the nearest point to one side, in polar coordinates of the tangent plane: first
+     * coordinate along rays, second along the side by y = D sinh(v). When the target is on the surface the 1/R part of
+     * the field is taken out and its finite part, with ln R at the side, put back.
+     */
+    static final class Triangle extends Base {
+        private final double[] a;
+        private final double[] side;
+        private final double cross;
+        private final double distance;
+        private final double scale;
+        private final double yA;
+        private final double yB;
+        private final double vA;
+        private final double vB;
+        private final Radius radius;
+        private final double[][] pole;
+        private final double[] rMax = new double[Workspace.BLOCK];
+        private final double[] angle = new double[Workspace.BLOCK];
+        private final double[] along = new double[Workspace.BLOCK];
+
+        /**
+         * {@code a}, {@code c}: ends of the side minus the nearest point, in parameters; {@code metric}: tangent-plane vectors of the two
+         * parameters (2 × 2, column per parameter); {@code pole}: density times mapped tangent vectors of the parameters, or null.
+         */
+        Triangle(Sampler sampler, double[] at, double[] a, double[] c, double[] metric, double height, double[][] pole) {
+            super(sampler, at);
+            this.a = a;
+            side = new double[] {c[0] - a[0], c[1] - a[1]};
+            cross = Math.abs(a[0] * c[1] - a[1] * c[0]);
+            double ax = metric[0] * a[0] + metric[1] * a[1];
+            double ay = metric[2] * a[0] + metric[3] * a[1];
+            double sx = metric[0] * side[0] + metric[1] * side[1];
+            double sy = metric[2] * side[0] + metric[3] * side[1];
+            double length = Math.sqrt(sx * sx + sy * sy);
+            distance = Math.abs(ax * sy - ay * sx) / length;
+            yA = (ax * sx + ay * sy) / length;
+            yB = yA + length;
+            scale = Math.sqrt(distance * distance + height * height);
+            vA = asinh(yA / scale);
+            vB = asinh(yB / scale);
+            radius = new Radius(height);
+            this.pole = pole;
+        }
+
+        boolean isEmpty() {
+            return !(cross > 0) || !(distance > 0);
+        }
+
+        /** Largest extent in w, and extent in v: how many pieces it takes. */
+        double spanW() {
+            return radius.span(Math.sqrt(distance * distance + Math.max(yA * yA, yB * yB)));
+        }
+
+        double spanV() {
+            return vB - vA;
+        }
+
+        @Override
+        void map(double[][] u, int n, double[][] du) {
+            for (int i = 0; i < n; i++) {
+                double v = vA + (vB - vA) * u[1][i];
+                double y = scale * Math.sinh(v);
+                double t = (y - yA) / (yB - yA);
+                double r = Math.sqrt(distance * distance + y * y);
+                double span = radius.span(r);
+                double w = span * u[0][i];
+                double lambda = radius.at(w, r) / r;
+                du[0][i] = lambda * (a[0] + t * side[0]);
+                du[1][i] = lambda * (a[1] + t * side[1]);
+                double dy = scale * Math.cosh(v) * (vB - vA);
+                jacobian[i] = cross * lambda * (radius.slope(w, r) / r * span) * dy / (yB - yA);
+                if (pole != null) {
+                    rMax[i] = r;
+                    angle[i] = distance * dy / (r * r);
+                    along[i] = t;
+                }
+            }
+        }
+
+        @Override
+        void finish(double[][] u, int n, double[][] out) {
+            if (pole == null) {
+                return;
+            }
+            for (int i = 0; i < n; i++) {
+                double p0 = a[0] + along[i] * side[0];
+                double p1 = a[1] + along[i] * side[1];
+                double f = -angle[i] / rMax[i] * (Math.log(rMax[i]) - 1 / u[0][i]);
+                for (int c = 0; c < 3; c++) {
+                    out[c][i] += f * (p0 * pole[0][c] + p1 * pole[1][c]);
+                }
+            }
+        }
+    }
+
+    /**
+     * A box of parameters one edge of which is a single point (an axis, a pole, an apex), nearest to the target there: parameter
+     * {@code ray} runs from that point, the other goes round it.
+     */
+    static final class Fan extends Base {
+        private final int ray;
+        private final double reach;
+        private final double from;
+        private final double width;
+        private final double length;
+        private final Radius radius;
+
+        Fan(Sampler sampler, double[] at, int ray, double end, double from, double to, double length, double height) {
+            super(sampler, at);
+            this.ray = ray;
+            reach = end - at[ray];
+            this.from = from - at[1 - ray];
+            width = to - from;
+            this.length = length;
+            radius = new Radius(height);
+        }
+
+        double span() {
+            return radius.span(length);
+        }
+
+        @Override
+        void map(double[][] u, int n, double[][] du) {
+            double span = span();
+            for (int i = 0; i < n; i++) {
+                double w = span * u[0][i];
+                du[ray][i] = reach * (radius.at(w, length) / length);
+                du[1 - ray][i] = from + width * u[1][i];
+                jacobian[i] = Math.abs(reach) * (radius.slope(w, length) / length) * span * width;
+            }
+        }
+    }
+
+    /**
+     * A pyramid of parameters from the nearest point of a volume to one face of a box: along the rays R = h sinh(w), across by
+     * sinh about the nearest point, so that flat pyramids do no harm.
+     */
+    static final class Pyramid extends Base {
+        private final int depth;
+        private final double reach;
+        private final double[] low;
+        private final double[] high;
+        private final double[] scale;
+        private final double length;
+        private final Radius radius;
+
+        /** {@code low}, {@code high}: the face's box minus the apex; {@code length}: of the apex' distance to the face, m. */
+        Pyramid(Sampler sampler, double[] at, int depth, double reach, double[] low, double[] high, double[] scale, double length,
+            double height) {
+            super(sampler, at);
+            this.depth = depth;
+            this.reach = reach;
+            this.low = low;
+            this.high = high;
+            this.scale = scale;
+            this.length = length;
+            radius = new Radius(height);
+        }
+
+        double span() {
+            return radius.span(length);
+        }
+
+        @Override
+        void map(double[][] u, int n, double[][] du) {
+            double span = span();
+            for (int i = 0; i < n; i++) {
+                double w = span * u[0][i];
+                double lambda = radius.at(w, length) / length;
+                double volume = lambda * lambda * Math.abs(reach) * (radius.slope(w, length) / length) * span;
+                du[depth][i] = lambda * reach;
+                for (int k = 1; k < 3; k++) {
+                    int j = (depth + k) % 3;
+                    double vA = asinh(low[j] / scale[j]);
+                    double vB = asinh(high[j] / scale[j]);
+                    double v = vA + (vB - vA) * u[k][i];
+                    du[j][i] = lambda * scale[j] * Math.sinh(v);
+                    volume *= scale[j] * Math.cosh(v) * (vB - vA);
+                }
+                jacobian[i] = volume;
+            }
+        }
+    }
+}

@@ -1,0 +1,336 @@
+package fieldwright.field;
+
+import fieldwright.geometry.Chart;
+import fieldwright.geometry.Nodes;
+import fieldwright.quantity.AuthorException;
+
+/**
+ * What a patch, or one face of a volume, adds to the answer at one probe, as a function on its unit box: geometry for the
+ * paver, values for the integrands. Distances are those that count for the kernel.
+ */
+abstract class Sampler {
+    static final double EPS = 1.2e-16;
+
+    final Patch patch;
+    final Probe probe;
+    final boolean potential;
+    final Workspace space;
+    final Chart chart;
+    /** Chart depth of each parameter; other depths stay where {@link #held} says. */
+    final int[] axes;
+    final double[] held;
+    final double[] target;
+    final double[] seen;
+    final double[] map;
+    final boolean plainMap;
+    private final double roughness;
+
+    Sampler(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart, int[] axes, double[] held) {
+        this.patch = patch;
+        this.probe = probe;
+        this.potential = potential;
+        this.space = space;
+        this.chart = chart;
+        this.axes = axes;
+        this.held = held;
+        target = patch.frame().toOwn(probe.place());
+        seen = target.clone();
+        Kernel kernel = patch.kernel();
+        for (int a = 0; a < 3; a++) {
+            boolean across = kernel.kind == Kernel.Kind.PLANE && a != kernel.axis;
+            if (across || a == kernel.alongAxis()) {
+                seen[a] = 0;
+            }
+        }
+        map = new double[9];
+        double[] turn = patch.frame().turn();
+        for (int i = 0; i < 3; i++) {
+            for (int j = 0; j < 3; j++) {
+                for (int k = 0; k < 3; k++) {
+                    map[3 * i + j] += probe.a()[3 * i + k] * turn[3 * k + j];
+                }
+            }
+        }
+        boolean unit = true;
+        for (int i = 0; i < 9; i++) {
+            unit &= map[i] == (i % 4 == 0 ? 1 : 0);
+        }
+        plainMap = unit && probe.b() == null;
+        roughness = chart.hasExactOffsets() ? 0 : EPS;
+    }
+
+    int dimension() {
+        return axes.length;
+    }
+
+    Chart.Anchor anchor(double... v) {
+        double[] u = held.clone();
+        for (int k = 0; k < axes.length; k++) {
+            u[axes[k]] = v[k];
+        }
+        return chart.anchor(u);
+    }
+
+    /** Source minus target of an anchor. */
+    double[] toAnchor(Chart.Anchor anchor) {
+        double[] b = new double[3];
+        for (int a = 0; a < 3; a++) {
+            b[a] = anchor.position()[a] - seen[a];
+        }
+        return b;
+    }
+
+    /** Positions, tangents and measure at anchor + du. */
+    Nodes place(Chart.Anchor anchor, double[][] du, int n) {
+        double[][] full = space.full;
+        for (int k = 0; k < 3; k++) {
+            full[k] = Workspace.ZEROS;
+        }
+        for (int k = 0; k < axes.length; k++) {
+            full[axes[k]] = du[k];
+        }
+        chart.evaluate(anchor, full, n, space.nodes);
+        return space.nodes;
+    }
+
+    double[][] tangent(int k) {
+        return space.nodes.tangent[axes[k]];
+    }
+
+    /**
+     * Contributions of nodes placed last: {@code jacobian} is du per unit of the integration variables; {@code b} source minus
+     * target of the anchor.
+     */
+    abstract void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise);
+
+    /** Density at an anchor. */
+    double densityAt(Chart.Anchor anchor) {
+        for (int k = 0; k < 3; k++) {
+            space.full[k] = Workspace.ZEROS;
+        }
+        chart.evaluate(anchor, space.full, 1, space.nodes);
+        patch.weight().evaluate(space.nodes, anchor.position(), 1, space.density);
+        return space.density[0];
+    }
+
+    /** Direction in the patch's frame to the answer's frame. */
+    double[] mapped(double x, double y, double z) {
+        return new double[] {
+            map[0] * x + map[1] * y + map[2] * z, map[3] * x + map[4] * y + map[5] * z, map[6] * x + map[7] * y + map[8] * z};
+    }
+
+    final void displacements(double[] b, int n) {
+        for (int a = 0; a < 3; a++) {
+            double[] d = space.d[a];
+            double[] o = space.nodes.offset[a];
+            double shift = b[a];
+            for (int i = 0; i < n; i++) {
+                d[i] = shift + o[i];
+            }
+        }
+    }
+
+    /** Turns field and potential in the patch's frame into the answer's components; potential mode: scales. */
+    final void deliver(double[] v, int n, double[][] out) {
+        if (potential) {
+            double c = probe.c();
+            if (c != 1) {
+                for (int i = 0; i < n; i++) {
+                    out[0][i] *= c;
+                }
+            }
+            return;
+        }
+        if (plainMap) {
+            return;
+        }
+        double[] b = probe.b();
+        for (int i = 0; i < n; i++) {
+            double x = out[0][i];
+            double y = out[1][i];
+            double z = out[2][i];
+            double ex = map[0] * x + map[1] * y + map[2] * z;
+            double ey = map[3] * x + map[4] * y + map[5] * z;
+            double ez = map[6] * x + map[7] * y + map[8] * z;
+            if (b != null) {
+                ex += b[0] * v[i];
+                ey += b[1] * v[i];
+                ez += b[2] * v[i];
+            }
+            out[0][i] = ex;
+            out[1][i] = ey;
+            out[2][i] = ez;
+        }
+    }
+
+    /** Rounding of positions that were taken as differences of absolute ones. */
+    final void roughen(Chart.Anchor anchor, int n, double[][] out, double[] noise) {
+        if (roughness == 0) {
+            return;
+        }
+        double[] p = anchor.position();
+        double base = Math.abs(p[0]) + Math.abs(p[1]) + Math.abs(p[2]);
+        int components = potential ? 1 : 3;
+        for (int i = 0; i < n; i++) {
+            double x = space.d[0][i];
+            double y = space.d[1][i];
+            double z = space.d[2][i];
+            double distance = Math.sqrt(x * x + y * y + z * z);
+            double size = 0;
+            for (int c = 0; c < components; c++) {
+                size += Math.abs(out[c][i]);
+            }
+            noise[i] = size * roughness * (base / distance + 1);
+        }
+    }
+
+    /** Charge as it stands: density times measure times kernel. */
+    static final class Coulomb extends Sampler {
+        Coulomb(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart) {
+            super(patch, probe, potential, space, chart, all(chart.dimension()), new double[chart.dimension()]);
+        }
+
+        private static int[] all(int n) {
+            int[] axes = new int[n];
+            for (int k = 0; k < n; k++) {
+                axes[k] = k;
+            }
+            return axes;
+        }
+
+        @Override
+        void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise) {
+            double[] w = space.weight;
+            double[] measure = space.nodes.measure;
+            if (patch.weight().isConstant()) {
+                double density = patch.weight().constant();
+                for (int i = 0; i < n; i++) {
+                    w[i] = density * measure[i] * jacobian[i];
+                }
+            } else {
+                patch.weight().evaluate(space.nodes, anchor.position(), n, w);
+                for (int i = 0; i < n; i++) {
+                    if (Double.isNaN(w[i])) {
+                        throw notANumber(patch, space.nodes, i);
+                    }
+                    w[i] *= measure[i] * jacobian[i];
+                }
+            }
+            displacements(b, n);
+            if (potential) {
+                patch.kernel().potential(space.d, w, target, n, out[0]);
+            } else {
+                patch.kernel().field(space.d, w, target, n, out);
+                if (probe.b() != null) {
+                    patch.kernel().potential(space.d, w, target, n, space.v);
+                }
+            }
+            roughen(anchor, n, out, noise);
+            deliver(space.v, n, out);
+        }
+    }
+
+    static AuthorException notANumber(Patch patch, Nodes nodes, int i) {
+        StringBuilder where = new StringBuilder();
+        for (int m = 0; m < patch.chart().coordinates().size(); m++) {
+            where.append(m == 0 ? "" : ", ").append(patch.chart().coordinates().get(m)).append(" = ")
+                .append(String.format(java.util.Locale.ROOT, "%.6g", nodes.c[m][i]));
+        }
+        return new AuthorException("density " + patch.density().text() + " is not a number at " + where
+            + " (SI). Check roots, logarithms and divisions in it against the region's limits.");
+    }
+
+    /**
+     * A volume seen from inside or near by: one face of its box, the integral along each ray from the target done first:
+     * E = −∮ dA (n·d) d/|d|³ ∫₀¹ ρ(target + t d) dt, V = ∮ dA (n·d)/|d| ∫₀¹ ρ t dt. The density is evaluated beyond the body
+     * where rays leave it; what they add there cancels between faces.
+     */
+    static final class Face extends Sampler {
+        private final int sign;
+        private final int raySteps;
+
+        Face(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart, int depth, boolean upper, int handedness,
+            int raySteps) {
+            super(patch, probe, potential, space, chart, others(depth), held(depth, upper));
+            this.raySteps = raySteps;
+            sign = (upper ? 1 : -1) * handedness;
+        }
+
+        /** The two other depths, in cyclic order, so that their cross product points out of the upper face. */
+        private static int[] others(int depth) {
+            return new int[] {(depth + 1) % 3, (depth + 2) % 3};
+        }
+
+        private static double[] held(int depth, boolean upper) {
+            double[] u = new double[3];
+            u[depth] = upper ? 1 : 0;
+            return u;
+        }
+
+        @Override
+        void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise) {
+            displacements(b, n);
+            double[] dx = space.d[0];
+            double[] dy = space.d[1];
+            double[] dz = space.d[2];
+            double[][] s = tangent(0);
+            double[][] t = tangent(1);
+            double[] w = space.weight;
+            for (int i = 0; i < n; i++) {
+                double nx = s[1][i] * t[2][i] - s[2][i] * t[1][i];
+                double ny = s[2][i] * t[0][i] - s[0][i] * t[2][i];
+                double nz = s[0][i] * t[1][i] - s[1][i] * t[0][i];
+                w[i] = sign * jacobian[i] * (nx * dx[i] + ny * dy[i] + nz * dz[i]);
+            }
+            boolean both = !potential && probe.b() != null;
+            if (!potential) {
+                rays(n, false);
+                double[] sum = space.sum;
+                for (int i = 0; i < n; i++) {
+                    double square = dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i];
+                    double f = square > 0 ? -w[i] * sum[i] / (square * Math.sqrt(square)) : 0;
+                    out[0][i] = f * dx[i];
+                    out[1][i] = f * dy[i];
+                    out[2][i] = f * dz[i];
+                }
+            }
+            if (potential || both) {
+                rays(n, true);
+                double[] v = potential ? out[0] : space.v;
+                for (int i = 0; i < n; i++) {
+                    double square = dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i];
+                    v[i] = square > 0 ? w[i] * space.sum[i] / Math.sqrt(square) : 0;
+                }
+            }
+            roughen(anchor, n, out, noise);
+            deliver(space.v, n, out);
+        }
+
+        /** ∫₀¹ ρ dt, or ∫₀¹ ρ t dt, along each ray. */
+        private void rays(int n, boolean timesT) {
+            SpaceFunction rho = patch.inSpace();
+            double[] sum = space.sum;
+            if (rho.isConstant()) {
+                java.util.Arrays.fill(sum, 0, n, timesT ? rho.constant() / 2 : rho.constant());
+                return;
+            }
+            java.util.Arrays.fill(sum, 0, n, 0);
+            var rule = fieldwright.integral.GaussLegendre.of(raySteps);
+            for (int j = 0; j < raySteps; j++) {
+                double step = rule.node(j);
+                for (int a = 0; a < 3; a++) {
+                    double[] r = space.ray[a];
+                    double[] d = space.d[a];
+                    for (int i = 0; i < n; i++) {
+                        r[i] = step * d[i];
+                    }
+                }
+                rho.evaluate(seen, space.ray, n, space.density);
+                double weight = rule.weight(j) * (timesT ? step : 1);
+                for (int i = 0; i < n; i++) {
+                    sum[i] += weight * space.density[i];
+                }
+            }
+        }
+    }
+}

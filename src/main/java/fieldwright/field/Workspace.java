@@ -1,0 +1,19 @@
+package fieldwright.field;
+
+import fieldwright.geometry.Nodes;
+
+/** Scratch arrays of one question; one thread. */
+final class Workspace {
+    static final int BLOCK = Nodes.BLOCK;
+    static final double[] ZEROS = new double[BLOCK];
+
+    final Nodes nodes = new Nodes();
+    final double[][] du = new double[3][BLOCK];
+    final double[][] full = new double[3][];
+    final double[][] d = new double[3][BLOCK];
+    final double[] weight = new double[BLOCK];
+    final double[] density = new double[BLOCK];
+    final double[] v = new double[BLOCK];
+    final double[][] ray = new double[3][BLOCK];
+    final double[] sum = new double[BLOCK];
+}

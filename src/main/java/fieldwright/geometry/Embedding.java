@@ -1,0 +1,185 @@
+package fieldwright.geometry;
+
+import fieldwright.formula.Formula;
+
+/** From coordinates to positions: the differences to an anchor without cancellation, and the derivatives. */
+abstract class Embedding {
+    /** Position (m) of one set of coordinates. */
+    abstract double[] position(double[] c);
+
+    /** Fills offset and jacobian of the nodes from c and delta; {@code c0} are the anchor's coordinates. */
+    abstract void embed(double[] c0, double[] position0, Nodes nodes, int n);
+
+    /** True when coordinates are positions, so that the jacobian is the unit matrix and is left unset. */
+    boolean isCartesian() {
+        return false;
+    }
+
+    static Embedding of(CoordinateSystem system) {
+        return switch (system) {
+            case CARTESIAN -> new Cartesian();
+            case CYLINDRICAL -> new Cylindrical();
+            case SPHERICAL -> new Spherical();
+        };
+    }
+
+    static Embedding of(Nest nest, Formula x, Formula y, Formula z) {
+        return new Parametric(nest, x, y, z);
+    }
+
+    private static final class Cartesian extends Embedding {
+        @Override
+        double[] position(double[] c) {
+            return c.clone();
+        }
+
+        @Override
+        void embed(double[] c0, double[] position0, Nodes nodes, int n) {
+            for (int a = 0; a < 3; a++) {
+                System.arraycopy(nodes.delta[a], 0, nodes.offset[a], 0, n);
+            }
+        }
+
+        @Override
+        boolean isCartesian() {
+            return true;
+        }
+    }
+
+    private static final class Cylindrical extends Embedding {
+        @Override
+        double[] position(double[] c) {
+            return new double[] {c[0] * Math.cos(c[1]), c[0] * Math.sin(c[1]), c[2]};
+        }
+
+        @Override
+        void embed(double[] c0, double[] position0, Nodes nodes, int n) {
+            double sin0 = Math.sin(c0[1]);
+            double cos0 = Math.cos(c0[1]);
+            double[] rho = nodes.c[0];
+            for (int i = 0; i < n; i++) {
+                double half = nodes.delta[1][i] / 2;
+                double s = Math.sin(half);
+                double q = Math.cos(half);
+                double sinMiddle = sin0 * q + cos0 * s;
+                double cosMiddle = cos0 * q - sin0 * s;
+                double dRho = nodes.delta[0][i];
+                double r = rho[i];
+                nodes.offset[0][i] = dRho * cos0 - 2 * r * sinMiddle * s;
+                nodes.offset[1][i] = dRho * sin0 + 2 * r * cosMiddle * s;
+                nodes.offset[2][i] = nodes.delta[2][i];
+                double sin = sinMiddle * q + cosMiddle * s;
+                double cos = cosMiddle * q - sinMiddle * s;
+                nodes.jacobian[0][0][i] = cos;
+                nodes.jacobian[0][1][i] = sin;
+                nodes.jacobian[0][2][i] = 0;
+                nodes.jacobian[1][0][i] = -r * sin;
+                nodes.jacobian[1][1][i] = r * cos;
+                nodes.jacobian[1][2][i] = 0;
+                nodes.jacobian[2][0][i] = 0;
+                nodes.jacobian[2][1][i] = 0;
+                nodes.jacobian[2][2][i] = 1;
+            }
+        }
+    }
+
+    private static final class Spherical extends Embedding {
+        @Override
+        double[] position(double[] c) {
+            double rho = c[0] * Math.sin(c[1]);
+            return new double[] {rho * Math.cos(c[2]), rho * Math.sin(c[2]), c[0] * Math.cos(c[1])};
+        }
+
+        @Override
+        void embed(double[] c0, double[] position0, Nodes nodes, int n) {
+            double sinT0 = Math.sin(c0[1]);
+            double cosT0 = Math.cos(c0[1]);
+            double sinP0 = Math.sin(c0[2]);
+            double cosP0 = Math.cos(c0[2]);
+            for (int i = 0; i < n; i++) {
+                double r = nodes.c[0][i];
+                double dr = nodes.delta[0][i];
+                double half = nodes.delta[1][i] / 2;
+                double s = Math.sin(half);
+                double q = Math.cos(half);
+                double sinMiddle = sinT0 * q + cosT0 * s;
+                double cosMiddle = cosT0 * q - sinT0 * s;
+                double dRho = dr * sinT0 + 2 * r * cosMiddle * s;
+                double dz = dr * cosT0 - 2 * r * sinMiddle * s;
+                double sinT = sinMiddle * q + cosMiddle * s;
+                double cosT = cosMiddle * q - sinMiddle * s;
+                double rho = r * sinT;
+                half = nodes.delta[2][i] / 2;
+                s = Math.sin(half);
+                q = Math.cos(half);
+                sinMiddle = sinP0 * q + cosP0 * s;
+                cosMiddle = cosP0 * q - sinP0 * s;
+                nodes.offset[0][i] = dRho * cosP0 - 2 * rho * sinMiddle * s;
+                nodes.offset[1][i] = dRho * sinP0 + 2 * rho * cosMiddle * s;
+                nodes.offset[2][i] = dz;
+                double sinP = sinMiddle * q + cosMiddle * s;
+                double cosP = cosMiddle * q - sinMiddle * s;
+                nodes.jacobian[0][0][i] = sinT * cosP;
+                nodes.jacobian[0][1][i] = sinT * sinP;
+                nodes.jacobian[0][2][i] = cosT;
+                nodes.jacobian[1][0][i] = r * cosT * cosP;
+                nodes.jacobian[1][1][i] = r * cosT * sinP;
+                nodes.jacobian[1][2][i] = -rho;
+                nodes.jacobian[2][0][i] = -rho * sinP;
+                nodes.jacobian[2][1][i] = rho * cosP;
+                nodes.jacobian[2][2][i] = 0;
+            }
+        }
+    }
+
+    private static final class Parametric extends Embedding {
+        private final Scalar[] at = new Scalar[3];
+        private final Scalar[][] slope;
+
+        Parametric(Nest nest, Formula... position) {
+            int d = nest.names().size();
+            slope = new Scalar[d][3];
+            for (int a = 0; a < 3; a++) {
+                boolean any = position[a].variables().isEmpty() && position[a].fitsAnyUnit();
+                javax.measure.Dimension found = any ? fieldwright.quantity.Units.LENGTH : position[a].dimension(nest.dimensions());
+                if (!found.equals(fieldwright.quantity.Units.LENGTH)) {
+                    throw new fieldwright.quantity.AuthorException("parametric region: " + "xyz".charAt(a) + " = " + position[a].text() + " is "
+                        + fieldwright.quantity.Units.describe(found) + ", not a length. Give its lengths units, for example 0.5 m*cos(t).");
+                }
+                at[a] = Scalar.of(position[a], nest.names());
+                for (int m = 0; m < d; m++) {
+                    slope[m][a] = Scalar.of(position[a].derivative(nest.names().get(m)), nest.names());
+                }
+            }
+        }
+
+        @Override
+        double[] position(double[] c) {
+            double[][] one = new double[3][1];
+            for (int m = 0; m < c.length; m++) {
+                one[m][0] = c[m];
+            }
+            double[] p = new double[3];
+            double[] out = new double[1];
+            for (int a = 0; a < 3; a++) {
+                at[a].evaluate(one, 1, out);
+                p[a] = out[0];
+            }
+            return p;
+        }
+
+        @Override
+        void embed(double[] c0, double[] position0, Nodes nodes, int n) {
+            for (int a = 0; a < 3; a++) {
+                double[] o = nodes.offset[a];
+                at[a].evaluate(nodes.c, n, o);
+                for (int i = 0; i < n; i++) {
+                    o[i] -= position0[a];
+                }
+                for (int m = 0; m < slope.length; m++) {
+                    slope[m][a].evaluate(nodes.c, n, nodes.jacobian[m][a]);
+                }
+            }
+        }
+    }
+}

@@ -1,0 +1,20 @@
+package fieldwright.integral;
+
+/**
+ * A function of several components on a unit box, Jacobian of its map included.
+ * Implementations may keep scratch space: one thread at a time.
+ */
+public interface Integrand {
+    int dimension();
+
+    int components();
+
+    /**
+     * Values at {@code n} nodes, at most {@link #BLOCK}.
+     * {@code u[d][i]} is in [0, 1]; {@code out[c][i]} receives component c; {@code noise[i]} the rounding error, absolute,
+     * that the value's largest component carries beside the usual few units in its last place (0 when none).
+     */
+    void evaluate(double[][] u, int n, double[][] out, double[] noise);
+
+    int BLOCK = 256;
+}

@@ -1,0 +1,178 @@
+package fieldwright.integral;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.TreeSet;
+
+import fieldwright.formula.BlockFunction;
+import fieldwright.formula.Formula;
+import fieldwright.geometry.Chart;
+import fieldwright.geometry.Extent;
+import fieldwright.geometry.Nodes;
+import fieldwright.geometry.NodeFunction;
+import fieldwright.geometry.ParametricRegion;
+import fieldwright.geometry.Region;
+
+/**
+ * ∫ f over a region, with its measure (arc length, area, volume), or over bare variables, without.
+ * Value in the formula's unit times m^dimension (bare: times the variables' units).
+ * Errors: AuthorException from the region's checks. Accuracy: error estimate by Cubature; status says whether the goal was met.
+ */
+public final class RegionIntegral {
+    private RegionIntegral() {
+    }
+
+    /** With the measure of the region. */
+    public static Estimate over(Region region, Formula f, double relative, double absolute, int maxEvaluations) {
+        List<Cubature.Piece> pieces = new ArrayList<>();
+        for (Region.PlacedChart part : region.charts()) {
+            add(part.chart(), f, true, pieces);
+        }
+        return integrate(pieces, relative, absolute, maxEvaluations);
+    }
+
+    /** Without measure, over up to three variables with their limits, outermost first unless limits demand another order. */
+    public static Estimate bare(Map<String, Extent> limits, Formula f, double relative, double absolute, int maxEvaluations) {
+        List<Cubature.Piece> pieces = new ArrayList<>();
+        add(ParametricRegion.variables(limits), f, false, pieces);
+        return integrate(pieces, relative, absolute, maxEvaluations);
+    }
+
+    private static Estimate integrate(List<Cubature.Piece> pieces, double relative, double absolute, int maxEvaluations) {
+        return Cubature.integrate(pieces, 1, false, new Cubature.Goal(relative, 1e-3, absolute, maxEvaluations), null).estimate(0);
+    }
+
+    private static void add(Chart chart, Formula f, boolean measure, List<Cubature.Piece> pieces) {
+        int d = chart.dimension();
+        NodeFunction function = NodeFunction.of(f, chart);
+        if (d == 0) {
+            throw new fieldwright.quantity.AuthorException("integral over a point: give at least one coordinate limits.");
+        }
+        Values values = new Values(chart, function, measure);
+        double[][] cuts = breaks(chart, f);
+        int[] orders = new int[d];
+        java.util.Arrays.fill(orders, d == 1 ? 20 : d == 2 ? 14 : 10);
+        int[] index = new int[d];
+        while (true) {
+            double[] from = new double[d];
+            double[] to = new double[d];
+            for (int k = 0; k < d; k++) {
+                from[k] = cuts[k][index[k]];
+                to[k] = cuts[k][index[k] + 1];
+            }
+            pieces.add(new Cubature.Piece(values, from, to, orders));
+            int k = 0;
+            while (k < d && ++index[k] == cuts[k].length - 1) {
+                index[k++] = 0;
+            }
+            if (k == d) {
+                return;
+            }
+        }
+    }
+
+    /**
+     * Where each depth of a chart should be cut: at zeros of the formula's kinks that depend on one coordinate with constant
+     * limits. Always contains 0 and 1.
+     */
+    public static double[][] breaks(Chart chart, Formula f) {
+        double[][] cuts = new double[chart.dimension()][];
+        for (int k = 0; k < cuts.length; k++) {
+            TreeSet<Double> found = new TreeSet<>(List.of(0.0, 1.0));
+            String name = chart.coordinates().get(chart.coordinateOf(k));
+            if (chart.hasConstantLimits(k) && !chart.isEndless(k)) {
+                for (Formula kink : f.kinks()) {
+                    if (kink.variables().size() == 1 && kink.variables().contains(name)) {
+                        roots(kink.compile(List.of(name)), chart, k, found);
+                    }
+                }
+            }
+            cuts[k] = found.stream().mapToDouble(Double::doubleValue).toArray();
+        }
+        return cuts;
+    }
+
+    private static void roots(BlockFunction kink, Chart chart, int depth, TreeSet<Double> found) {
+        double a = chart.lower(depth);
+        double b = chart.upper(depth);
+        double before = kink.at(a);
+        int steps = 200;
+        for (int i = 1; i <= steps; i++) {
+            double low = a + (b - a) * (i - 1) / steps;
+            double high = i == steps ? b : a + (b - a) * i / steps;
+            double after = kink.at(high);
+            if (before * after < 0) {
+                double sign = before;
+                for (int step = 0; step < 100 && high - low > 1e-16 * (b - a); step++) {
+                    double middle = (low + high) / 2;
+                    if (kink.at(middle) * sign > 0) {
+                        low = middle;
+                    } else {
+                        high = middle;
+                    }
+                }
+                cut(chart, depth, (low + high) / 2, found);
+            } else if (after == 0) {
+                cut(chart, depth, high, found);
+            }
+            before = after;
+        }
+    }
+
+    private static void cut(Chart chart, int depth, double coordinate, TreeSet<Double> found) {
+        double u = chart.parameter(depth, coordinate);
+        if (u > 1e-12 && u < 1 - 1e-12) {
+            found.add(u);
+        }
+    }
+
+    private static final class Values implements Integrand {
+        private final Chart chart;
+        private final NodeFunction f;
+        private final boolean measure;
+        private final Chart.Anchor anchor;
+        private final Nodes nodes = new Nodes();
+        private final double[][] du;
+        private final double[] weight = new double[BLOCK];
+
+        Values(Chart chart, NodeFunction f, boolean measure) {
+            this.chart = chart;
+            this.f = f;
+            this.measure = measure;
+            double[] u = new double[chart.dimension()];
+            java.util.Arrays.fill(u, 0.5);
+            anchor = chart.anchor(u);
+            du = new double[chart.dimension()][BLOCK];
+        }
+
+        @Override
+        public int dimension() {
+            return chart.dimension();
+        }
+
+        @Override
+        public int components() {
+            return 1;
+        }
+
+        @Override
+        public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
+            for (int k = 0; k < du.length; k++) {
+                for (int i = 0; i < n; i++) {
+                    du[k][i] = u[k][i] - 0.5;
+                }
+            }
+            chart.evaluate(anchor, du, n, nodes);
+            f.evaluate(nodes, anchor.position(), n, out[0]);
+            double[] w = nodes.measure;
+            if (!measure) {
+                w = weight;
+                chart.differentials(nodes, n, w);
+            }
+            for (int i = 0; i < n; i++) {
+                out[0][i] = w[i] == 0 ? 0 : out[0][i] * w[i];
+            }
+        }
+    }
+}
