@@ -231,6 +231,12 @@ public final class Formula {
             && (c.relation() == Node.Relation.MUCH_GREATER || c.relation() == Node.Relation.MUCH_LESS));
     }
 
+    /** This formula, with an error that names {@code name} where the bound condition does not hold. */
+    public Formula guarded(String name, Formula condition) {
+        Node whole = new Node.Inlined(name, condition.text, List.of(), List.of(), condition.tree, tree, tree.at());
+        return new Formula(whole, written, text, integrator);
+    }
+
     public Formula plus(Formula b) {
         return combined(Node.Operator.PLUS, b);
     }
