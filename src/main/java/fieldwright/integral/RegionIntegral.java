@@ -20,6 +20,9 @@ import fieldwright.geometry.Region;
  * Errors: AuthorException from the region's checks. Accuracy: error estimate by Cubature; status says whether the goal was met.
  */
 public final class RegionIntegral {
+    /** Of formula, measure and summation together, as a part of the sum of absolute contributions. */
+    private static final double ROUNDING = 16 * 1.2e-16;
+
     private RegionIntegral() {
     }
 
@@ -40,7 +43,8 @@ public final class RegionIntegral {
     }
 
     private static Estimate integrate(List<Cubature.Piece> pieces, double relative, double absolute, int maxEvaluations) {
-        return Cubature.integrate(pieces, 1, false, new Cubature.Goal(relative, 1e-3, absolute, maxEvaluations), null).estimate(0);
+        Cubature.Result r = Cubature.integrate(pieces, 1, false, new Cubature.Goal(relative, 1e-3, absolute, maxEvaluations), null);
+        return new Estimate(r.value()[0], r.error()[0] + ROUNDING * r.magnitude()[0], r.evaluations(), r.status());
     }
 
     private static void add(Chart chart, Formula f, boolean measure, List<Cubature.Piece> pieces) {

@@ -1,0 +1,119 @@
+package fieldwright.words;
+
+import fieldwright.formula.Coordinates;
+import fieldwright.formula.Formula;
+import fieldwright.quantity.Amount;
+import fieldwright.quantity.AuthorException;
+import fieldwright.quantity.Place;
+import fieldwright.quantity.Vector;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+
+/** One line of a profile: what to ask of which charge, or a formula of the coordinates. Immutable. */
+public final class Curve {
+    private static final List<String> PARTS = List.of("x", "y", "z", "rho", "phi", "r", "theta");
+
+    private final String label;
+    private final String asked;
+    private final Along along;
+
+    private Curve(String label, String asked, Along along) {
+        this.label = label;
+        this.asked = asked;
+        this.along = along;
+    }
+
+    /** Values along a path. A place where the value jumps has two, in the order of the path. */
+    interface Along {
+        List<List<Amount>> values(List<Path.Stop> stops);
+    }
+
+    String label() {
+        return label;
+    }
+
+    /** What stands on the y axis: {@code E_z}, {@code V}, or empty for a formula. */
+    String asked() {
+        return asked;
+    }
+
+    List<List<Amount>> values(List<Path.Stop> stops) {
+        return along.values(stops);
+    }
+
+    /** @param ask {@code "|E|"}, {@code "E_z"}, {@code "D_rho"}, … or {@code "V"} */
+    static Curve of(String label, Distribution charge, String ask) {
+        if (ask.equals("V")) {
+            return new Curve(label, "V", stops -> each(charge.potentials(places(stops))));
+        }
+        boolean size = ask.equals("|E|") || ask.equals("|D|");
+        String component = ask.length() > 2 ? ask.substring(2) : "";
+        if (!size && !(ask.matches("[ED]_.*") && PARTS.contains(component))) {
+            throw new AuthorException("curve '" + label + "' asks for '" + ask + "'. Ask for \"|E|\", \"E_z\" (or x, y, rho, phi, r, theta),"
+                    + " the same with D, or \"V\".");
+        }
+        boolean displacement = ask.contains("D");
+        return new Curve(label, ask, stops -> {
+            List<Vector> fields = displacement ? charge.fluxDensities(places(stops)) : charge.electricFields(places(stops));
+            List<List<Amount>> values = new ArrayList<>();
+            for (int i = 0; i < stops.size(); i++) {
+                values.add(sides(fields.get(i), stops, i, component));
+            }
+            return values;
+        });
+    }
+
+    static Curve of(String label, Object formula) {
+        Formula bound = Given.formula("curve '" + label + "'", formula);
+        return new Curve(label, "", stops -> stops.stream().map(stop -> List.of(at(stop.place(), bound))).toList());
+    }
+
+    private static List<Place> places(List<Path.Stop> stops) {
+        return stops.stream().map(Path.Stop::place).toList();
+    }
+
+    private static List<List<Amount>> each(List<Amount> amounts) {
+        return amounts.stream().map(List::of).toList();
+    }
+
+    /** On a charged surface the side the path comes from and the side it goes to; at an end, the one side there is. */
+    private static List<Amount> sides(Vector field, List<Path.Stop> stops, int i, String component) {
+        if (!field.isSided()) {
+            return List.of(part(field, component));
+        }
+        List<Amount> values = new ArrayList<>();
+        for (int neighbour : new int[] {i - 1, i + 1}) {
+            if (neighbour >= 0 && neighbour < stops.size()) {
+                Place here = field.place();
+                Place there = stops.get(neighbour).place();
+                values.add(part(field.onSide(there.x() - here.x(), there.y() - here.y(), there.z() - here.z()), component));
+            }
+        }
+        return values;
+    }
+
+    private static Amount part(Vector v, String component) {
+        return switch (component) {
+            case "x" -> v.x();
+            case "y" -> v.y();
+            case "z" -> v.z();
+            case "rho" -> v.rho();
+            case "phi" -> v.phi();
+            case "r" -> v.r();
+            case "theta" -> v.theta();
+            default -> v.magnitude();
+        };
+    }
+
+    private static Amount at(Place p, Formula formula) {
+        Map<String, Amount> values = new LinkedHashMap<>();
+        double[] coordinates = {p.x(), p.y(), p.z(), p.rho(), p.phi(), p.r(), p.theta()};
+        for (int i = 0; i < PARTS.size(); i++) {
+            values.put(PARTS.get(i), Amount.si(coordinates[i], 0, Coordinates.DIMENSIONS.get(PARTS.get(i))));
+        }
+        values.keySet().retainAll(formula.variables());
+        return formula.amount(values);
+    }
+}

@@ -1,0 +1,184 @@
+package fieldwright.words;
+
+import fieldwright.charge.Source;
+import fieldwright.charge.Surroundings;
+import fieldwright.field.FieldSolver;
+import fieldwright.output.Output;
+import fieldwright.quantity.Amount;
+import fieldwright.quantity.AuthorException;
+import fieldwright.quantity.Place;
+import fieldwright.quantity.Vector;
+import java.util.List;
+import java.util.function.Function;
+
+/**
+ * Charge, and once stated what stands around it; then it can be asked. Every question puts the surroundings among the
+ * cell's assumptions. Immutable.
+ */
+public final class Distribution {
+    private final String kind;
+    private final Source source;
+    private final String assumption;
+    private final Place zero;
+
+    private Distribution(String kind, Source source, String assumption, Place zero) {
+        this.kind = kind;
+        this.source = source;
+        this.assumption = assumption;
+        this.zero = zero;
+    }
+
+    static Distribution of(String kind, Source source) {
+        return new Distribution(kind, source, null, null);
+    }
+
+    /** Several together; surroundings are theirs when all have them, and then one and the same. */
+    static Distribution together(List<Distribution> parts) {
+        if (parts.isEmpty()) {
+            throw new AuthorException("sources(): nothing to add. Name the charges, for example sources(cloud, film).");
+        }
+        Source all = new fieldwright.charge.Sources(parts.stream().map(p -> p.source).toList());
+        boolean stated = parts.stream().allMatch(p -> p.assumption != null);
+        return new Distribution("charge of sources(…)", all, stated ? parts.get(0).assumption : null, null);
+    }
+
+    // Surroundings
+
+    /** Nothing near: a statement, printed among the assumptions. */
+    public Distribution inFreeSpace() {
+        return in(Surroundings.FREE_SPACE, "free space: no conductor or dielectric near");
+    }
+
+    /** A uniform medium everywhere. */
+    public Distribution inMedium(Object relativePermittivity) {
+        double permittivity = Given.plain("inMedium, relative permittivity", relativePermittivity);
+        return in(new Surroundings.Medium(permittivity),
+                "uniform medium everywhere, relative permittivity " + described(relativePermittivity, permittivity));
+    }
+
+    /** Above an earthed plane: the charge and the field lie on the side of growing z. */
+    public Distribution above(GroundPlane plane) {
+        return over("above", plane, 1);
+    }
+
+    /** Below an earthed plane, such as a roof: the charge and the field lie on the side of falling z. */
+    public Distribution under(GroundPlane plane) {
+        return over("under", plane, -1);
+    }
+
+    /**
+     * Beside an upright earthed plane.
+     *
+     * @param side on which the charge and the field lie, by a direction along the plane's axis: {@code "+x"}, {@code "-y"}
+     */
+    public Distribution beside(GroundPlane plane, String side) {
+        String text = side.strip().replace('\u2212', '-');
+        if (plane.axis().equals("z") || !text.matches("[+-]" + plane.axis())) {
+            throw new AuthorException("beside(ground plane " + plane.text() + ", \"" + side + "\"): " + (plane.axis().equals("z")
+                    ? "a plane across z lies flat. Use .above(…) or .under(…)."
+                    : "name the side the charge is on: \"+" + plane.axis() + "\" or \"-" + plane.axis() + "\"."));
+        }
+        return grounded(plane, text.startsWith("-") ? -1 : 1);
+    }
+
+    private Distribution over(String word, GroundPlane plane, int side) {
+        if (!plane.axis().equals("z")) {
+            throw new AuthorException(word + "(ground plane " + plane.text() + "): a plane across " + plane.axis()
+                    + " stands upright. Use .beside(groundPlane(…), \"+" + plane.axis() + "\").");
+        }
+        return grounded(plane, side);
+    }
+
+    private Distribution grounded(GroundPlane plane, int side) {
+        return in(new Surroundings.GroundPlane(plane.axis(), plane.offset(), side), "ground plane " + plane.text() + ", field region "
+                + plane.axis() + (side > 0 ? " > " : " < ") + plane.offsetText() + "; no other conductor or dielectric near");
+    }
+
+    /** In front of a dielectric that fills the other side of a plane. */
+    public Distribution facing(DielectricHalfSpace wall) {
+        return in(new Surroundings.DielectricHalfSpace(wall.axis(), wall.offset(), -wall.filled(), 1, wall.behind()),
+                wall.text() + ", charge before it in air; no conductor near");
+    }
+
+    /** Outside an earthed sphere; the potential is zero on it. */
+    public Distribution outside(GroundedSphere sphere) {
+        return in(new Surroundings.GroundedSphere(sphere.centre().x(), sphere.centre().y(), sphere.centre().z(), sphere.radius(), true),
+                sphere.text() + ", field region outside it; no other conductor or dielectric near");
+    }
+
+    /** Inside an earthed spherical shell. */
+    public Distribution inside(GroundedSphere sphere) {
+        return in(new Surroundings.GroundedSphere(sphere.centre().x(), sphere.centre().y(), sphere.centre().z(), sphere.radius(), false),
+                sphere.text() + ", field region inside it");
+    }
+
+    private Distribution in(Surroundings around, String text) {
+        if (assumption != null) {
+            throw new AuthorException(kind + ": its surroundings are stated twice, '" + assumption + "' and '" + text + "'. Keep one.");
+        }
+        return new Distribution(kind, source.with(around), text, zero);
+    }
+
+    private static String described(Object given, double value) {
+        String text = Given.text(given);
+        return text.matches("[0-9.eE+-]+") ? text : text + " = " + Amount.of(value);
+    }
+
+    // Questions
+
+    /** Potential is counted from this place on; endless charge has no other zero. */
+    public Distribution zeroAt(Place place) {
+        return new Distribution(kind, source, assumption, place);
+    }
+
+    /** Total charge on the region, in C; charge induced on conductors is not counted. */
+    public Amount totalCharge() {
+        return ask(solver -> solver.totalCharge());
+    }
+
+    /** Electric field strength in V/m. On a charged surface or a conductor a pair of one-sided values. */
+    public Vector electricField(Place place) {
+        return ask(solver -> solver.electricField(place));
+    }
+
+    /** Electric flux density D in C/m². */
+    public Vector fluxDensity(Place place) {
+        return ask(solver -> solver.fluxDensity(place));
+    }
+
+    /** Potential in V; zero at infinity, on the grounded conductor, or where {@link #zeroAt} says. */
+    public Amount potential(Place place) {
+        return ask(solver -> potential(solver, place));
+    }
+
+    List<Vector> electricFields(List<Place> places) {
+        return ask(solver -> places.stream().map(solver::electricField).toList());
+    }
+
+    List<Vector> fluxDensities(List<Place> places) {
+        return ask(solver -> places.stream().map(solver::fluxDensity).toList());
+    }
+
+    List<Amount> potentials(List<Place> places) {
+        return ask(solver -> places.stream().map(place -> potential(solver, place)).toList());
+    }
+
+    private Amount potential(FieldSolver solver, Place place) {
+        return zero == null ? solver.potential(place) : solver.potential(place, zero);
+    }
+
+    private <T> T ask(Function<FieldSolver, T> question) {
+        if (assumption == null) {
+            throw new AuthorException(kind + ": its surroundings are not stated, so it answers nothing. Write .inFreeSpace(), .inMedium(eps_r),"
+                    + " or .under(groundPlane(\"z\", \"H\")) (.above, .beside) after it. Leaving out an earthed wall errs to the unsafe side.");
+        }
+        Desk desk = Desk.current();
+        desk.sayOnce(new Output.Assumption(assumption));
+        return question.apply(FieldSolver.of(source, desk.accuracy()));
+    }
+
+    /** The charge as the engine takes it. */
+    Source source() {
+        return source;
+    }
+}
