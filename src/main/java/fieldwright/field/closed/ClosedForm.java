@@ -6,7 +6,8 @@ package fieldwright.field.closed;
  * <p>Bare kernel, no 1/(4 pi eps0): E = ∫ density (r - r')/|r - r'|³, V = ∫ density/|r - r'|. Every body is an
  * immutable record that checks itself on entry; asking is thread-safe and keeps nothing.
  */
-public sealed interface ClosedForm permits Rod, Polygon, Box, Ring, Disc, SphericalShell, Ball {
+public sealed interface ClosedForm permits Rod, Polygon, Box, Ring, Disc, Tube, Cylinder, SphericalShell, Ball,
+        EndlessLine, HalfEndlessLine, EndlessPlane, Strip, Slab, EndlessTube, EndlessCylinder {
     /**
      * Field and potential at a place of the local frame.
      *

@@ -79,7 +79,7 @@ public record Disc(double radius, double density) implements ClosedForm {
         double scale = 4 * a / rim.far;
         double eRho = rim.m > 0.4 ? scale * (d - b) : scale * rim.m * CompleteIntegral.mixed(rim.m, rim.kc);
         double eRhoTerms = rim.m > 0.4 ? scale * (d + b) : eRho;
-        SolidAngle angle = SolidAngle.ofDisc(rim, moved);
+        SolidAngle angle = SolidAngle.ofDisc(rim);
         double flat = scale * ((a + rho) * b + (a - rho) * d);
         double flatTerms = scale * ((a + rho) * b + Math.abs(a - rho) * d);
         double h = Math.abs(z);

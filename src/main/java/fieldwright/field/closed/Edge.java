@@ -37,12 +37,18 @@ final class Edge {
             cubed = 0;
             return;
         }
-        // ln((R1 + R2 + length)/(R1 + R2 - length)), its denominator from positive terms only
-        double gap = beside ? d2 / (r1 - s1) + d2 / (r2 + s2)
-                : s1 >= 0 ? r1 + s1 + d2 / (r2 + s2) : r2 - s2 + d2 / (r1 - s1);
-        log = Math.log1p(2 * length / gap);
+        log = log(s1, s2, length, d2);
         cubed = beside ? (s2 / r2 - s1 / r1) / d2
                 : length * Math.abs(s1 + s2) / (r1 * r2 * (Math.abs(s2) * r1 + Math.abs(s1) * r2));
+    }
+
+    /** ∫ ds/R = ln((R1 + R2 + length)/(R1 + R2 - length)), its denominator from positive terms only. */
+    static double log(double s1, double s2, double length, double d2) {
+        double r1 = Math.sqrt(s1 * s1 + d2);
+        double r2 = Math.sqrt(s2 * s2 + d2);
+        double gap = s1 >= 0 ? r1 + s1 + d2 / (r2 + s2)
+                : s2 <= 0 ? r2 - s2 + d2 / (r1 - s1) : d2 / (r1 - s1) + d2 / (r2 + s2);
+        return Math.log1p(2 * length / gap);
     }
 
     /** ∫ R ds. */

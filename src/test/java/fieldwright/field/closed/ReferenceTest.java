@@ -36,7 +36,7 @@ class ReferenceTest {
      * pass otherwise.
      */
     @ParameterizedTest(name = "{0}")
-    @CsvSource({"rod, 1", "polygon, 8", "box, 16", "ring, 4", "disc, 4", "shell, 2", "ball, 2"})
+    @CsvSource({"rod, 1", "polygon, 8", "box, 16", "ring, 4", "disc, 4", "tube, 4", "cylinder, 8", "strip, 4", "halfLine, 4", "shell, 2", "ball, 2"})
     void agreesWithHighPrecision(String name, double widest) throws IOException {
         List<Row> rows = read(name);
         assertTrue(rows.size() >= 100, () -> "only " + rows.size() + " rows");
@@ -80,6 +80,9 @@ class ReferenceTest {
         if (form instanceof Box b) {
             return Math.min(b.x2() - b.x1(), Math.min(b.y2() - b.y1(), b.z2() - b.z1()));
         }
+        if (form instanceof Cylinder c) {
+            return c.z2() - c.z1();
+        }
         return form instanceof Ball b ? b.outer() - b.inner() : Double.POSITIVE_INFINITY;
     }
 
@@ -97,6 +100,14 @@ class ReferenceTest {
                 return new Ring(p[0], p[1]);
             case "disc":
                 return new Disc(p[0], p[1]);
+            case "tube":
+                return new Tube(p[0], p[1], p[2], p[3]);
+            case "cylinder":
+                return new Cylinder(p[0], p[1], p[2], p[3]);
+            case "strip":
+                return new Strip(p[0], p[1], p[2]);
+            case "halfLine":
+                return new HalfEndlessLine(p[0]);
             case "shell":
                 return new SphericalShell(p[0], p[1]);
             case "ball":

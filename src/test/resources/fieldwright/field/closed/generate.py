@@ -243,6 +243,85 @@ def ball(p, r):
     return [Q * c / d ** 3 for c in x] + [v + Q / d]
 
 
+def tube(p, r):
+    """Rings summed over their height by quadrature, breaks crowding towards the place."""
+    z1, z2, a, q = F(p)
+    x, y, z = F(r)
+    old = mp.dps
+    mp.dps = 26
+    breaks = {z1, z2}
+    for sign in (-1, 0, 1):
+        for e in range(-10, 2):
+            c = z + sign * mpf(10) ** e
+            if z1 < c < z2:
+                breaks.add(c)
+    cache = {}
+
+    def part(t, c):
+        if t not in cache:
+            mp.dps = 45  # the ring's own formula cancels near the axis and near the ring
+            cache[t] = ring_mp(a, q, (x, y, z - t))
+            mp.dps = 26
+        return cache[t][c]
+
+    out = [quad(lambda t: part(t, c), sorted(breaks)) for c in range(4)]
+    mp.dps = old
+    return out
+
+
+def cylinder(p, r):
+    """Surface integrals over the azimuth by quadrature: Ez from the end discs, Erho and V = ½ ∮ h dA/R with the side."""
+    z1, z2, a, q = F(p)
+    x, y, z = F(r)
+    old = mp.dps
+    mp.dps = 40
+    rho = sqrt(x * x + y * y)
+    up, down = z2 - z, z1 - z
+    top, bottom = disc_mp(a, rho, up), disc_mp(a, rho, down)
+    breaks = {mpf(0)}
+    for w in (abs(a - rho), sqrt((a - rho) ** 2 + up * up), sqrt((a - rho) ** 2 + down * down)):
+        breaks |= set(rim_breaks(max(mpf(10) ** -12, min(mpf(1), w / a))))
+    breaks = sorted(breaks)
+    s2 = lambda f: (a - rho) ** 2 + 4 * a * rho * sin(f / 2) ** 2
+    L = lambda f: asinh(up / sqrt(s2(f))) - asinh(down / sqrt(s2(f)))
+    er = 2 * a * quad(lambda f: cos(f) * L(f), breaks)
+    side = 2 * a * quad(lambda f: (a - rho + 2 * rho * sin(f / 2) ** 2) * L(f), breaks)
+    v = (up * top - down * bottom + side) / 2
+    mp.dps = old
+    c, s = (x / rho, y / rho) if rho != 0 else (mpf(0), mpf(0))
+    return q * er * c, q * er * s, q * (top - bottom), q * v
+
+
+def disc_mp(a, rho, z):
+    global F
+    keep = F
+    F = lambda v: [mpf(c) for c in v]
+    try:
+        return disc([a, mpf(1)], (rho, mpf(0), z))[3]
+    finally:
+        F = keep
+
+
+def strip(p, r):
+    """Endless lines summed over the width: textbook antiderivatives at 100 digits."""
+    x1, x2, q = F(p)
+    x, y, z = F(r)
+    u1, u2 = x1 - x, x2 - x
+    at = lambda u: atan(u / z) if z != 0 else mpf(0)
+    m = lambda u: (u * log(u * u + z * z) if u != 0 or z != 0 else 0) - 2 * u + 2 * z * at(u)
+    return q * (log(u1 * u1 + z * z) - log(u2 * u2 + z * z)), mpf(0), 2 * q * (at(u2) - at(u1)), -q * (m(u2) - m(u1))
+
+
+def half_line(p, r):
+    """Limit of the rod's textbook form at 100 digits."""
+    q, = F(p)
+    x, y, z = F(r)
+    rho2 = x * x + y * y
+    d = sqrt(rho2 + z * z)
+    across = (1 + z / d) / rho2 if rho2 != 0 else mpf(0)
+    return q * across * x, q * across * y, -q / d, -q * log(d - z)
+
+
 # ---- places: anchors on or in the body, and directions to leave them ----
 
 def leave(anchors, gaps=GAPS):
@@ -330,6 +409,22 @@ def build():
     case('ball', ball, [1.4999, 1.5, 0.7], places + list(leave([((0.0, 0.0, 1.4999), [(0, 0, 1), (0, 0, -1)])])), far)
 
 
+    few = [1e-9, 1e-7, 1e-5, 1e-3, 0.03, 0.4, 1.0, 2.5, 5.0, 20.0, 1e2, 1e4, 1e6, 1e8]
+    for p in ([-1.0, 0.5, 0.8, 1.3], [0.0, 1e-3, 0.8, 1.3], [-10.0, 10.0, 0.05, 1.3]):
+        z1, z2, a, q = p
+        mid = (z1 + z2) / 2
+        places = list(leave([((a, 0.0, z2), [(1, 0, 0), (0.6, -0.3, 0.7), (-0.5, 0.2, -0.6), (-0.1, 0, 1)]),
+                             ((a, 0.0, mid), [(1, 0, 1e-4), (-1, 0.2, 0.3)]), ((0.0, 0.0, 0.9 * z1 + 0.1 * z2), [(0.3, 0.2, 0.5)]), ((0.0, -a / 3, z2), [(0, 0, 1)])], few))
+        gap = lambda r, p=p: min(rim_gap(p[2], r, p[0]), rim_gap(p[2], r, p[1]))
+        case('tube', tube, p, places, gap)
+        case('cylinder', cylinder, p, places, gap)
+    p = [-0.5, 1.5, 0.9]
+    case('strip', strip, p, leave([((1.5, 0, 0), [(1, 0, 0), (0.5, 0, 1), (-0.7, 0.1, -0.4)]), ((0.2, 0, 0), up + [(1, 0, 1)])]),
+         lambda r: min(sqrt((mpf(r[0]) - e) ** 2 + mpf(r[2]) ** 2) for e in (mpf(-0.5), mpf(1.5))))
+    case('halfLine', half_line, [0.9], leave([((0, 0, 1.0), [(1, 0, 0), (0.6, 0.8, 1e-3)]), ((0, 0, 0), [(1, 0, 0), (0.1, 0.2, -1), (1, 0, 1)])]),
+         lambda r: (sqrt(mpf(r[0]) ** 2 + mpf(r[1]) ** 2) if r[2] > 0 else norm(F(r))))
+
+
 # ---- self-check: plain quadrature of Coulomb's law at places a good way off ----
 
 def self_check():
@@ -373,7 +468,30 @@ def self_check():
     close(ring([1.25, 0.8], r), [quad(lambda f: kernel(r, (a * cos(f), a * sin(f), mpf(0)), mpf(0.8) * a)[c], linspace(0, 2 * pi, 9)) for c in range(4)], 'ring')
     close(disc([1.25, 0.8], r), [quad(lambda s: ring([float(s), 0.8], r)[c], [0, 1.25]) if False else
                                  sum(w * a / 2 * ring_mp(a * (1 + n) / 2, mpf(0.8), r)[c] for n, w in zip(*gauss(40))) for c in range(4)], 'disc')
+    p = [-1.0, 0.5, 0.8, 1.3]
+    r = (1.7, -0.5, 0.9)
+    b = mpf(0.8)
+    def surface(c):  # tube by plain Gauss in both
+        m = 48
+        return sum(wz * mpf(0.75) * 2 * pi / m * b * kernel(r, (b * cos(2 * pi * k / m), b * sin(2 * pi * k / m), mpf(-0.25) + mpf(0.75) * nz), mpf(1.3))[c]
+                   for k in range(m) for nz, wz in zip(nodes, weights))
+    close(tube(p, r), [surface(c) for c in range(4)], 'tube')
+    discs = [[mpf(0.75) * w * c for c in disc_all(b, mpf(1.3), (r[0], r[1], mpf(r[2]) - (mpf(-0.25) + mpf(0.75) * n)))] for n, w in zip(*gauss(24))]
+    close(cylinder(p, r), [sum(d[c] for d in discs) for c in range(4)], 'cylinder')
+    lines = [[2 * w * mpf(0.9) * (mpf(r[0]) - xx) / ((mpf(r[0]) - xx) ** 2 + mpf(r[2]) ** 2), mpf(0), 2 * w * mpf(0.9) * mpf(r[2]) / ((mpf(r[0]) - xx) ** 2 + mpf(r[2]) ** 2),
+              -w * mpf(0.9) * log((mpf(r[0]) - xx) ** 2 + mpf(r[2]) ** 2)] for xx, w in ((mpf(0.5) + n, w) for n, w in zip(*gauss(60)))]
+    close(strip([-0.5, 1.5, 0.9], r), [sum(d[c] for d in lines) for c in range(4)], 'strip')
     mp.dps = 100
+
+
+def disc_all(a, q, r):
+    global F
+    keep = F
+    F = lambda v: [mpf(c) for c in v]
+    try:
+        return disc([a, q], r)
+    finally:
+        F = keep
 
 
 def ring_mp(a, q, r):
