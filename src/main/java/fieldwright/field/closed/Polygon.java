@@ -158,8 +158,7 @@ public record Polygon(double[] cornerX, double[] cornerY, double density, double
         double v0 = sums.potential();
         double v = atFoot * v0 + slopeX * sums.momentX + slopeY * sums.momentY;
         double q = Math.abs(atFoot);
-        double errV = q * sums.errPotential() + footError * sums.potentialTerms + slope * sums.errMoment
-                + placeError * (q * sums.fieldTerms() + slope * sums.potentialTerms);
+        double errV = q * sums.errPotential() + footError * sums.potentialTerms + slope * sums.errMoment;
         if (sums.touched && q > footError) {
             double edge = Math.signum(atFoot);
             return Closed.onEdge(Closed.Direction.of(edge * sums.touchX, edge * sums.touchY, 0), v, errV);
@@ -167,7 +166,7 @@ public record Polygon(double[] cornerX, double[] cornerY, double density, double
         double ex = atFoot * sums.fieldX + sums.weightedX - slopeX * v0;
         double ey = atFoot * sums.fieldY + sums.weightedY - slopeY * v0;
         double ez = Math.signum(z) * (atFoot * sums.angle - h * sums.slopeLog);
-        double errE = q * sums.errField + footError * sums.fieldTerms() + slope * (sums.errWeighted + sums.errPotential());
+        double errE = q * (sums.errField + placeError * sums.tide()) + footError * sums.fieldTerms() + slope * (sums.errWeighted + sums.errPotential());
         if (!flat) {
             return Closed.regular(ex, ey, ez, v, errE, errV);
         }
@@ -182,7 +181,7 @@ public record Polygon(double[] cornerX, double[] cornerY, double density, double
         double atCentre = density + slopeX * centre[0] + slopeY * centre[1];
         FarSum sum = new FarSum(dx, dy, z);
         double twiceArea = 0;
-        double scale = 0;
+        double crossTerms = 0;
         for (int i = 0; i < cornerX.length; i++) {
             int next = (i + 1) % cornerX.length;
             double px = cornerX[i] - centre[0];
@@ -191,13 +190,14 @@ public record Polygon(double[] cornerX, double[] cornerY, double density, double
             double ey = cornerY[next] - cornerY[i];
             double twice = px * ey - ex * py;
             twiceArea += twice;
-            scale += Math.abs(twice);
+            crossTerms += radius * Math.hypot(ex, ey);
             addTriangle(sum, rule, px, py, ex, ey, twice, atCentre);
         }
         double total = 0.5 * twiceArea * atCentre;
         double sumOfSizes = Math.abs(density) + Math.abs(slopeX * centre[0]) + Math.abs(slopeY * centre[1]);
-        double totalError = 4 * EPS * scale * sumOfSizes + 8 * EPS * scale * radius * Math.hypot(slopeX, slopeY)
-                + 2 * EPS * scale / radius * reach() * sumOfSizes;
+        // a narrow polygon's area and centroid are known to the rounding of length times length
+        double totalError = 2 * EPS * crossTerms * (sumOfSizes + radius * Math.hypot(slopeX, slopeY))
+                + EPS * Math.abs(twiceArea) * reach() * Math.hypot(slopeX, slopeY);
         return sum.with(total, totalError, placeError);
     }
 

@@ -42,6 +42,9 @@ final class SideSums {
     private double errFlat;
     private double errAngle;
     private double logs;
+    private double tide;
+    private double nearestSide = Double.POSITIVE_INFINITY;
+    private boolean footWithin;
     private double angles;
 
     SideSums(double x, double y, double h, double placeError, double slopeX, double slopeY) {
@@ -73,7 +76,12 @@ final class SideSums {
             touch(e, ty, -tx, length, moved);
             return;
         }
-        add(e, q, tx, ty, moved);
+        add(e, q, tx, ty, 2 * EPS * cornerGap);
+        double gap = e.s1 < 0 && e.s2 > 0 ? Math.sqrt(e.d2) : Math.min(e.r1, e.r2);
+        nearestSide = Math.min(nearestSide, gap);
+        if (ay > y != by > y && (ax - x) * (by - ay) - (ay - y) * (bx - ax) > 0 == by > ay) {
+            footWithin = !footWithin;
+        }
     }
 
     /** Place on this side: its L is infinite; what is finite still counts. */
@@ -98,7 +106,8 @@ final class SideSums {
         errAngle += 2 * Math.PI;
     }
 
-    private void add(Edge e, double q, double tx, double ty, double moved) {
+    /** @param rounded how far the distances of this side are off by their own rounding, place taken as exact */
+    private void add(Edge e, double q, double tx, double ty, double rounded) {
         double mx = ty;
         double my = -tx;
         double log = e.log;
@@ -106,21 +115,23 @@ final class SideSums {
         double a2 = Math.atan2(q * e.s2, e.d2 + h * e.r2);
         double terms = Math.abs(a1) + Math.abs(a2);
         double slopeOfLog = e.slope();
-        double errLog = 4 * EPS * log + moved * slopeOfLog;
+        double errLog = 4 * EPS * log + rounded * slopeOfLog;
         // the angles themselves turn with the corners' rounding, which is relative to the corners' distances
-        double errBeta = 4 * EPS * (terms + 1) + moved * slopeOfLog;
+        double errBeta = 4 * EPS * (terms + 1) + rounded * slopeOfLog;
+        tide += 2 * slopeOfLog;
         fieldX += mx * log;
         fieldY += my * log;
         angle += a2 - a1;
         flat += q * log;
         errField += errLog + errBeta;
-        errFlat += Math.abs(q) * errLog + moved * log;
+        errFlat += Math.abs(q) * errLog + rounded * log;
         errAngle += errBeta;
         logs += log;
         angles += terms;
         potentialTerms += Math.abs(q) * log + h * terms;
+        double moved = placeError + rounded;
         addMoment(e, log, mx, my, moved);
-        addSloping(e, q, mx, my, tx, ty, errLog, moved);
+        addSloping(e, q, mx, my, tx, ty, errLog + placeError * slopeOfLog, moved);
     }
 
     private void addMoment(Edge e, double log, double mx, double my, double moved) {
@@ -146,7 +157,13 @@ final class SideSums {
     }
 
     double errPotential() {
-        return errFlat + h * errAngle + 4 * EPS * potentialTerms + placeError * angles;
+        return errFlat + h * errAngle + 4 * EPS * potentialTerms + placeError * (Math.hypot(fieldX, fieldY) + angle + placeError * tide());
+    }
+
+    /** Bound on the gradient of the field of unit density: the fields of the sides, or 2/R³ summed. */
+    double tide() {
+        double gap = footWithin ? h : nearestSide;
+        return touched || gap == 0 ? tide : Math.min(tide, 2 * Math.abs(potential()) / (gap * gap));
     }
 
     /** Sum of the sizes of all terms of the field of unit density. */

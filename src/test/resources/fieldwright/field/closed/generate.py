@@ -4,7 +4,9 @@ Every value comes from textbook formulas other than those of the program, worked
 does not matter, or from quadrature at 40 digits; each formula is first checked here against plain quadrature of Coulomb's
 law at a few places. Places are exact doubles. Bare kernel, no 1/(4 pi eps0).
 """
+import math
 import os
+import random
 import sys
 from mpmath import mp, mpf, sqrt, asinh, atan, atan2, log, pi, quad, cos, sin, ellipk, ellipe, matrix, linspace
 
@@ -365,6 +367,69 @@ def box_gap(p):
     return lambda r: min(segment_gap(a, b, r) for a, b in es)
 
 
+def random_cases(seed=20250314):
+    """Random bodies: aspect ratios to 1e4, off the origin, seen from random gaps beside random points of their edges."""
+    rnd = random.Random(seed)
+
+    def direction():
+        v = [rnd.gauss(0, 1) for _ in range(3)]
+        if rnd.random() < 0.3:
+            v[rnd.randrange(3)] = 0.0
+        l = sum(c * c for c in v) ** 0.5
+        return [c / l for c in v]
+
+    def beside(point, low, high):
+        g = 10 ** rnd.uniform(low, high)
+        return tuple(c + g * d for c, d in zip(point, direction()))
+
+    def between(a, b, w):
+        return tuple(i + w * (j - i) for i, j in zip(a, b))
+
+    for _ in range(60):
+        offset = rnd.choice([0.0, 0.0, 1.0, 30.0]) * rnd.uniform(-1, 1)
+        q = rnd.choice([[1.0, 0.0], [rnd.uniform(-1, 1), rnd.uniform(-1, 1)]])
+        l = 10 ** rnd.uniform(-3, 1)
+        p = [offset, offset + l] + q
+        ends = ((0, 0, p[0]), (0, 0, p[1]))
+        case('rodRandom', rod, p, [beside(between(*ends, rnd.choice([0, 0.5, rnd.random(), 1])), -8, 1.5) for _ in range(3)],
+             lambda r, e=ends: segment_gap(e[0], e[1], r))
+    for _ in range(120):
+        n = rnd.choice([3, 4, 5, 8])
+        stretch = 10 ** rnd.uniform(-4, 0)
+        turn, ox, oy = rnd.uniform(0, 6.3), rnd.choice([0.0, rnd.uniform(-5, 5)]), rnd.choice([0.0, rnd.uniform(-5, 5)])
+        xs, ys = [], []
+        for i in range(n):  # a star about its middle: sides do not cross
+            f, m = 2 * math.pi * (i + rnd.uniform(0, 0.8)) / n, rnd.uniform(0.3, 1)
+            a, b = m * math.cos(f), m * math.sin(f) * stretch
+            xs.append(ox + a * math.cos(turn) - b * math.sin(turn))
+            ys.append(oy + a * math.sin(turn) + b * math.cos(turn))
+        q = rnd.choice([[1.0, 0.0, 0.0], [rnd.uniform(-1, 1) for _ in range(3)]])
+        p = [n] + xs + ys + q
+        corner = [(x, y, 0.0) for x, y in zip(xs, ys)]
+        places = []
+        for _ in range(3):
+            i = rnd.randrange(n)
+            places.append(beside(between(corner[i], corner[(i + 1) % n], rnd.choice([0, rnd.random()])), -8, 1))
+        case('polygonRandom', polygon, p, [r for r in places if r[2] != 0], polygon_gap(p))
+    for _ in range(120):
+        side = [10 ** rnd.uniform(-4, 0) for _ in range(3)]
+        at = [rnd.choice([0.0, rnd.uniform(-2, 2)]) for _ in range(3)]
+        p = []
+        for a, l in zip(at, side):
+            p += [a, a + l]
+        p += [1.0, 0.0, 0.0, 0.0]
+        places = [beside([p[2 * i + rnd.randrange(2)] if rnd.random() < 0.7 else at[i] + rnd.random() * side[i] for i in range(3)], -8, 1)
+                  for _ in range(3)]
+        case('boxRandom', box, p, places, box_gap(p))
+    for _ in range(100):
+        a = 10 ** rnd.uniform(-2, 1)
+        f = rnd.uniform(0, 6.3)
+        places = [beside((a * math.cos(f), a * math.sin(f), 0.0), -8, 1.5) for _ in range(2)] \
+            + [(a * rnd.uniform(-1.2, 1.2), a * rnd.uniform(-1.2, 1.2), a * 10 ** rnd.uniform(-6, 1))]
+        case('ringRandom', ring, [a, 1.0], places, lambda r, a=a: rim_gap(a, r))
+        case('discRandom', disc, [a, 1.0], [r for r in places if r[2] != 0], lambda r, a=a: rim_gap(a, r))
+
+
 def build():
     all_round = [(1, 0, 0), (0.6, -0.8, 0), (0.3, 0.2, 0.7), (0, 0.1, 1), (-0.5, 0.4, -0.9), (1e-5, 0, 1), (1, 1e-5, 1e-6)]
     for p in ([-0.7, 1.1, 1.3, 0.0], [-0.7, 1.1, 0.4, -0.9], [-1.0, 1.0, 0.0, 1.0]):
@@ -418,6 +483,7 @@ def build():
         gap = lambda r, p=p: min(rim_gap(p[2], r, p[0]), rim_gap(p[2], r, p[1]))
         case('tube', tube, p, places, gap)
         case('cylinder', cylinder, p, places, gap)
+    random_cases()
     p = [-0.5, 1.5, 0.9]
     case('strip', strip, p, leave([((1.5, 0, 0), [(1, 0, 0), (0.5, 0, 1), (-0.7, 0.1, -0.4)]), ((0.2, 0, 0), up + [(1, 0, 1)])]),
          lambda r: min(sqrt((mpf(r[0]) - e) ** 2 + mpf(r[2]) ** 2) for e in (mpf(-0.5), mpf(1.5))))
