@@ -100,6 +100,11 @@ public final class CompiledSnippet {
         return OptionalInt.empty();
     }
 
+    /** Line of its text, 0-based, on which the code begins, behind comments and blank lines. */
+    public int firstLine() {
+        return linesBefore(new JavaText(source).start());
+    }
+
     /** The line of the source that stands on a line (1-based) of the wrapped text. */
     private int sourceLine(int wrappedLine) {
         String wrapped = text.wrapped();

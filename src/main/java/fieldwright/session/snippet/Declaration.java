@@ -14,8 +14,8 @@ public sealed interface Declaration {
      */
     record Variable(String name, String type) implements Declaration { }
 
-    /** A method or a class. The same text compiled again is another one. */
-    record Code(String name, CompiledSnippet snippet) implements Declaration { }
+    /** A method or a type. The same text compiled again is another one. */
+    record Code(String name, CompiledSnippet snippet, boolean isType) implements Declaration { }
 
     /** An import, by its text; it counts for everything below. */
     record Import(String name) implements Declaration { }

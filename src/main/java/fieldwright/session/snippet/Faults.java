@@ -6,7 +6,6 @@ import java.util.Collection;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
-import java.util.Map;
 import java.util.Set;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -26,26 +25,27 @@ final class Faults {
     private final JShell shell;
     private final String source;
     private final JavaText.Declared variable;
-    private final Map<String, Declaration> environment;
+    private final Collection<String> above;
     private final Collection<String> words;
 
     /**
      * @param variable the declared variable, which was compiled under a name with a {@code $} behind; or null
+     * @param above    names declared above
      * @param words    names that can be used anywhere, to suggest one
      */
-    Faults(JShell shell, String source, JavaText.Declared variable, Map<String, Declaration> environment,
+    Faults(JShell shell, String source, JavaText.Declared variable, Collection<String> above,
            Collection<String> words) {
         this.shell = shell;
         this.source = source;
         this.variable = variable;
-        this.environment = environment;
+        this.above = above;
         this.words = words;
     }
 
     List<SnippetException.Fault> of(Snippet snippet) {
         Set<SnippetException.Fault> faults = new LinkedHashSet<>();
         shell.diagnostics(snippet).filter(Diag::isError)
-                .forEach(error -> faults.add(new SnippetException.Fault(offset(error), message(error))));
+                .forEach(error -> faults.add(fault(error)));
         if (faults.isEmpty() && snippet instanceof DeclarationSnippet declaration) {
             shell.unresolvedDependencies(declaration).forEach(missing -> faults.add(unresolved(missing)));
         }
@@ -61,37 +61,36 @@ final class Faults {
         return Math.min(shifted ? offset - 1 : offset, Math.max(0, source.length() - 1));
     }
 
-    private String message(Diag error) {
+    private SnippetException.Fault fault(Diag error) {
         String text = error.getMessage(Locale.ROOT);
         Matcher symbol = SYMBOL.matcher(text);
         if (text.startsWith("cannot find symbol") && symbol.find()) {
-            return missing(symbol.group(1), symbol.group(2).strip(), text);
+            return missing(offset(error), symbol.group(1), symbol.group(2).strip(), text);
         }
-        if (text.contains("reached end of file while parsing")) {
-            return "the statement does not end here: a ';', a bracket or a quote is missing.";
-        }
-        return clean(text) + ".";
+        String message = text.contains("reached end of file while parsing")
+                ? "the statement does not end here: a ';', a bracket or a quote is missing." : clean(text) + ".";
+        return new SnippetException.Fault(offset(error), message);
     }
 
     /** {@code variable zz} or {@code method foo(int)}, missing in a method or class that otherwise compiles. */
     private SnippetException.Fault unresolved(String missing) {
         String[] parts = missing.split("\\s+", 2);
-        String name = parts.length > 1 ? parts[1].replaceAll("\\(.*", "") : missing;
-        Matcher place = Pattern.compile("\\b" + Pattern.quote(name) + "\\b").matcher(source);
-        return new SnippetException.Fault(place.find() ? place.start() : 0,
-                missing(parts.length > 1 ? parts[0] : "name", parts.length > 1 ? parts[1] : missing, ""));
+        String symbol = parts.length > 1 ? parts[1] : missing;
+        Matcher place = Pattern.compile("\\b" + Pattern.quote(symbol.replaceAll("\\(.*", "")) + "\\b").matcher(source);
+        return missing(place.find() ? place.start() : 0, parts.length > 1 ? parts[0] : "name", symbol, "");
     }
 
-    private String missing(String kind, String symbol, String text) {
+    private SnippetException.Fault missing(int offset, String kind, String symbol, String text) {
         String name = symbol.replaceAll("\\(.*", "");
         Matcher location = LOCATION.matcher(text);
         Matcher type = OF_TYPE.matcher(location.find() ? location.group(1) : "");
         if (type.find() && !clean(type.group(1)).isBlank()) {
-            return clean(type.group(1)) + " has no " + kind + " '" + clean(symbol) + "'." + suggestion(name, members(type.group(1)));
+            return new SnippetException.Fault(offset, clean(type.group(1)) + " has no " + kind + " '" + clean(symbol) + "'."
+                    + suggestion(name, members(type.group(1))));
         }
-        Set<String> names = new LinkedHashSet<>(environment.keySet());
+        Set<String> names = new LinkedHashSet<>(above);
         names.addAll(words);
-        return "no " + kind + " '" + clean(symbol) + "'." + suggestion(name, names);
+        return new SnippetException.Fault(offset, "no " + kind + " '" + clean(symbol) + "'." + suggestion(name, names), name);
     }
 
     private static String suggestion(String name, Collection<String> names) {

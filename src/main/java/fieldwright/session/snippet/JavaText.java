@@ -23,6 +23,11 @@ final class JavaText {
     private static final Set<String> NO_TYPES = Set.of("return", "throw", "assert", "yield", "break", "continue", "new",
             "else", "do", "import", "package", "class", "interface", "enum", "record", "goto");
 
+    private static final Pattern TYPE_HEAD = Pattern.compile("(?:^|\\s)(?:class|interface|enum|record)\\s+(\\p{javaJavaIdentifierStart}\\p{javaJavaIdentifierPart}*)");
+    /** Type, name, arguments, perhaps exceptions: what stands before the body of a method. */
+    private static final Pattern METHOD_HEAD = Pattern.compile("[\\p{javaJavaIdentifierPart}\\s.,<>?&\\[\\]@]*[\\p{javaJavaIdentifierPart}>\\]]\\s+"
+            + "(\\p{javaJavaIdentifierStart}\\p{javaJavaIdentifierPart}*)\\s*\\([^()=;]*\\)\\s*(?:throws\\s[^{(=;]*)?");
+
     /** Where a variable's declaration has its name. */
     record Declared(String name, int start, boolean several) {
         int end() {
@@ -34,6 +39,11 @@ final class JavaText {
 
     JavaText(String text) {
         this.masked = mask(text);
+    }
+
+    /** Offset of the first code. */
+    int start() {
+        return skipSpace(0);
     }
 
     /** The identifiers that stand by themselves; keywords among them. */
@@ -87,6 +97,19 @@ final class JavaText {
         int next = skipSpace(name.end());
         boolean declares = next == masked.length() || "=;,[".indexOf(masked.charAt(next)) >= 0;
         return declares ? Optional.of(new Declared(name.group(), start, declaresMore(next))) : Optional.empty();
+    }
+
+    /** The name of the method or type declared; null when the text declares none. */
+    String code() {
+        int brace = masked.indexOf('{');
+        String head = brace < 0 ? "" : masked.substring(0, brace);
+        Matcher type = TYPE_HEAD.matcher(head);
+        if (type.find()) {
+            return type.group(1);
+        }
+        Matcher method = METHOD_HEAD.matcher(head);
+        Matcher first = WORD.matcher(head);
+        return method.matches() && first.find() && !NO_TYPES.contains(first.group()) ? method.group(1) : null;
     }
 
     /** End of a type that begins at an offset, or -1 if none does. */

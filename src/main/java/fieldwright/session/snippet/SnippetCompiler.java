@@ -109,10 +109,17 @@ public final class SnippetCompiler implements AutoCloseable {
         return pieces;
     }
 
+    /** The variable, method or type a piece declares by its text, whether it compiles or not; null when it declares none. */
+    public static String declaredName(String source) {
+        JavaText text = new JavaText(source);
+        return text.variable().map(JavaText.Declared::name).orElseGet(text::code);
+    }
+
     /**
      * Compiles one piece.
      *
-     * @param visible what stands above it, by name, imports by their text, in order
+     * @param visible what stands above it, by name, imports by their text, in order. The piece declares none of it again:
+     *                the caller sees to that ({@link #declaredName})
      */
     public CompiledSnippet compile(String source, Map<String, Declaration> visible) throws SnippetException {
         JavaText text = new JavaText(source);
@@ -121,7 +128,7 @@ public final class SnippetCompiler implements AutoCloseable {
         Key key = new Key(source, environment, imports(visible));
         CompiledSnippet compiled = known.get(key);
         if (compiled == null) {
-            compiled = compileAnew(text, key);
+            compiled = compileAnew(text, key, visible);
             known.put(key, compiled);
         }
         return compiled;
@@ -131,7 +138,7 @@ public final class SnippetCompiler implements AutoCloseable {
         return visible.values().stream().filter(Declaration.Import.class::isInstance).map(Declaration.Import.class::cast).toList();
     }
 
-    private CompiledSnippet compileAnew(JavaText text, Key key) throws SnippetException {
+    private CompiledSnippet compileAnew(JavaText text, Key key, Map<String, Declaration> visible) throws SnippetException {
         if (spoilt) {
             throw new SnippetException(0, "not compiled, because of the error above.");
         }
@@ -154,7 +161,7 @@ public final class SnippetCompiler implements AutoCloseable {
             return imported(key, snippet);
         }
         if (event.status() != Snippet.Status.VALID) {
-            List<SnippetException.Fault> faults = new Faults(shell, key.source(), variable, key.environment(), words).of(snippet);
+            List<SnippetException.Fault> faults = new Faults(shell, key.source(), variable, visible.keySet(), words).of(snippet);
             drop(snippet);
             throw new SnippetException(faults);
         }
@@ -228,8 +235,13 @@ public final class SnippetCompiler implements AutoCloseable {
             compiled.declare(new Declaration.Variable(variable.name(), typeOf(wrapper, variable.name() + "$")));
         }
         if (snippet instanceof MethodSnippet || snippet instanceof TypeDeclSnippet) {
-            Declaration.Code code = new Declaration.Code(((DeclarationSnippet) snippet).name(), compiled);
+            Declaration.Code code = new Declaration.Code(((DeclarationSnippet) snippet).name(), compiled,
+                    snippet instanceof TypeDeclSnippet);
             compiled.declare(code);
+            if (active.containsKey(code.name())) {
+                spoilt = true;
+                throw new SnippetException(0, "'" + code.name() + "' is declared above already. Choose another name.");
+            }
             active.put(code.name(), new Active(code, snippet));
         } else {
             drop(snippet);

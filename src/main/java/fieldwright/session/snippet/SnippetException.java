@@ -6,8 +6,15 @@ import java.util.List;
 public final class SnippetException extends Exception {
     private static final long serialVersionUID = 1L;
 
-    /** @param offset 0-based in the text of the snippet */
-    public record Fault(int offset, String message) implements java.io.Serializable { }
+    /**
+     * @param offset 0-based in the text of the snippet
+     * @param name   the name that is not known; null when the fault is another one
+     */
+    public record Fault(int offset, String message, String name) implements java.io.Serializable {
+        Fault(int offset, String message) {
+            this(offset, message, null);
+        }
+    }
 
     private final List<Fault> faults;
 
@@ -16,7 +23,7 @@ public final class SnippetException extends Exception {
         this.faults = List.copyOf(faults);
     }
 
-    SnippetException(int offset, String message) {
+    public SnippetException(int offset, String message) {
         this(List.of(new Fault(offset, message)));
     }
 

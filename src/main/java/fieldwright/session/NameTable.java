@@ -1,0 +1,33 @@
+package fieldwright.session;
+
+import fieldwright.session.snippet.Declaration;
+import java.util.Collection;
+import java.util.LinkedHashMap;
+import java.util.Map;
+
+/** The names of a sheet, from the top down to the cell that is worked. A name stands here once. */
+final class NameTable {
+    private final Map<String, SheetName> names = new LinkedHashMap<>();
+    private final Map<String, Declaration> declarations = new LinkedHashMap<>();
+
+    /** Null when nothing above writes it. */
+    SheetName get(String name) {
+        return names.get(name);
+    }
+
+    void put(SheetName name) {
+        names.put(name.name(), name);
+        if (name.declares() != null) {
+            declarations.put(name.declares().name(), name.declares());
+        }
+    }
+
+    Collection<SheetName> all() {
+        return names.values();
+    }
+
+    /** What Java code below may name. */
+    Map<String, Declaration> declarations() {
+        return declarations;
+    }
+}
