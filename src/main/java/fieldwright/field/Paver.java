@@ -105,6 +105,7 @@ final class Paver {
             }
         }
         int[] index = new int[dims];
+        int first = pieces.size();
         while (true) {
             double[] from = new double[dims];
             double[] to = new double[dims];
@@ -124,8 +125,36 @@ final class Paver {
                 index[k++] = 0;
             }
             if (k == dims) {
+                rebase(sampler, first);
                 return;
             }
+        }
+    }
+
+    /** One anchor, the nearest, for all pieces of a sampler whose offsets are exact. */
+    private void rebase(Sampler sampler, int first) {
+        if (!sampler.chart.hasExactOffsets()) {
+            return;
+        }
+        Pieces.Base nearest = null;
+        for (Piece piece : pieces.subList(first, pieces.size())) {
+            Pieces.Base f = (Pieces.Base) piece.integrand();
+            if (nearest == null || norm(f.b) < norm(nearest.b)) {
+                nearest = f;
+            }
+        }
+        if (nearest == null) {
+            return;
+        }
+        Chart.Anchor base = nearest.anchor;
+        double[] b = nearest.b;
+        Pieces.Base last = null;
+        for (Piece piece : pieces.subList(first, pieces.size())) {
+            Pieces.Base f = (Pieces.Base) piece.integrand();
+            if (f != last && f.anchor != base) {
+                f.rebase(base, b);
+            }
+            last = f;
         }
     }
 
@@ -446,7 +475,7 @@ final class Paver {
         double bend1 = Math.max(bends[0][1], bends[1][1]);
         if (Math.hypot(least, lift) > FAR * size && Math.max(bend0, bend1) < 2.5) {
             double distance = Math.hypot(Math.max(0.5 * least, least - size / 4), lift);
-            pieces.add(Piece.whole(new Pieces.Box(s, from, to), order(distance, length[0], bend0, 5), order(distance, length[1], bend1, 5)));
+            pieces.add(Piece.whole(new Pieces.Box(s, from, to), order(distance, length[0], bend0, 6), order(distance, length[1], bend1, 6)));
             return;
         }
         boolean fan0 = shortest[1] < 1e-9 * size && collapsed[0] != 1;
@@ -456,12 +485,13 @@ final class Paver {
             boolean low = collapsed[ray] == 0;
             int tip = ray == 0 ? low ? 1 : 7 : low ? 3 : 5;
             double tipDistance = Math.hypot(distance(nodes, b, tip), lift);
-            if (Math.hypot(least, lift) > 0.2 * tipDistance && nearTip(s, from, to, ray, low, tipDistance, length[ray], bends[ray][ray], depth)) {
+            boolean round = bends[ray][1 - ray] > 1.2 && length[1 - ray] > 0.5 * length[ray];
+            int over = overTip(s, from, to, ray, low, tipDistance, length[ray], bends[ray][ray], depth);
+            if (over == DONE) {
                 return;
             }
             if (depth < DEEPEST) {
-                boolean round = bends[ray][1 - ray] > 1.2 && length[1 - ray] > 0.5 * length[ray];
-                split(s, from, to, round ? 1 - ray : ray, depth);
+                split(s, from, to, over == ASIDE && round ? 1 - ray : ray, depth);
                 return;
             }
         }
@@ -498,45 +528,59 @@ final class Paver {
         return bends;
     }
 
+    private static final int DONE = 0;
+    private static final int ASIDE = 1;
+    private static final int BENT_RAYS = 2;
+
     /** A box with one edge shrunk to the tip, and the place (nearly) straight over the tip. */
-    private boolean nearTip(Sampler s, double[] from, double[] to, int ray, boolean low, double tipDistance, double length, double bend,
+    private int overTip(Sampler s, double[] from, double[] to, int ray, boolean low, double tipDistance, double length, double bend,
         int depth) {
         double[] tip = {(from[0] + to[0]) / 2, (from[1] + to[1]) / 2};
         tip[ray] = low ? from[ray] : to[ray];
-        if (bend > BENT && depth < DEEPEST) {
-            return false;
-        }
-        double[] foot = footOnSurface(s, from, to, tip.clone());
-        Chart.Anchor nearest = s.anchor(foot);
         Chart.Anchor apex = s.anchor(tip);
         double[] b = s.toAnchor(apex);
-        double aside = Math.sqrt(sum(nearest.position(), apex.position()));
-        if (aside > 0.25 * tipDistance && tipDistance > touching(s, apex)) {
-            return false;
+        if (aside(s, apex, b, from, to, tip, ray, low ? 1 : -1) > 0.15 * tipDistance && tipDistance > touching(s, apex)) {
+            return ASIDE;
+        }
+        if (bend > BENT && depth < DEEPEST) {
+            return BENT_RAYS;
         }
         double height = Math.hypot(norm(b), lift(s));
         if (!(height > touching(s, apex))) {
             height = 0;
             if (!potential && s instanceof Sampler.Coulomb && s.patch.kernel() == Kernel.POINT && !onTip(s, from, to, tip, ray)) {
-                return true;
+                return DONE;
             }
         }
         Pieces.Fan fan = new Pieces.Fan(s, tip, ray, low ? to[ray] : from[ray], from[1 - ray], to[1 - ray], length, height);
         double span = fan.span();
         int n = height > 0 ? Math.max(1, (int) Math.ceil(span / SPAN)) : 1;
         int order = Math.max(10, order(Math.PI / 2, span / n, 0, 6));
+        int parts = height > 0 ? 2 : 1;
         for (int i = 0; i < n; i++) {
-            pieces.add(new Piece(fan, new double[] {(double) i / n, 0}, new double[] {(i + 1.0) / n, 1}, new int[] {order, 20}));
+            for (int j = 0; j < parts; j++) {
+                pieces.add(new Piece(fan, new double[] {(double) i / n, (double) j / parts},
+                    new double[] {(i + 1.0) / n, (j + 1.0) / parts}, new int[] {order, height > 0 ? 14 : 24}));
+            }
         }
-        return true;
+        return DONE;
     }
 
-    private static double sum(double[] p, double[] q) {
-        double total = 0;
-        for (int a = 0; a < 3; a++) {
-            total += (p[a] - q[a]) * (p[a] - q[a]);
+    /** How far the place is from standing straight over the tip, towards some direction of the fan. */
+    private double aside(Sampler s, Chart.Anchor apex, double[] b, double[] from, double[] to, double[] tip, int ray, int sign) {
+        int n = 17;
+        for (int i = 0; i < n; i++) {
+            space.du[ray][i] = 0;
+            space.du[1 - ray][i] = from[1 - ray] + (to[1 - ray] - from[1 - ray]) * i / (n - 1.0) - tip[1 - ray];
         }
-        return total;
+        s.place(apex, space.du, n);
+        double[][] t = s.tangent(ray);
+        double most = 0;
+        for (int i = 0; i < n; i++) {
+            double speed = Math.sqrt(size2(t, i));
+            most = Math.max(most, -sign * (t[0][i] * b[0] + t[1][i] * b[1] + t[2][i] * b[2]) / speed);
+        }
+        return most;
     }
 
     /** The place is on the tip of a fan: its jump and pull. False when a field without bound makes the pieces useless. */
@@ -799,7 +843,9 @@ final class Paver {
                 }
                 Sampler.Face face = new Sampler.Face(patch, probe, potential, space, chart, depth, side == 1, hand, steps);
                 if (hasArea(face)) {
+                    int first = pieces.size();
                     pave(face, new double[2], new double[] {1, 1}, 0);
+                    rebase(face, first);
                 }
             }
         }
@@ -948,7 +994,7 @@ final class Paver {
             double distance = Math.max(0.5 * least, least - size / 4);
             int[] orders = new int[3];
             for (int k = 0; k < 3; k++) {
-                orders[k] = Math.min(20, order(distance, length[k], bend[k], 5));
+                orders[k] = Math.min(20, order(distance, length[k], bend[k], 6));
             }
             pieces.add(Piece.whole(new Pieces.Box(s, from, to), orders));
             return;

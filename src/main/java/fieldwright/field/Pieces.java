@@ -15,8 +15,9 @@ final class Pieces {
     /** Shared by all: offsets from an anchor, and the values there. */
     abstract static class Base implements Integrand {
         final Sampler sampler;
-        final Chart.Anchor anchor;
-        final double[] b;
+        Chart.Anchor anchor;
+        double[] b;
+        private double[] shift;
         final double[] jacobian = new double[Workspace.BLOCK];
 
         Base(Sampler sampler, double[] anchorAt) {
@@ -37,15 +38,48 @@ final class Pieces {
 
         @Override
         public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
-            map(u, n, sampler.space.du);
+            double[][] du = sampler.space.du;
+            map(u, n, du);
+            if (shift != null) {
+                for (int k = 0; k < shift.length; k++) {
+                    double step = shift[k];
+                    for (int i = 0; i < n; i++) {
+                        du[k][i] += step;
+                    }
+                }
+            }
             sampler.place(anchor, sampler.space.du, n);
             sampler.values(anchor, b, jacobian, n, out, noise);
-            finish(u, n, out);
+            finish(u, n, out, noise);
+        }
+
+        /**
+         * Takes offsets from another anchor, one for all pieces of a sampler: the rounding of an anchor's position then
+         * moves all of them alike, which is no more than the rounding of the place.
+         */
+        final void rebase(Chart.Anchor base, double[] toBase) {
+            int n = sampler.dimension();
+            double[] moved = new double[n];
+            boolean any = false;
+            for (int k = 0; k < n; k++) {
+                moved[k] = anchor.u()[sampler.axes[k]] - base.u()[sampler.axes[k]];
+                any |= moved[k] != 0;
+            }
+            anchor = base;
+            b = toBase;
+            shift = any ? moved : null;
+        }
+
+        /** The place is on the anchor: what is left between them is rounding. */
+        final void touching(double height) {
+            if (height == 0) {
+                java.util.Arrays.fill(b, 0);
+            }
         }
 
         abstract void map(double[][] u, int n, double[][] du);
 
-        void finish(double[][] u, int n, double[][] out) { }
+        void finish(double[][] u, int n, double[][] out, double[] noise) { }
     }
 
     /** A box of parameters as it is. */
@@ -128,6 +162,7 @@ final class Pieces {
             reach = end - at;
             this.length = length;
             radius = new Radius(height);
+            touching(height);
             this.pole = pole;
         }
 
@@ -146,18 +181,19 @@ final class Pieces {
         }
 
         @Override
-        void finish(double[][] u, int n, double[][] out) {
-            takeOut(pole, u[0], n, out);
+        void finish(double[][] u, int n, double[][] out, double[] noise) {
+            takeOut(pole, u[0], n, out, noise);
         }
     }
 
-    private static void takeOut(double[] pole, double[] s, int n, double[][] out) {
+    private static void takeOut(double[] pole, double[] s, int n, double[][] out, double[] noise) {
         if (pole == null) {
             return;
         }
         for (int i = 0; i < n; i++) {
             for (int c = 0; c < 3; c++) {
                 out[c][i] -= pole[c] / s[i];
+                noise[i] += 4 * Sampler.EPS * Math.abs(pole[c]) / s[i];
             }
         }
     }
@@ -204,6 +240,7 @@ final class Pieces {
             vA = asinh(yA / scale);
             vB = asinh(yB / scale);
             radius = new Radius(height);
+            touching(height);
             this.pole = pole;
         }
 
@@ -243,7 +280,7 @@ final class Pieces {
         }
 
         @Override
-        void finish(double[][] u, int n, double[][] out) {
+        void finish(double[][] u, int n, double[][] out, double[] noise) {
             if (pole == null) {
                 return;
             }
@@ -252,7 +289,9 @@ final class Pieces {
                 double p1 = a[1] + along[i] * side[1];
                 double f = -angle[i] / rMax[i] * (Math.log(rMax[i]) - 1 / u[0][i]);
                 for (int c = 0; c < 3; c++) {
-                    out[c][i] += f * (p0 * pole[0][c] + p1 * pole[1][c]);
+                    double term = f * (p0 * pole[0][c] + p1 * pole[1][c]);
+                    out[c][i] += term;
+                    noise[i] += 4 * Sampler.EPS * Math.abs(term);
                 }
             }
         }
@@ -278,6 +317,7 @@ final class Pieces {
             width = to - from;
             this.length = length;
             radius = new Radius(height);
+            touching(height);
         }
 
         double span() {
@@ -320,6 +360,7 @@ final class Pieces {
             this.scale = scale;
             this.length = length;
             radius = new Radius(height);
+            touching(height);
         }
 
         double span() {

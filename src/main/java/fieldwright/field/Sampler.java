@@ -180,7 +180,7 @@ abstract class Sampler {
             for (int c = 0; c < components; c++) {
                 size += Math.abs(out[c][i]);
             }
-            noise[i] = size * roughness * (base / distance + 1);
+            noise[i] = size * roughness * ((base + space.nodes.rounding[i]) / distance + space.nodes.relative[i] + 1);
         }
     }
 

@@ -20,6 +20,14 @@ public final class Chart {
             return compareTo(UP) >= 0;
         }
 
+        boolean low() {
+            return this == ROOT_LOW || this == ROOT_BOTH;
+        }
+
+        boolean high() {
+            return this == ROOT_HIGH || this == ROOT_BOTH;
+        }
+
         double psi(double u) {
             return switch (this) {
                 case ROOT_LOW -> u * u;
@@ -223,7 +231,7 @@ public final class Chart {
                 return false;
             }
         }
-        return system != null && !hasFixedFormula();
+        return embedding.isExact() && !hasFixedFormula();
     }
 
     /** Where, in [0, 1], this depth takes the value {@code coordinate}; constant limits only. */
@@ -601,6 +609,8 @@ public final class Chart {
 
     /** Coordinates, offsets, tangents and measure at anchor.u + du. */
     public void evaluate(Anchor anchor, double[][] du, int n, Nodes nodes) {
+        java.util.Arrays.fill(nodes.rounding, 0, n, 0);
+        java.util.Arrays.fill(nodes.relative, 0, n, 0);
         for (int k = 0; k < dimension; k++) {
             coordinate(k, anchor, du[k], n, nodes);
         }
@@ -611,7 +621,35 @@ public final class Chart {
         }
         embedding.embed(anchor.coordinates, anchor.position, nodes, n);
         tangents(n, nodes);
+        tangentsAtRoots(anchor, du, n, nodes);
         measure(n, nodes);
+    }
+
+    /** At the very end of a root the chain rule reads infinity times zero: tangents are taken a little inside instead. */
+    private void tangentsAtRoots(Anchor anchor, double[][] du, int n, Nodes nodes) {
+        double inside = 1e-6;
+        for (int i = 0; i < n; i++) {
+            boolean moved = false;
+            for (int k = 0; k < dimension; k++) {
+                double u = anchor.u[k] + du[k][i];
+                moved |= run[k].low() && u < inside / 2 || run[k].high() && u > 1 - inside / 2;
+            }
+            if (!moved) {
+                continue;
+            }
+            double[] at = new double[dimension];
+            for (int k = 0; k < dimension; k++) {
+                double u = anchor.u[k] + du[k][i];
+                at[k] = run[k].low() && u < inside ? inside : run[k].high() && u > 1 - inside ? 1 - inside : u;
+            }
+            Nodes one = nodes.single();
+            evaluate(anchor(at), new double[3][1], 1, one);
+            for (int k = 0; k < dimension; k++) {
+                for (int a = 0; a < 3; a++) {
+                    nodes.tangent[k][a][i] = one.tangent[k][a][0];
+                }
+            }
+        }
     }
 
     private void coordinate(int k, Anchor anchor, double[] du, int n, Nodes nodes) {
@@ -661,8 +699,13 @@ public final class Chart {
             delta[i] = c[i] - c0;
             own[i] = width * r.slope(u);
         }
+        System.arraycopy(nodes.rounding, 0, nodes.slope, 0, n);
         for (int j = 0; j < k; j++) {
             slopes(k, j, n, nodes);
+        }
+        for (int i = 0; i < n; i++) {
+            double width = nodes.high[i] - nodes.low[i];
+            nodes.relative[i] = Math.max(nodes.relative[i], width > 0 ? (nodes.rounding[i] - nodes.slope[i]) / width : 1e8);
         }
     }
 
@@ -678,16 +721,24 @@ public final class Chart {
             if (dFrom[k][via] != Scalar.ZERO) {
                 dFrom[k][via].evaluate(nodes.c, n, nodes.work);
                 for (int i = 0; i < n; i++) {
-                    total[i] += inner[i] == 0 ? 0 : (1 - nodes.psi[i]) * nodes.work[i] * inner[i];
+                    total[i] += chained((1 - nodes.psi[i]) * nodes.work[i], inner[i], nodes, free[via], i);
                 }
             }
             if (dTo[k][via] != Scalar.ZERO) {
                 dTo[k][via].evaluate(nodes.c, n, nodes.work);
                 for (int i = 0; i < n; i++) {
-                    total[i] += inner[i] == 0 ? 0 : nodes.psi[i] * nodes.work[i] * inner[i];
+                    total[i] += chained(nodes.psi[i] * nodes.work[i], inner[i], nodes, free[via], i);
                 }
             }
         }
+    }
+
+    /** One link of the chain; a root's infinite slope at its very end counts as none, and rounding of the outer coordinate is noted. */
+    private static double chained(double slope, double inner, Nodes nodes, int via, int i) {
+        double product = slope * inner;
+        double carried = slope * nodes.c[via][i];
+        nodes.rounding[i] += Double.isFinite(carried) ? Math.abs(carried) : 1e8 * Math.abs(nodes.c[via][i]);
+        return Double.isFinite(product) ? product : 0;
     }
 
     private void held(int m, Anchor anchor, int n, Nodes nodes) {
@@ -710,7 +761,7 @@ public final class Chart {
                 dFixed[m][via].evaluate(nodes.c, n, nodes.work);
                 double[] inner = nodes.dc[free[via]][j];
                 for (int i = 0; i < n; i++) {
-                    total[i] += inner[i] == 0 ? 0 : nodes.work[i] * inner[i];
+                    total[i] += chained(nodes.work[i], inner[i], nodes, free[via], i);
                 }
             }
         }

@@ -10,6 +10,11 @@ abstract class Embedding {
     /** Fills offset and jacobian of the nodes from c and delta; {@code c0} are the anchor's coordinates. */
     abstract void embed(double[] c0, double[] position0, Nodes nodes, int n);
 
+    /** True when offsets carry no cancellation once the coordinates' differences carry none. */
+    boolean isExact() {
+        return true;
+    }
+
     /** True when coordinates are positions, so that the jacobian is the unit matrix and is left unset. */
     boolean isCartesian() {
         return false;
@@ -135,10 +140,13 @@ abstract class Embedding {
     private static final class Parametric extends Embedding {
         private final Scalar[] at = new Scalar[3];
         private final Scalar[][] slope;
+        /** At most two parameters and linear in each: offsets follow from slopes, without cancellation. */
+        private final boolean bilinear;
 
         Parametric(Nest nest, Formula... position) {
             int d = nest.names().size();
             slope = new Scalar[d][3];
+            boolean linear = d <= 2;
             for (int a = 0; a < 3; a++) {
                 boolean any = position[a].variables().isEmpty() && position[a].fitsAnyUnit();
                 javax.measure.Dimension found = any ? fieldwright.quantity.Units.LENGTH : position[a].dimension(nest.dimensions());
@@ -148,9 +156,16 @@ abstract class Embedding {
                 }
                 at[a] = Scalar.of(position[a], nest.names());
                 for (int m = 0; m < d; m++) {
+                    linear &= position[a].degree(nest.names().get(m)).orElse(2) <= 1;
                     slope[m][a] = Scalar.of(position[a].derivative(nest.names().get(m)), nest.names());
                 }
             }
+            bilinear = linear;
+        }
+
+        @Override
+        boolean isExact() {
+            return bilinear;
         }
 
         @Override
@@ -171,15 +186,33 @@ abstract class Embedding {
         @Override
         void embed(double[] c0, double[] position0, Nodes nodes, int n) {
             for (int a = 0; a < 3; a++) {
+                for (int m = 0; m < slope.length; m++) {
+                    slope[m][a].evaluate(nodes.c, n, nodes.jacobian[m][a]);
+                }
                 double[] o = nodes.offset[a];
+                if (bilinear) {
+                    double first = slopeAt(a, c0);
+                    for (int i = 0; i < n; i++) {
+                        o[i] = first * nodes.delta[0][i] + (slope.length > 1 ? nodes.jacobian[1][a][i] * nodes.delta[1][i] : 0);
+                    }
+                    continue;
+                }
                 at[a].evaluate(nodes.c, n, o);
                 for (int i = 0; i < n; i++) {
                     o[i] -= position0[a];
                 }
-                for (int m = 0; m < slope.length; m++) {
-                    slope[m][a].evaluate(nodes.c, n, nodes.jacobian[m][a]);
-                }
             }
+        }
+
+        /** Derivative by the first parameter at the anchor; the second one's, at a node, depends on the first only. */
+        private double slopeAt(int a, double[] c0) {
+            double[][] one = new double[3][1];
+            for (int m = 0; m < c0.length; m++) {
+                one[m][0] = c0[m];
+            }
+            double[] out = new double[1];
+            slope[0][a].evaluate(one, 1, out);
+            return out[0];
         }
     }
 }

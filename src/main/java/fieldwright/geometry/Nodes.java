@@ -14,6 +14,22 @@ public final class Nodes {
     /** Length, area or volume per unit of du. */
     public final double[] measure = new double[BLOCK];
 
+    /** Times the unit roundoff: what rounding of outer coordinates moves a node by, through limits that depend on them (m). */
+    public final double[] rounding = new double[BLOCK];
+
+    /** Times the unit roundoff: relative rounding of widths and slopes that follow from such limits. */
+    public final double[] relative = new double[BLOCK];
+
+    private Nodes single;
+
+    /** Scratch for one node beside this block. */
+    Nodes single() {
+        if (single == null) {
+            single = new Nodes();
+        }
+        return single;
+    }
+
     final double[][][] dc = new double[3][3][BLOCK];
     final double[][][] jacobian = new double[3][3][BLOCK];
     final double[] low = new double[BLOCK];

@@ -244,7 +244,8 @@ public final class Cubature {
             java.util.Arrays.fill(noise, 0, n, 0);
             piece.integrand.evaluate(u, n, out, noise);
             for (int i = 0; i < n; i++) {
-                carried += rule.weight[first + i] * noise[i];
+                double part = rule.weight[first + i] * noise[i];
+                carried += part * part;
             }
             for (int c = 0; c < components; c++) {
                 double[] f = out[c];
@@ -267,23 +268,28 @@ public final class Cubature {
                 }
             }
         }
-        carried *= volume;
+        carried = 3 * Math.sqrt(carried) * volume;   // roundings of different nodes are independent
         evaluations += rule.size;
         double total = 0;
         for (int c = 0; c < components; c++) {
             total += panel.magnitude[c];
         }
         double[] byDirection = new double[dimension];
+        double[] rounding = new double[components];
+        double[] error = new double[components];
         for (int c = 0; c < components; c++) {
-            double rounding = 4 * UNIT_ROUNDOFF * panel.magnitude[c] + UNIT_ROUNDOFF * 1e-2 * total + carried;
-            double sum = 0;
-            for (int d = 0; d < dimension; d++) {
-                double e = rule.rules[d].error(marginal[d][c], rounding);
-                byDirection[d] = Math.max(byDirection[d], e);
-                sum += e;
+            rounding[c] = 4 * UNIT_ROUNDOFF * panel.magnitude[c] + UNIT_ROUNDOFF * 1e-2 * total + carried;
+            panel.error[c] = -(dimension - 1) * rounding[c];
+            panel.floor = Math.max(panel.floor, 30 * rounding[c]);
+        }
+        for (int d = 0; d < dimension; d++) {
+            rule.rules[d].errors(marginal[d], components, rounding, error);
+            for (int c = 0; c < components; c++) {
+                byDirection[d] = Math.max(byDirection[d], error[c]);
+                panel.error[c] += error[c];
             }
-            panel.error[c] = sum - (dimension - 1) * rounding;
-            panel.floor = Math.max(panel.floor, 30 * rounding);
+        }
+        for (int c = 0; c < components; c++) {
             panel.worst = Math.max(panel.worst, panel.error[c]);
         }
         for (int d = 1; d < dimension; d++) {

@@ -82,29 +82,37 @@ public final class GaussLegendre {
     }
 
     /**
-     * Error of the rule, from the decay of the highest Legendre coefficients of the function.
-     * {@code weighted[i]} is weight times function value at node i; {@code noise} what rounding alone may leave.
-     * Pairs of coefficients are taken together because one of each pair vanishes for even or odd functions.
-     * The rule's error is the function's coefficient near degree 2·order, so a geometric decay is carried on over part
-     * of that distance; without decay the last coefficients themselves are the estimate.
+     * Error of the rule for several components, from the decay of their highest Legendre coefficients.
+     * {@code weighted[c][i]} is weight times component c at node i; {@code noise[c]} what rounding alone may leave; the result goes
+     * to {@code error}. Pairs of coefficients are taken together because one of each pair vanishes for even or odd functions; the
+     * decay is that of all components together. The rule's error is the function's coefficient near degree 2·order, so a geometric
+     * decay is carried on over part of that distance; without decay the last coefficients themselves are the estimate.
      */
-    double error(double[] weighted, double noise) {
-        if (order < 4) {
-            return Math.max(noise, 4 * tail(weighted, order - 1));
+    void errors(double[][] weighted, int components, double[] noise, double[] error) {
+        double[] last = new double[components];
+        double top = 0;
+        double before = 0;
+        double first = 0;
+        double allNoise = 0;
+        for (int c = 0; c < components; c++) {
+            last[c] = order < 4 ? tail(weighted[c], order - 1) : pair(weighted[c], order - 1);
+            top += last[c] * last[c];
+            allNoise = Math.max(allNoise, noise[c]);
+            if (order >= 6) {
+                double b = pair(weighted[c], order - 3);
+                double f = pair(weighted[c], order - 5);
+                before += b * b;
+                first += f * f;
+            }
         }
-        double last = pair(weighted, order - 1);
-        if (last <= noise) {
-            return noise;
+        double factor = 20;
+        if (order >= 6 && Math.sqrt(top) > allNoise) {
+            double ratio = Math.max(Math.sqrt(Math.sqrt(top / first)), 0.25 * Math.sqrt(top / before));
+            factor = ratio < 0.9 ? 20 * Math.pow(ratio, 0.4 * order) : 20;
         }
-        double before = pair(weighted, order - 3);
-        double ratio = last / before;
-        if (order >= 6) {
-            ratio = Math.max(ratio, before / Math.max(pair(weighted, order - 5), noise));
+        for (int c = 0; c < components; c++) {
+            error[c] = (last[c] <= noise[c] ? 0 : factor * last[c]) + noise[c];
         }
-        if (!(ratio < 0.9)) {
-            return 10 * last + noise;
-        }
-        return 10 * last * Math.pow(ratio, 0.3 * order) + noise;
     }
 
     private double pair(double[] weighted, int degree) {
