@@ -70,7 +70,7 @@ final class BoxSums {
             double nearest = 0;
             for (int i = 0; i < 4; i++) {
                 Edge at = e[i >> 1][i & 1];
-                nearest += at.touched ? 2 * Math.log(4 * (at.s2 - at.s1) / Math.max(placeError, Double.MIN_NORMAL) + 4) : 0;
+                nearest += at.touched ? 2 * Rounding.logarithm(at.s2 - at.s1, placeError) : 0;
             }
             elements += 2 * (Math.abs(e[0][0].log - e[0][1].log - e[1][0].log + e[1][1].log) + nearest);
         }
@@ -116,7 +116,7 @@ final class BoxSums {
                 flatTerms += Math.abs(q) * e.log;
                 // q L changes by at most L + q slope(L) <= L + 2 per move, on the edge itself by the logarithm of the move
                 double length = e.s2 - e.s1;
-                errFlat += placeError * (e.touched ? 4 * Math.log(4 * length / Math.max(placeError, Double.MIN_NORMAL) + 4) : e.log + 4);
+                errFlat += placeError * (e.touched ? 4 * Rounding.logarithm(length, placeError) : e.log + 4);
                 qMoment += q * m;
                 slopeMoment += out * slope[across] * m;
                 momentTerms += Math.abs(e.s1) * e.r1 + Math.abs(e.s2) * e.r2 + e.d2 * e.log;

@@ -120,7 +120,7 @@ public record Cylinder(double z1, double z2, double radius, double density) impl
      * from outside also 2/R³ summed.
      */
     private double tide(double rho, double down, double up, Disc.Parts top, Disc.Parts bottom, double eRho, double v, double moved) {
-        double big = 8 + 4 * Math.log(1 + radius / Math.max(moved, Double.MIN_NORMAL));
+        double big = 8 + 4 * Rounding.logarithm(radius, moved);
         double ends = (top.onRim() ? big : top.eRho()) + (bottom.onRim() ? big : bottom.eRho());
         double gradient = 4 * Math.PI + 2 * (Math.abs(top.ez()) + Math.abs(bottom.ez()) + ends) + Math.abs(eRho) / Math.max(rho, radius);
         double gap = Math.hypot(Math.max(0, rho - radius), Math.max(0, Math.max(-up, down)));

@@ -71,8 +71,7 @@ public record Disc(double radius, double density) implements ClosedForm {
         Rim rim = new Rim(a, rho, z);
         if (rim.near <= moved) {
             double v = 4 * a;
-            double turns = Math.log(16 * a / Math.max(moved, Double.MIN_NORMAL));
-            return new Parts(0, 0, v, 0, 8 * EPS * v + 2 * moved * Math.abs(turns) + 4 * Math.PI * moved, true);
+            return new Parts(0, 0, v, 0, 8 * EPS * v + 2 * moved * Rounding.logarithm(a, moved) + 4 * Math.PI * moved, true);
         }
         double d = CompleteIntegral.sineSquare(rim.kc);
         double b = CompleteIntegral.cosineSquare(rim.kc);

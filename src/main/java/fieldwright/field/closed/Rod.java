@@ -72,8 +72,7 @@ public record Rod(double z1, double z2, double density, double slope) implements
             return Closed.onLine(atFoot);
         }
         // the density passes through zero here: V exists, E grows along the rod
-        double logs = Math.log(2 * (z2 - z1) / Math.max(placeError, Double.MIN_NORMAL));
-        double errV = 4 * EPS * Math.abs(slope) * (e.r1 + e.r2) + 4 * Math.abs(slope) * placeError * Math.abs(logs);
+        double errV = 4 * EPS * Math.abs(slope) * (e.r1 + e.r2) + 4 * Math.abs(slope) * placeError * Rounding.logarithm(z2 - z1, placeError);
         return Closed.onEdge(new Closed.Direction(0, 0, -Math.signum(slope)), slope * e.rise, errV);
     }
 

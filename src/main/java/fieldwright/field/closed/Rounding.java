@@ -16,6 +16,11 @@ final class Rounding {
         return EPS * Math.max(Math.max(Math.abs(x), Math.abs(y)), Math.max(Math.abs(z), size));
     }
 
+    /** How large the logarithm of a distance gets beside an edge: ln(16 length/gap), at least 4, finite for a gap of 0. */
+    static double logarithm(double length, double gap) {
+        return Math.max(4, Math.log(16 * length) - Math.log(Math.max(gap, Double.MIN_NORMAL)));
+    }
+
     static void requirePlace(double x, double y, double z, double placeError) {
         requireCoordinate("x", x);
         requireCoordinate("y", y);

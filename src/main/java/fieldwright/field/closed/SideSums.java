@@ -91,7 +91,7 @@ final class SideSums {
         double share = within ? 2 : 1; // a side seen from within has two ends' logarithms
         touchX += share * mx;
         touchY += share * my;
-        double big = 2 * Math.log(4 * length / Math.max(moved, Double.MIN_NORMAL) + 4);
+        double big = 2 * Rounding.logarithm(length, moved);
         errFlat += 2 * moved * big;
         potentialTerms += moved;
         addMoment(e, 0, mx, my, moved);

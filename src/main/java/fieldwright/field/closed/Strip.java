@@ -45,7 +45,7 @@ public record Strip(double x1, double x2, double density) implements ClosedForm 
         double v = -density * (whole - rest - 2 * width + 2 * h * angle);
         double terms = Math.abs(whole) + Math.abs(rest) + 4 * width + 2 * h * angle;
         if (onEdge) {
-            double big = Math.abs(Math.log(Math.max(touch, Double.MIN_NORMAL) / (width * width)));
+            double big = Rounding.logarithm(width, placeError);
             return Closed.onEdge(new Closed.Direction((first ? -1 : 1) * Math.signum(density), 0, 0), v,
                     q * (4 * EPS * terms + 2 * placeError * (big + Math.abs(Math.log(width)) + Math.PI)));
         }

@@ -71,8 +71,8 @@ public record Tube(double z1, double z2, double radius, double density) implemen
         double v = potential(rho, down, up);
         double q = Math.abs(density);
         if (onTop || bottom.near <= moved) {
-            double big = Math.log(16 * radius / Math.max(moved, Double.MIN_NORMAL));
-            double errV = q * (16 * EPS * v + 4 * moved * (Math.abs(big) + Math.PI));
+            double big = Rounding.logarithm(radius, moved);
+            double errV = q * (16 * EPS * v + 4 * moved * (big + Math.PI));
             return Closed.onEdge(new Closed.Direction(0, 0, onTop == density > 0 ? 1 : -1), density * v, errV);
         }
         boolean onShell = Math.abs(rho - radius) <= moved && up > 0 && down < 0;

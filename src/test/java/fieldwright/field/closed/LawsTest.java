@@ -388,6 +388,30 @@ class LawsTest {
         assertTrue(Double.isFinite(far.v()) && Double.isFinite(far.ex()), far::toString);
     }
 
+    /** Every combination of the bodies' own coordinates, their neighbours and tiny numbers, with and without rounding of the place. */
+    @ParameterizedTest
+    @MethodSource("allForms")
+    void specialPlacesGiveNumbersOrSayUnbounded(ClosedForm form) {
+        double[] own = {0, -0.0, 1e-200, -1e-17, 0.25, 0.5, -0.5, 0.6, 0.7, -0.7, 0.75, 0.8, 1, -1, 1.1, 1.25, -1.25, 1.5, 2, 3, Math.nextUp(1.25),
+            Math.nextDown(0.5), 1e-9, 1e9};
+        for (double x : own) {
+            for (double y : own) {
+                for (double z : own) {
+                    check(form, form.at(x, y, z), x, y, z);
+                    check(form, form.at(x, y, z, 0), x, y, z);
+                }
+            }
+        }
+    }
+
+    private static void check(ClosedForm form, Closed found, double x, double y, double z) {
+        boolean unbounded = found.status() == Closed.Status.UNBOUNDED;
+        boolean good = Double.isFinite(found.ex()) && Double.isFinite(found.ey()) && Double.isFinite(found.ez())
+                && (unbounded ? found.errE() == Double.POSITIVE_INFINITY && !Double.isNaN(found.v()) && !Double.isNaN(found.errV())
+                        : Double.isFinite(found.v()) && found.errE() >= 0 && found.errV() >= 0 && found.errV() < 1e300);
+        assertTrue(good, () -> form + " at " + List.of(x, y, z) + ": " + found);
+    }
+
     @Test
     void badBodiesAreRefusedByName() {
         String text = assertThrows(IllegalArgumentException.class, () -> new Ring(-0.05, 1)).getMessage();

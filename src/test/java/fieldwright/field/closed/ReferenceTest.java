@@ -71,6 +71,23 @@ class ReferenceTest {
                 + String.join("\n", wrong.subList(0, Math.min(12, wrong.size()))));
     }
 
+    /** On corners, edges, faces and axes, where the fields of volumes are finite: within 1e-13 and the stated bound. */
+    @ParameterizedTest(name = "{0}")
+    @CsvSource({"box", "cylinder"})
+    void holdsOnTheBodyItself(String name) throws IOException {
+        List<Row> rows = read(name + "On");
+        assertTrue(rows.size() >= 16, () -> "only " + rows.size() + " rows");
+        for (Row row : rows) {
+            Closed found = form(name, row.parameters).at(row.place[0], row.place[1], row.place[2]);
+            double errE = length(new double[] {found.ex() - row.field[0], found.ey() - row.field[1], found.ez() - row.field[2]});
+            double errV = Math.abs(found.v() - row.v);
+            double size = Math.max(length(row.field), Math.abs(row.v) / 2);
+            assertTrue(errE <= Math.min(found.errE(), 1e-13 * size), () -> row.text + ": E error " + errE + ", stated " + found.errE());
+            assertTrue(errV <= Math.min(found.errV(), 1e-13 * size), () -> row.text + ": V error " + errV + ", stated " + found.errV());
+            assertTrue(found.errE() <= 1e-11 * size && found.errV() <= 1e-11 * size, () -> row.text + ": stated " + found);
+        }
+    }
+
     /**
      * Random bodies, aspect ratios to 1e4, also off the origin (the last columns of the report are measured values): the stated bound
      * holds in every row, says something (for an exact place its median is

@@ -77,7 +77,10 @@ def polygon(p, r):
         d2 = q * q + z * z
         d = sqrt(d2)
         r1, r2 = sqrt(s1 * s1 + d2), sqrt(s2 * s2 + d2)
-        L = asinh(s2 / d) - asinh(s1 / d) if d != 0 else (log(abs(s2 / s1)) * (1 if s1 > 0 else -1))
+        if d != 0:
+            L = asinh(s2 / d) - asinh(s1 / d)
+        else:  # on the side itself: unbounded, and no more than an end of a quadrature
+            L = log(abs(s2 / s1)) * (1 if s1 > 0 else -1) if s1 * s2 > 0 else mpf(0)
         field[0] += mx * L
         field[1] += my * L
         v0 += q * L
@@ -210,8 +213,8 @@ def disc(p, r):
     rho = sqrt(x * x + y * y)
     h = abs(z)
     near = sqrt((a - rho) ** 2 + z * z)
-    width = min(mpf(1), near / a)
-    flat = min(mpf(1), abs(a - rho) / a)
+    width = max(mpf(10) ** -12, min(mpf(1), near / a))
+    flat = min(mpf(1), abs(a - rho) / a) if rho != a else mpf(0)
     breaks = sorted(set(rim_breaks(width) + (rim_breaks(flat) if flat > 0 else [])))
     D = lambda f: sqrt((a - rho) ** 2 + z * z + 4 * a * rho * sin(f / 2) ** 2)
     er = 2 * a * quad(lambda f: cos(f) / D(f), breaks)
@@ -484,6 +487,15 @@ def build():
         case('tube', tube, p, places, gap)
         case('cylinder', cylinder, p, places, gap)
     random_cases()
+    whole = lambda r: mpf(1)  # on the body itself, where the value is finite
+    sides = [-1.0, 1.0, -0.5, 0.75, 0.0, 2.0]
+    on = [(1.0, 0.75, 2.0), (-1.0, -0.5, 0.0), (1.0, 0.75, 0.8), (0.3, -0.5, 2.0), (1.0, 0.1, 0.9), (0.2, 0.1, 0.0), (1.0, 0.75, 3.0), (0.0, 0.125, 1.0)]
+    case('boxOn', box, sides + [1.0, 0.0, 0.0, 0.0], on, whole)
+    case('boxOn', box, sides + [0.5, -0.8, 1.1, 0.3], on, whole)
+    for p in ([-1.0, 0.5, 1.25, 1.3], [-10.0, 10.0, 0.125, 1.3]):
+        a = p[2]
+        case('cylinderOn', cylinder, p, [(a, 0.0, p[1]), (0.6 * a, 0.8 * a, p[0]), (a, 0.0, 0.1), (0.0, a, -0.7), (0.3 * a, 0.0, p[1]),
+                                         (0.0, 0.0, p[1]), (0.0, 0.0, 0.0), (a, 0.0, 2 * p[1]), (0.1 * a, 0.2 * a, 0.3)], whole)
     p = [-0.5, 1.5, 0.9]
     case('strip', strip, p, leave([((1.5, 0, 0), [(1, 0, 0), (0.5, 0, 1), (-0.7, 0.1, -0.4)]), ((0.2, 0, 0), up + [(1, 0, 1)])]),
          lambda r: min(sqrt((mpf(r[0]) - e) ** 2 + mpf(r[2]) ** 2) for e in (mpf(-0.5), mpf(1.5))))
