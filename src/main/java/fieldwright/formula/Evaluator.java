@@ -149,8 +149,12 @@ final class Evaluator {
             double value = f.value(x.value());
             return checked(c, value, Bounds.sum(Math.min(2, Bounds.product(slope, x.error())), Math.ulp(value)), standing);
         }
-        Approx result = overBox(f::value, a, f.ulps(), f.absoluteAccuracy());
+        Approx result = overBox(f::value, a, f.ulps(), f.absoluteAccuracy(values(a)));
         return checked(c, result.value(), result.error(), standing);
+    }
+
+    private static double[] values(List<Approx> a) {
+        return a.stream().mapToDouble(Approx::value).toArray();
     }
 
     private Approx checked(Node n, double value, double error, Standing standing) {

@@ -53,7 +53,7 @@ public enum Function {
     ERF("erf", "x", Units.PLAIN, a -> erf(a[0])),
     ERFC("erfc", "x", Units.PLAIN, a -> Erf.erfc(a[0])),
     GAMMA("gamma", "x", Units.PLAIN, a -> gamma(a[0])),
-    DIGAMMA("digamma", "x", Units.PLAIN, a -> Gamma.digamma(a[0])),
+    DIGAMMA("digamma", "x", Units.PLAIN, a -> digamma(a[0])),
     BESSEL_J("besselJ", "n, x", Units.PLAIN, a -> Bessel.j(order(a[0]), a[1])),
     BESSEL_Y("besselY", "n, x", Units.PLAIN, a -> Bessel.y(order(a[0]), a[1])),
     BESSEL_I("besselI", "n, x", Units.PLAIN, a -> Bessel.i(order(a[0]), a[1])),
@@ -113,12 +113,13 @@ public enum Function {
             case EXP, LN, LOG10, SIN, COS, TAN, ASIN, ACOS, ATAN, CBRT -> 1;
             case ATAN2 -> 2;
             case SINH, COSH, TANH, ASINH, ACOSH, ATANH -> 4;
+            case ERFC, ELLIPTIC_PI_PHI -> 256;
             default -> 32;
         };
     }
 
     /** Accuracy that does not shrink with the result: near the zeros of oscillating functions. */
-    double absoluteAccuracy() {
+    double absoluteAccuracy(double... a) {
         return switch (this) {
             case BESSEL_J, BESSEL_Y, LEGENDRE_P, DIGAMMA -> 4e-15;
             default -> 0;
@@ -299,6 +300,22 @@ public enum Function {
             return product;
         }
         return Gamma.gamma(x);
+    }
+
+    /** Upwards by DLMF 5.5.2 until the expansion 5.11.2 has all digits; reflection 5.5.4 below 0. */
+    private static double digamma(double x) {
+        if (x <= 0) {
+            return x == Math.rint(x) ? Double.NaN : digamma(1 - x) - Math.PI / Math.tan(Math.PI * x);
+        }
+        double shift = 0;
+        double y = x;
+        while (y < 12) {
+            shift += 1 / y;
+            y++;
+        }
+        double s = 1 / (y * y);
+        double series = s * (1.0 / 12 - s * (1.0 / 120 - s * (1.0 / 252 - s * (1.0 / 240 - s * (1.0 / 132 - s * (691.0 / 32760 - s / 12))))));
+        return Math.log(y) - 0.5 / y - series - shift;
     }
 
     private static Map<String, List<Function>> byName() {

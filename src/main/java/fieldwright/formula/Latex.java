@@ -155,13 +155,14 @@ public final class Latex {
 
     private static String binary(Node.Binary b) {
         return switch (b.operator()) {
-            case PLUS, MINUS -> within(b.left(), SUM) + b.operator().sign + within(b.right(), b.right() instanceof Node.Negate ? ATOM : PRODUCT);
+            case PLUS, MINUS -> within(b.left(), SUM) + b.operator().sign + within(b.right(), startsWithMinus(b.right()) ? ATOM : PRODUCT);
             case TIMES -> {
                 String right = within(b.right(), POWER);
                 boolean digit = Character.isDigit(right.charAt(0)) || right.startsWith("\\frac{") && Character.isDigit(right.charAt(6));
                 yield within(b.left(), PRODUCT) + (digit ? "\\cdot " : "\\,") + right;
             }
-            case OVER -> "\\frac{" + of(b.left()) + "}{" + of(b.right()) + "}";
+            case OVER -> b.left() instanceof Node.Negate m
+                ? "-\\frac{" + of(m.of()) + "}{" + of(b.right()) + "}" : "\\frac{" + of(b.left()) + "}{" + of(b.right()) + "}";
             case POWER -> power(b);
         };
     }
@@ -215,9 +216,9 @@ public final class Latex {
     private static String relation(Node.Relation r) {
         return switch (r) {
             case LESS -> "<";
-            case LESS_OR_EQUAL -> "\\le ";
+            case LESS_OR_EQUAL -> "\\leq ";   // jlatexmath 1.0.7 takes "le" before "left" for a bracket
             case GREATER -> ">";
-            case GREATER_OR_EQUAL -> "\\ge ";
+            case GREATER_OR_EQUAL -> "\\geq ";
             case MUCH_LESS -> "\\ll ";
             case MUCH_GREATER -> "\\gg ";
         };
@@ -253,9 +254,14 @@ public final class Latex {
         return level(n) < least ? brackets(of(n)) : of(n);
     }
 
+    private static boolean startsWithMinus(Node n) {
+        return n instanceof Node.Negate || n instanceof Node.Binary b && b.operator() != Node.Operator.POWER && startsWithMinus(b.left())
+            && level(b) > SUM;
+    }
+
     private static int level(Node n) {
         if (n instanceof Node.Binary b && b.operator() == Node.Operator.OVER) {
-            return POWER;   // a fraction needs no brackets as a factor
+            return b.left() instanceof Node.Negate ? Printer.level(b.left()) : POWER;   // a fraction needs no brackets as a factor
         }
         return n instanceof Node.When || n instanceof Node.Integral ? PRODUCT : Printer.level(n);
     }

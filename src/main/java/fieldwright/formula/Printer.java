@@ -55,8 +55,8 @@ final class Printer {
     private static String binary(Node.Binary b) {
         return switch (b.operator()) {
             case PLUS, MINUS -> within(b.left(), SUM) + " " + b.operator().sign + " " + within(b.right(), PRODUCT);
-            case TIMES, OVER -> within(b.left(), PRODUCT) + b.operator().sign + within(b.right(), SIGNED);
-            case POWER -> within(b.left(), ATOM) + "^" + within(b.right(), SIGNED);
+            case TIMES, OVER -> factor(b.left(), PRODUCT) + b.operator().sign + factor(b.right(), SIGNED);
+            case POWER -> factor(b.left(), ATOM) + "^" + factor(b.right(), SIGNED);
         };
     }
 
@@ -76,6 +76,11 @@ final class Printer {
 
     private static String list(List<Node> nodes) {
         return nodes.stream().map(Printer::text).collect(Collectors.joining(", ", "(", ")"));
+    }
+
+    /** A number with unit is bracketed: {@code 1 V*m} could be read in two ways. */
+    private static String factor(Node n, int least) {
+        return n instanceof Node.Measure ? "(" + text(n) + ")" : within(n, least);
     }
 
     private static String within(Node n, int least) {

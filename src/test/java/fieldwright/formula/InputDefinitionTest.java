@@ -70,7 +70,7 @@ class InputDefinitionTest {
         "1.8 m ± -1 m @ 8 @ must be > 0", "1.8 m ± @ 7 @ a number is missing", "0 m ± 5 % @ 6 @ percent of 0", "25 % ± 5 % @ 7 @ can mean two things",
         "1 m ± 1 m (nu=3) @ 10 @ coverage factor is missing", "1 m ± 1 m (k=0) @ 13 @ must be a plain number > 0", "1 m ± 1 m (k=2, x=3) @ 15 @ is not known",
         "[1, 2 @ 0 @ not closed", "[1 m, 2 s] @ 6 @ one kind", "[1, , 2] @ 4 @ a number is missing", "[1, 2] q @ 7 @ no unit 'q'",
-        "table(d / mm: 1, 2; U: 1) @ 19 @ has 1 numbers", "table(d: 1; d: 2) @ 12 @ stands twice", "table(d: 1 @ 5 @ not closed", "PE {PE} @ 0 @ a choice is written",
+        "table(d / mm: 1, 2; U: 1) @ 20 @ has 1 numbers", "table(d: 1; d: 2) @ 12 @ stands twice", "table(d: 1 @ 5 @ not closed", "PE {PE} @ 0 @ a choice is written",
         "PVC of {PE, PTFE} @ 0 @ none of the options", "1.5 (whole) @ 0 @ no whole number", "2.1×10^-6 C @ 3 @ 2.1e-6"})
     void errorsHaveAPlace(String text, int position, String part) {
         FormulaException e = assertThrows(FormulaException.class, () -> InputDefinition.parse(text));

@@ -28,11 +28,22 @@ public final class CompleteElliptic {
         return complement == 0 ? 1 : complement / 3 * (Carlson.rd(0, complement, 1) + Carlson.rd(0, 1, complement));
     }
 
-    /** Π(n, m) with characteristic n < 1; NaN for n >= 1. DLMF 19.25.2. */
+    /**
+     * Π(n, m) with characteristic n < 1; NaN for n >= 1. DLMF 19.25.2; for negative n, where its two terms would cancel,
+     * with the characteristic (m-n)/(1-n) instead: Abramowitz-Stegun 17.7.17.
+     */
     public static double thirdKindOfParameter(double n, double m) {
         if (m == 1 && n < 1) {
             return Double.POSITIVE_INFINITY;
         }
-        return Carlson.rf(0, 1 - m, 1) + n / 3 * Carlson.rj(0, 1 - m, 1, 1 - n);
+        if (n < -0.25 && m >= 0) {
+            double other = third((m - n) / (1 - n), (1 - m) / (1 - n), m);
+            return (-n * (1 - m) / (1 - n) * other + m * firstKindOfParameter(m)) / (m - n);
+        }
+        return third(n, 1 - n, m);
+    }
+
+    private static double third(double n, double complementOfN, double m) {
+        return Carlson.rf(0, 1 - m, 1) + n / 3 * Carlson.rj(0, 1 - m, 1, complementOfN);
     }
 }
