@@ -207,10 +207,10 @@ public final class Latex {
         StringBuilder b = new StringBuilder("\\begin{cases}");
         Node rest = w;
         while (rest instanceof Node.When next) {
-            b.append(of(next.yes())).append("&\\text{if }").append(of(next.condition())).append("\\\\");
+            b.append(of(next.yes())).append("&\\quad\\text{if }").append(of(next.condition())).append("\\\\");
             rest = next.no();
         }
-        return b.append(of(rest)).append("&\\text{otherwise}\\end{cases}").toString();
+        return b.append(of(rest)).append("&\\quad\\text{otherwise}\\end{cases}").toString();
     }
 
     private static String relation(Node.Relation r) {
@@ -263,6 +263,6 @@ public final class Latex {
         if (n instanceof Node.Binary b && b.operator() == Node.Operator.OVER) {
             return b.left() instanceof Node.Negate ? Printer.level(b.left()) : POWER;   // a fraction needs no brackets as a factor
         }
-        return n instanceof Node.When || n instanceof Node.Integral ? PRODUCT : Printer.level(n);
+        return n instanceof Node.When ? PRODUCT : Printer.level(n);   // an integral ends with its differential
     }
 }

@@ -22,7 +22,7 @@ class LatexTest {
         "2.1 (uC/m^3); 2.1\\,\\mu \\mathrm{C}/\\mathrm{m}^{3}", "2.1e-6*x; 2.1\\cdot 10^{-6}\\,x", "abs(x); \\left|x\\right|",
         "integral(rho, rho: 0 to R_s); \\int_{0}^{R_{s}}\\rho\\,\\mathrm{d}\\rho",
         "integral(x + y, y: 0 to x, x: 0 to a); \\int_{0}^{a}\\int_{0}^{x}\\left(x+y\\right)\\,\\mathrm{d}y\\,\\mathrm{d}x",
-        "when(rho < a, 1, 0); \\begin{cases}1&\\text{if }\\rho<a\\\\0&\\text{otherwise}\\end{cases}", "besselJ(0, k*rho); J_{0}\\left(k\\,\\rho\\right)",
+        "when(rho < a, 1, 0); \\begin{cases}1&\\quad\\text{if }\\rho<a\\\\0&\\quad\\text{otherwise}\\end{cases}", "besselJ(0, k*rho); J_{0}\\left(k\\,\\rho\\right)",
         "(-2)^n; \\left(-2\\right)^{n}", "(x^2)^3; \\left(x^{2}\\right)^{3}", "90 deg; 90^{\\circ}", "a*-b; a\\,\\left(-b\\right)", "f(a, 2); f\\left(a,\\,2\\right)"})
     void formulas(String text, String latex) {
         assertEquals(latex, Formula.parse(text).latex());
