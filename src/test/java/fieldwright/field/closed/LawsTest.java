@@ -255,6 +255,21 @@ class LawsTest {
         }
     }
 
+    @Test
+    void aHoleIsCutByASlit() {
+        Polygon frame = Polygon.uniform(new double[] {0, 4, 4, 0, 0, 1, 1, 2, 2, 1}, new double[] {0, 0, 4, 4, 0, 1, 2, 2, 1, 1}, 1);
+        Polygon all = Polygon.rectangle(0, 4, 0, 4, 1, 0, 0);
+        Polygon hole = Polygon.rectangle(1, 2, 1, 2, 1, 0, 0);
+        for (double h : new double[] {1e-6, 0.3, 50}) {
+            Closed a = frame.at(1.7, 1.2, h);
+            Closed b = all.at(1.7, 1.2, h);
+            Closed c = hole.at(1.7, 1.2, h);
+            assertEquals(b.ex() - c.ex(), a.ex(), 1e-13);
+            assertEquals(b.ez() - c.ez(), a.ez(), 1e-13);
+            assertEquals(b.v() - c.v(), a.v(), 1e-13);
+        }
+    }
+
     static Stream<Arguments> surfacePlaces() {
         return Stream.of(
                 Arguments.of(new Polygon(new double[] {0, 2, 0.4}, new double[] {0, 0.2, 1.7}, 0.5, -0.8, 1.1), 0.7, 0.5, 0.0, 0.5 - 0.56 + 0.55),
@@ -420,6 +435,9 @@ class LawsTest {
         assertThrows(IllegalArgumentException.class, () -> new Disc(1, Double.NaN));
         assertThrows(IllegalArgumentException.class, () -> new Ball(2, 1, 1));
         assertThrows(IllegalArgumentException.class, () -> Polygon.uniform(new double[] {0, 1, 2}, new double[] {0, 1, 2}, 1));
+        String crossing = assertThrows(IllegalArgumentException.class,
+                () -> Polygon.uniform(new double[] {0, 2, 2, 0}, new double[] {0, 1, 0, 1.5}, 1)).getMessage();
+        assertTrue(crossing.startsWith("polygon sides 1 and 3 cross"), crossing);
         assertThrows(IllegalArgumentException.class, () -> Polygon.uniform(new double[] {0, 1}, new double[] {0, 1}, 1));
         assertThrows(IllegalArgumentException.class, () -> Box.uniform(0, 1, 2, 1, 0, 1, 1));
     }
