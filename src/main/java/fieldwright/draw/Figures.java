@@ -24,6 +24,19 @@ public final class Figures {
         return withUnit(number(si, tolerance, numericalError, scale), scale.printed());
     }
 
+    /** The same with no more than so many decimals: the parts of one value stand beside each other. */
+    static String value(double si, Double tolerance, Double numericalError, Scale scale, int mostDecimals) {
+        if (!Double.isFinite(si) || decimals(si, tolerance, numericalError, scale) <= mostDecimals) {
+            return value(si, tolerance, numericalError, scale);
+        }
+        return withUnit(fixed(scale.shown(si), mostDecimals), scale.printed());
+    }
+
+    /** Decimals that the doubts warrant, in the scale's unit. */
+    static int decimals(double si, Double tolerance, Double numericalError, Scale scale) {
+        return decimals(scale.shown(si), shown(tolerance, scale), shown(numericalError, scale));
+    }
+
     /** The value's digits without the unit; arguments as in {@link #value}. */
     public static String number(double si, Double tolerance, Double numericalError, Scale scale) {
         if (!Double.isFinite(si)) {
@@ -136,6 +149,12 @@ public final class Figures {
 
     private static String minus(String plain) {
         return plain.replace("-", MINUS);
+    }
+
+    /** A number as its author wrote it, in print: {@code 4e-3} as 4·10⁻³, a real minus sign, no digit added or lost. */
+    public static String written(String number) {
+        int e = Math.max(number.indexOf('e'), number.indexOf('E'));
+        return minus(e < 0 ? number : number.substring(0, e)) + (e < 0 ? "" : "·10" + superscript(number.substring(e + 1).replace("+", "")));
     }
 
     /** Digits and minus sign raised: "-20" as ⁻²⁰. */

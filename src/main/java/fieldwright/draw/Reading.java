@@ -4,6 +4,7 @@ import fieldwright.output.Display;
 import fieldwright.output.Status;
 import fieldwright.output.Value;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.stream.Stream;
 
@@ -18,30 +19,35 @@ import java.util.stream.Stream;
  */
 public record Reading(String part, String figure, String doubt, Status status, String reason) {
 
-    /** All numbers of a value. The parts of a vector share one unit. */
+    /** All numbers of a value. The parts of a vector share one unit, and none shows more decimals than the largest. */
     public static List<Reading> of(Value value) {
         Scale scale = scale(value);
+        int decimals = numbers(value).filter(s -> Double.isFinite(s.value())).max(Comparator.comparingDouble(s -> Math.abs(s.value())))
+                .map(s -> Figures.decimals(s.value(), s.tolerance(), s.numericalError(), scale)).orElse(0);
         List<Reading> readings = new ArrayList<>();
-        collect(value, "", scale, readings);
+        collect(value, "", new Rule(scale, decimals), readings);
         return List.copyOf(readings);
     }
 
+    /** How the numbers of one value are shown: their unit, and the most decimals. */
+    private record Rule(Scale scale, int decimals) { }
+
     /** One number in the unit chosen on the sheet, or in SI with a fitting prefix. */
     public static Reading of(Value.Scalar value) {
-        return read("", value, scale(value));
+        return of((Value) value).get(0);
     }
 
-    private static void collect(Value value, String part, Scale scale, List<Reading> readings) {
+    private static void collect(Value value, String part, Rule rule, List<Reading> readings) {
         if (value instanceof Value.Scalar scalar) {
-            readings.add(read(part, scalar, scale));
+            readings.add(read(part, scalar, rule));
         } else if (value instanceof Value.Triple triple) {
             String before = part.isEmpty() ? "" : part + ", ";
-            readings.add(read(before + "x", triple.x(), scale));
-            readings.add(read(before + "y", triple.y(), scale));
-            readings.add(read(before + "z", triple.z(), scale));
+            readings.add(read(before + "x", triple.x(), rule));
+            readings.add(read(before + "y", triple.y(), rule));
+            readings.add(read(before + "z", triple.z(), rule));
         } else if (value instanceof Value.Sides sides) {
-            collect(sides.plus(), "side " + minus(sides.plusSide()), scale, readings);
-            collect(sides.minus(), "side " + minus(sides.minusSide()), scale, readings);
+            collect(sides.plus(), "side " + minus(sides.plusSide()), rule, readings);
+            collect(sides.minus(), "side " + minus(sides.minusSide()), rule, readings);
         } else {
             throw new IllegalArgumentException("a value of kind " + value.getClass().getSimpleName() + " cannot be shown.");
         }
@@ -51,7 +57,8 @@ public record Reading(String part, String figure, String doubt, Status status, S
         return side.replace('-', '−');
     }
 
-    private static Reading read(String part, Value.Scalar s, Scale scale) {
+    private static Reading read(String part, Value.Scalar s, Rule rule) {
+        Scale scale = rule.scale;
         if (s.status() == Status.UNBOUNDED) {
             String sign = s.value() < 0 ? "unbounded, towards −∞" : "unbounded";
             return new Reading(part, sign, "", s.status(), s.reason());
@@ -59,7 +66,7 @@ public record Reading(String part, String figure, String doubt, Status status, S
         if (Double.isNaN(s.value())) {
             return new Reading(part, "no number", "", s.status(), s.reason());
         }
-        return new Reading(part, Figures.value(s.value(), s.tolerance(), s.numericalError(), scale),
+        return new Reading(part, Figures.value(s.value(), s.tolerance(), s.numericalError(), scale, rule.decimals),
                 Figures.doubt(s.tolerance(), s.numericalError(), scale, s.unit()), s.status(), s.reason());
     }
 

@@ -23,7 +23,7 @@ class ReadingTest {
     void theComponentsOfAVectorShareTheUnitOfTheLargest() {
         List<Reading> parts = Reading.of(new Value.Triple(scalar(12), scalar(0), scalar(-45600), null));
         assertEquals(List.of("x", "y", "z"), parts.stream().map(Reading::part).toList());
-        assertEquals(List.of("0.0120000\u00a0kV/m", "0\u00a0kV/m", "−45.6000\u00a0kV/m"), parts.stream().map(Reading::figure).toList());
+        assertEquals(List.of("0.0120\u00a0kV/m", "0\u00a0kV/m", "−45.6000\u00a0kV/m"), parts.stream().map(Reading::figure).toList());
     }
 
     @Test

@@ -1,0 +1,139 @@
+package fieldwright.app;
+
+import fieldwright.draw.Reading;
+import fieldwright.output.Output;
+import fieldwright.sheet.Cell;
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import javafx.scene.Node;
+import javafx.scene.control.Hyperlink;
+import javafx.scene.control.Label;
+import javafx.scene.layout.FlowPane;
+import javafx.scene.layout.VBox;
+
+/** The page: title block, headings of the columns, one row per step, and the row that adds steps. */
+final class PageView extends VBox {
+    private final Zoom zoom;
+    private final StepActions actions;
+    private final Map<Long, StepView> views = new HashMap<>();
+    private final VBox problems = new VBox();
+    private final VBox rows = new VBox();
+    private long atHand = -1;
+
+    PageView(Zoom zoom, TitleBlock title, StepActions actions) {
+        this.zoom = zoom;
+        this.actions = actions;
+        getStyleClass().add("page");
+        problems.getStyleClass().add("sheet-problems");
+        rows.getStyleClass().add("rows");
+        getChildren().addAll(title, problems, headings(), rows);
+    }
+
+    private ThreeColumns headings() {
+        ThreeColumns headings = new ThreeColumns(zoom, heading("Reference"), heading("Calculation"), heading("Output"));
+        headings.getStyleClass().add("headings");
+        return headings;
+    }
+
+    private static VBox heading(String text) {
+        return new VBox(new Label(text));
+    }
+
+    /** Shows the steps; rows of steps that did not change are left as they are. */
+    void show(List<Step> steps, List<Output.Problem> sheetProblems, boolean folded, int workingNow) {
+        problems.getChildren().setAll(sheetProblems.stream().map(p -> (Node) OutputColumn.line(p.text(), "problem")).toList());
+        problems.setManaged(!sheetProblems.isEmpty());
+        Map<String, Output.Result> results = results(steps);
+        List<Node> now = new ArrayList<>();
+        Set<Long> kept = new HashSet<>();
+        for (Step step : steps) {
+            StepView view = views.computeIfAbsent(step.id(), id -> new StepView(id, zoom, actions));
+            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? note(step, results) : "", folded, step.number() == workingNow);
+            view.setAtHand(step.id() == atHand);
+            now.add(view);
+            kept.add(step.id());
+        }
+        views.entrySet().removeIf(entry -> {
+            boolean gone = !kept.contains(entry.getKey());
+            if (gone) {
+                entry.getValue().dispose();
+            }
+            return gone;
+        });
+        now.add(adder(steps.size()));
+        if (!sameRows(now)) {
+            rows.getChildren().setAll(now);
+        }
+    }
+
+    private boolean sameRows(List<Node> now) {
+        List<Node> shown = rows.getChildren();
+        return shown.size() == now.size() && shown.subList(0, shown.size() - 1).equals(now.subList(0, now.size() - 1));
+    }
+
+    private ThreeColumns adder(int steps) {
+        Label number = new Label(Integer.toString(steps + 1));
+        number.getStyleClass().add("number");
+        FlowPane links = new FlowPane(new Label("Add a step:"));
+        links.getStyleClass().add("adder-links");
+        for (Cell.Kind kind : Cell.Kind.values()) {
+            Hyperlink link = new Hyperlink(kind.word());
+            link.setOnAction(e -> actions.add(Integer.MAX_VALUE, kind));
+            links.getChildren().add(link);
+        }
+        ThreeColumns adder = new ThreeColumns(zoom, new VBox(number), new VBox(links), new VBox());
+        adder.getStyleClass().add("adder");
+        return adder;
+    }
+
+    void setAtHand(long id) {
+        atHand = id;
+        views.values().forEach(view -> view.setAtHand(view.id() == id));
+    }
+
+    long atHand() {
+        return atHand;
+    }
+
+    /** Null when it is not on the page. */
+    StepView view(long id) {
+        return views.get(id);
+    }
+
+    /** The row whose text is being edited; null when there is none. */
+    StepView edited() {
+        return views.values().stream().filter(StepView::isEdited).findFirst().orElse(null);
+    }
+
+    // --- notes ---
+
+    private static final Pattern QUOTED = Pattern.compile("\\{([\\p{L}_][\\p{L}\\p{N}_]*)\\}");
+
+    private static Map<String, Output.Result> results(List<Step> steps) {
+        Map<String, Output.Result> results = new HashMap<>();
+        steps.forEach(step -> step.all(Output.Result.class).forEach(r -> results.put(r.name(), r)));
+        return results;
+    }
+
+    /** A note with the results of the page filled in; a name without a result stays as it is written. */
+    private static String note(Step step, Map<String, Output.Result> results) {
+        Matcher m = QUOTED.matcher(step.cell().source());
+        StringBuilder text = new StringBuilder();
+        while (m.find()) {
+            Output.Result result = results.get(m.group(1));
+            m.appendReplacement(text, Matcher.quoteReplacement(result == null ? m.group() : figures(result)));
+        }
+        return m.appendTail(text).toString();
+    }
+
+    private static String figures(Output.Result result) {
+        return "**" + String.join("; ", Reading.of(result.value()).stream()
+                .map(r -> (r.part().isEmpty() ? "" : r.part() + " ") + r.figure()).toList()) + "**";
+    }
+}

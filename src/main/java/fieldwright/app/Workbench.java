@@ -1,0 +1,178 @@
+package fieldwright.app;
+
+import fieldwright.output.CellOutcome;
+import fieldwright.output.Output;
+import fieldwright.output.RunOutcome;
+import java.util.List;
+import java.util.concurrent.CompletableFuture;
+import java.util.concurrent.CompletionException;
+import java.util.concurrent.Executor;
+import java.util.function.Supplier;
+
+/**
+ * Hands the desk's text to the calculation and brings back what it gives. At most one order is under way; an edit
+ * meanwhile stops it and asks again. All methods are called on one thread, the one the executor leads back to.
+ */
+final class Workbench implements AutoCloseable {
+
+    /** Asked before a text that was not made here runs for the first time. */
+    interface Consent {
+        boolean mayRun();
+    }
+
+    private final SheetDesk desk;
+    private final Supplier<Calculator> start;
+    private final Consent consent;
+    private final Executor home;
+    private final Runnable changed;
+    private CompletableFuture<Calculator> calculator;
+    private boolean allowed;
+    private boolean busy;
+    private boolean again;
+    private boolean stopping;
+    private boolean closed;
+    private int reached;
+    private String trouble = "";
+
+    /**
+     * @param start   starts a calculation; may take its time, is called elsewhere
+     * @param home    leads back to the thread of the desk
+     * @param changed told when the state changes
+     */
+    Workbench(SheetDesk desk, Supplier<Calculator> start, Consent consent, Executor home, Runnable changed) {
+        this.desk = desk;
+        this.start = start;
+        this.consent = consent;
+        this.home = home;
+        this.changed = changed;
+    }
+
+    /** Gets the calculation ready, so that the first order need not wait. Runs nothing of the sheet. */
+    void warmUp() {
+        calculator();
+    }
+
+    private CompletableFuture<Calculator> calculator() {
+        if (calculator == null || calculator.isCompletedExceptionally()) {
+            calculator = CompletableFuture.supplyAsync(start);
+        }
+        return calculator;
+    }
+
+    /** Works the sheet out; asks first where it must. */
+    void workOut() {
+        if (!allowed) {
+            allowed = consent.mayRun();
+        }
+        if (allowed) {
+            order();
+        }
+    }
+
+    /** The text changed. It is worked out again at once if it was worked out before. */
+    void edited() {
+        if (allowed && (desk.wasWorked() || busy)) {
+            order();
+        }
+    }
+
+    /** Stops what is under way. */
+    void stop() {
+        if (busy) {
+            again = false;
+            stopping = true;
+            calculator().thenAccept(Calculator::stop);
+            changed.run();
+        }
+    }
+
+    private void order() {
+        if (busy) {
+            again = true;
+            calculator().thenAccept(Calculator::stop);
+            return;
+        }
+        busy = true;
+        stopping = false;
+        reached = 0;
+        trouble = "";
+        SheetDesk.Order order = desk.order();
+        changed.run();
+        calculator().thenCompose(c -> c.work(order.text(), listener(order)))
+                .whenComplete((run, fault) -> home.execute(() -> end(order, run, fault)));
+    }
+
+    private Calculator.Listener listener(SheetDesk.Order order) {
+        return new Calculator.Listener() {
+            @Override
+            public void reached(int step) {
+                home.execute(() -> {
+                    if (busy && !closed) {
+                        reached = step;
+                        changed.run();
+                    }
+                });
+            }
+
+            @Override
+            public void gave(CellOutcome outcome) {
+                home.execute(() -> {
+                    if (busy && !closed) {
+                        desk.take(order, outcome);
+                    }
+                });
+            }
+        };
+    }
+
+    private void end(SheetDesk.Order order, RunOutcome run, Throwable fault) {
+        if (closed) {
+            return;
+        }
+        busy = false;
+        reached = 0;
+        if (fault != null) {
+            trouble = "the calculation ended: " + reason(fault);
+            desk.take(order, new RunOutcome(List.of(), List.of(new Output.Problem(0, 0,
+                    trouble + " The text is safe. Work out again starts a new one."))));
+        } else {
+            desk.take(order, run);
+        }
+        if (again) {
+            again = false;
+            order();
+        } else {
+            changed.run();
+        }
+    }
+
+    private static String reason(Throwable fault) {
+        Throwable cause = fault instanceof CompletionException && fault.getCause() != null ? fault.getCause() : fault;
+        String message = cause.getMessage() == null ? cause.getClass().getSimpleName() : cause.getMessage();
+        return message.endsWith(".") ? message : message + ".";
+    }
+
+    boolean isBusy() {
+        return busy;
+    }
+
+    boolean isStopping() {
+        return stopping && busy;
+    }
+
+    /** The step being worked, 1-based; 0 when none is. */
+    int reached() {
+        return reached;
+    }
+
+    @Override
+    public void close() {
+        closed = true;
+        if (calculator != null) {
+            calculator.thenAccept(c -> {
+                c.stop();
+                c.close();
+            });
+        }
+    }
+}
