@@ -32,7 +32,7 @@ class ArchitectureTest {
             Map.entry("session", Set.of("quantity", "formula", "geometry", "charge", "integral", "field", "judge", "study",
                     "output", "words", "sheet")),
             Map.entry("draw", Set.of("output")),
-            Map.entry("app", Set.of("output", "sheet", "session", "draw")),
+            Map.entry("app", Set.of("output", "formula", "sheet", "session", "draw")),
             Map.entry("cli", Set.of("output", "sheet", "session", "draw", "app")));
     private static final Set<String> PICTURES = Set.of("app", "draw");
 

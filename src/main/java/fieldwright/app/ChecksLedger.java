@@ -17,7 +17,7 @@ final class ChecksLedger extends VBox {
     private final LongConsumer goTo;
     private final Label heading = new Label("Checks");
     private final VBox list = new VBox();
-    private List<Row> rows = List.of();
+    private List<Row> rows;
 
     ChecksLedger(LongConsumer goTo) {
         this.goTo = goTo;

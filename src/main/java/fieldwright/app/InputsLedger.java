@@ -95,12 +95,23 @@ final class InputsLedger extends VBox {
             Label unit = new Label(CalculationColumn.printedUnit(row.unit));
             unit.getStyleClass().add("ledger-unit");
             unit.setMinWidth(USE_PREF_SIZE);
+            boolean number = !row.unit.isEmpty() || InputValue.of(entries.get(i).definition()).isPresent();
+            field.setMinWidth(USE_PREF_SIZE);
+            if (!number) {
+                field.getStyleClass().add("ledger-list");
+                HBox.setHgrow(field, Priority.ALWAYS);
+            }
             HBox value = new HBox(field, unit);
             value.getStyleClass().add("ledger-value");
             Label tolerance = new Label(CalculationColumn.printedTolerance(row.tolerance));
             tolerance.getStyleClass().add("ledger-tolerance");
             tolerance.setMinWidth(USE_PREF_SIZE);
-            table.addRow(i, Typesetting.symbol(Notation.name(row.name), row.name, zoom), value, tolerance);
+            table.addRow(i, Typesetting.symbol(Notation.name(row.name), row.name, zoom), value);
+            if (number) {
+                table.add(tolerance, 2, i);
+            } else {
+                GridPane.setColumnSpan(value, 2);
+            }
         }
         table.getChildren().forEach(n -> GridPane.setValignment(n, VPos.CENTER));
     }

@@ -1,14 +1,15 @@
 package fieldwright.app;
 
+import fieldwright.draw.Figures;
 import fieldwright.draw.Reading;
 import fieldwright.output.CellOutcome;
 import fieldwright.output.Output;
 import fieldwright.output.Status;
 import fieldwright.output.Value;
-import fieldwright.draw.Figures;
 import java.util.List;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
+import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
 import javafx.scene.text.Text;
 import javafx.scene.text.TextFlow;
@@ -96,8 +97,9 @@ final class OutputColumn {
             box.getChildren().add(line(reading.doubt(), "doubt"));
         }
         if (reading.status() != Status.CONVERGED) {
-            String what = reading.status() == Status.UNBOUNDED ? "unbounded" : "did not converge";
-            box.getChildren().add(line(what + (reading.reason().isEmpty() ? "" : ": " + reading.reason()), "unreliable"));
+            String why = reading.status() == Status.UNBOUNDED ? reading.reason()
+                    : "did not converge" + (reading.reason().isEmpty() ? "" : ": " + reading.reason());
+            box.getChildren().add(line(why, "unreliable"));
         }
     }
 
@@ -150,7 +152,7 @@ final class OutputColumn {
     static Label line(String text, String style) {
         Label label = new Label(text);
         label.setWrapText(true);
-        label.setMinHeight(javafx.scene.layout.Region.USE_PREF_SIZE);
+        label.setMinHeight(Region.USE_PREF_SIZE);
         label.setMaxWidth(Double.MAX_VALUE);
         label.getStyleClass().add(style);
         return label;

@@ -9,8 +9,6 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 import javafx.scene.Node;
 import javafx.scene.control.Hyperlink;
 import javafx.scene.control.Label;
@@ -54,7 +52,7 @@ final class PageView extends VBox {
         Set<Long> kept = new HashSet<>();
         for (Step step : steps) {
             StepView view = views.computeIfAbsent(step.id(), id -> new StepView(id, zoom, actions));
-            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? note(step, results) : "", folded, step.number() == workingNow);
+            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? step.filled(name -> figures(results.get(name))) : "", folded, step.number() == workingNow);
             view.setAtHand(step.id() == atHand);
             now.add(view);
             kept.add(step.id());
@@ -113,27 +111,14 @@ final class PageView extends VBox {
 
     // --- notes ---
 
-    private static final Pattern QUOTED = Pattern.compile("\\{([\\p{L}_][\\p{L}\\p{N}_]*)\\}");
-
     private static Map<String, Output.Result> results(List<Step> steps) {
         Map<String, Output.Result> results = new HashMap<>();
         steps.forEach(step -> step.all(Output.Result.class).forEach(r -> results.put(r.name(), r)));
         return results;
     }
 
-    /** A note with the results of the page filled in; a name without a result stays as it is written. */
-    private static String note(Step step, Map<String, Output.Result> results) {
-        Matcher m = QUOTED.matcher(step.cell().source());
-        StringBuilder text = new StringBuilder();
-        while (m.find()) {
-            Output.Result result = results.get(m.group(1));
-            m.appendReplacement(text, Matcher.quoteReplacement(result == null ? m.group() : figures(result)));
-        }
-        return m.appendTail(text).toString();
-    }
-
     private static String figures(Output.Result result) {
-        return "**" + String.join("; ", Reading.of(result.value()).stream()
-                .map(r -> (r.part().isEmpty() ? "" : r.part() + " ") + r.figure()).toList()) + "**";
+        return result == null ? null : String.join("; ", Reading.of(result.value()).stream()
+                .map(r -> (r.part().isEmpty() ? "" : r.part() + " ") + r.figure()).toList());
     }
 }

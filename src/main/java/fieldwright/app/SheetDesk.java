@@ -39,8 +39,12 @@ final class SheetDesk {
     /** What undo goes back to. */
     private record Page(Sheet sheet, List<Long> ids) { }
 
-    /** What a step gave, and the cell as it was then. */
-    private record Worked(Cell cell, CellOutcome outcome) { }
+    /**
+     * What a step gave, and the cell as it was then.
+     *
+     * @param doubtful true when a later run was to work it again and has not yet, so that what it read may be of old
+     */
+    private record Worked(Cell cell, CellOutcome outcome, boolean doubtful) { }
 
     private static final int UNDO_DEPTH = 200;
 
@@ -220,9 +224,17 @@ final class SheetDesk {
 
     // --- results ---
 
-    /** What to hand to a calculation now. */
+    /**
+     * What to hand to a calculation now. Steps that are stale stay so until they give something themselves: an order may
+     * end anywhere.
+     */
     Order order() {
+        steps.stream().filter(Step::stale).forEach(s -> doubt(s.id()));
         return new Order(page.sheet.write(), steps);
+    }
+
+    private void doubt(long id) {
+        worked.computeIfPresent(id, (i, w) -> new Worked(w.cell, w.outcome, true));
     }
 
     /** Takes what one step of an order gave, as soon as it is known. */
@@ -243,11 +255,15 @@ final class SheetDesk {
     }
 
     private boolean store(Order order, CellOutcome outcome) {
-        if (outcome.cell() < 1 || outcome.cell() > order.steps.size() || outcome.state() == CellOutcome.State.NOT_REACHED) {
+        if (outcome.cell() < 1 || outcome.cell() > order.steps.size()) {
             return false;
         }
         Step step = order.steps.get(outcome.cell() - 1);
-        Worked now = new Worked(step.cell(), outcome);
+        if (outcome.state() == CellOutcome.State.NOT_REACHED) {
+            doubt(step.id());
+            return true;
+        }
+        Worked now = new Worked(step.cell(), outcome, false);
         return !now.equals(worked.put(step.id(), now));
     }
 
@@ -259,7 +275,7 @@ final class SheetDesk {
     /**
      * The steps with what still holds. A step is stale when its own text changed, when it was not worked through to its
      * end, when it reads a name that a stale or changed step above declares or declared, or when its place among the
-     * steps changed. Working steps share Java names, which their reads do not tell: below a stale one all are stale.
+     * steps changed. A note is stale with the results it quotes, wherever they stand. Working steps share Java names, which their reads do not tell: below a stale one all are stale.
      */
     private List<Step> judged() {
         List<Step> result = new ArrayList<>();
@@ -271,7 +287,7 @@ final class SheetDesk {
             Cell cell = page.sheet.cells().get(i);
             Worked w = worked.get(id);
             Step fresh = new Step(id, i + 1, cell, w == null ? null : w.cell, w == null ? null : w.outcome, false);
-            boolean stale = w != null && (fresh.isEdited() || !w.outcome.isComplete() && w.outcome.state() != CellOutcome.State.FAILED
+            boolean stale = w != null && (w.doubtful || fresh.isEdited() || !w.outcome.isComplete() && w.outcome.state() != CellOutcome.State.FAILED
                     || w.outcome.reads().stream().anyMatch(doubtful::contains)
                     || cell.kind() == Cell.Kind.WORKING && javaDoubtful
                     || !above.equals(workedAbove(id)));
@@ -283,8 +299,9 @@ final class SheetDesk {
             if (cell.kind() != Cell.Kind.NOTE) {
                 above.add(id);
             }
-            result.add(doubt ? new Step(id, i + 1, cell, fresh.worked(), fresh.outcome(), true) : fresh);
+            result.add(doubt ? fresh.asStale() : fresh);
         }
+        result.replaceAll(step -> step.quotes().stream().anyMatch(doubtful::contains) ? step.asStale() : step);
         return List.copyOf(result);
     }
 

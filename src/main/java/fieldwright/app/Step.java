@@ -10,6 +10,9 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Objects;
 import java.util.Set;
+import java.util.function.UnaryOperator;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /**
  * One step of the sheet as it stands now, with what is known of its results.
@@ -56,6 +59,29 @@ record Step(long id, int number, Cell cell, Cell worked, CellOutcome outcome, bo
         all(Output.Typeset.class).forEach(t -> names.add(t.name()));
         names.remove("");
         return names;
+    }
+
+    private static final Pattern QUOTED = Pattern.compile("\\{([\\p{L}_][\\p{L}\\p{N}_]*)\\}");
+
+    /** Names of results that a note quotes as {@code {E_roof}}; empty for other steps. */
+    Set<String> quotes() {
+        Set<String> names = new HashSet<>();
+        if (cell.kind() == Cell.Kind.NOTE) {
+            QUOTED.matcher(cell.source()).results().forEach(m -> names.add(m.group(1)));
+        }
+        return names;
+    }
+
+    /** A note's CommonMark with the figures of the results it quotes; a name without figures stays as it is written. */
+    String filled(UnaryOperator<String> figures) {
+        return QUOTED.matcher(cell.source()).replaceAll(m -> {
+            String known = figures.apply(m.group(1));
+            return Matcher.quoteReplacement(known == null ? m.group() : "**" + known + "**");
+        });
+    }
+
+    Step asStale() {
+        return new Step(id, number, cell, worked, outcome, true);
     }
 
     /** Line within the step's text of a line of the file as it was worked, 1-based; 0 when it is not in this step. */

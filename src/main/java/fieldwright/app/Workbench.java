@@ -32,7 +32,7 @@ final class Workbench implements AutoCloseable {
     private boolean stopping;
     private boolean closed;
     private int reached;
-    private String trouble = "";
+    private String underWay = "";
 
     /**
      * @param start   starts a calculation; may take its time, is called elsewhere
@@ -87,6 +87,9 @@ final class Workbench implements AutoCloseable {
     }
 
     private void order() {
+        if (busy && !stopping && !again && desk.sheet().write().equals(underWay)) {
+            return;
+        }
         if (busy) {
             again = true;
             calculator().thenAccept(Calculator::stop);
@@ -95,8 +98,8 @@ final class Workbench implements AutoCloseable {
         busy = true;
         stopping = false;
         reached = 0;
-        trouble = "";
         SheetDesk.Order order = desk.order();
+        underWay = order.text();
         changed.run();
         calculator().thenCompose(c -> c.work(order.text(), listener(order)))
                 .whenComplete((run, fault) -> home.execute(() -> end(order, run, fault)));
@@ -131,19 +134,18 @@ final class Workbench implements AutoCloseable {
         }
         busy = false;
         reached = 0;
-        if (fault != null) {
-            trouble = "the calculation ended: " + reason(fault);
-            desk.take(order, new RunOutcome(List.of(), List.of(new Output.Problem(0, 0,
-                    trouble + " The text is safe. Work out again starts a new one."))));
-        } else {
-            desk.take(order, run);
-        }
         if (again) {
+            // Superseded: what its steps gave still counts, its complaints about being stopped do not.
             again = false;
+            if (run != null) {
+                run.cells().forEach(cell -> desk.take(order, cell));
+            }
             order();
-        } else {
-            changed.run();
+            return;
         }
+        desk.take(order, fault == null ? run : new RunOutcome(List.of(), List.of(new Output.Problem(0, 0,
+                "the calculation ended: " + reason(fault) + " The text is safe. Work out again starts a new one."))));
+        changed.run();
     }
 
     private static String reason(Throwable fault) {
