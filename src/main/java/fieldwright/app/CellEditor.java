@@ -2,9 +2,12 @@ package fieldwright.app;
 
 import fieldwright.sheet.Cell;
 import java.time.Duration;
+import java.util.Collection;
 import java.util.List;
 import java.util.function.Consumer;
+import javafx.application.Platform;
 import javafx.beans.value.ChangeListener;
+import javafx.geometry.Bounds;
 import javafx.geometry.Orientation;
 import javafx.scene.Node;
 import javafx.scene.input.KeyCode;
@@ -15,6 +18,7 @@ import org.fxmisc.flowless.VirtualizedScrollPane;
 import org.fxmisc.richtext.CodeArea;
 import org.fxmisc.richtext.model.StyleSpansBuilder;
 import org.fxmisc.richtext.util.UndoUtils;
+import org.reactfx.EventStreams;
 import org.reactfx.Subscription;
 
 /**
@@ -26,11 +30,14 @@ final class CellEditor extends Region {
     private static final int HIGHEST = 46;                       // lines, then it scrolls by itself
     private static final Duration PAUSE = Duration.ofMillis(90);
 
-    /** What the keys that lead out of the editor do. */
-    interface Exits {
+    /** The page around the editor. */
+    interface Host {
         void leave();
 
         void workOut();
+
+        /** The caret is here now, on the screen; it should be seen. */
+        void caretAt(Bounds place);
     }
 
     private final CodeArea area = new CodeArea();
@@ -40,7 +47,7 @@ final class CellEditor extends Region {
     private Subscription subscriptions;
     private final ChangeListener<Number> heightListener = (o, was, is) -> requestLayout();
 
-    CellEditor(Cell.Kind kind, String text, Zoom zoom, Exits exits, Consumer<String> typed) {
+    CellEditor(Cell.Kind kind, String text, Zoom zoom, Host host, Consumer<String> typed) {
         this.kind = kind;
         this.zoom = zoom;
         getStyleClass().add("cell-editor");
@@ -56,9 +63,11 @@ final class CellEditor extends Region {
             typed.accept(area.getText());
         });
         subscriptions = subscriptions.and(area.multiPlainChanges().subscribe(changes -> requestParentLayout()));
+        subscriptions = subscriptions.and(EventStreams.nonNullValuesOf(area.caretBoundsProperty())
+                .subscribe(place -> place.ifPresent(host::caretAt)));
         area.totalHeightEstimateProperty().addListener(heightListener);
         area.addEventFilter(ScrollEvent.SCROLL, this::passOn);
-        area.addEventFilter(KeyEvent.KEY_PRESSED, e -> key(e, exits));
+        area.addEventFilter(KeyEvent.KEY_PRESSED, e -> key(e, host));
     }
 
     String text() {
@@ -88,19 +97,19 @@ final class CellEditor extends Region {
 
     private void colour() {
         if (kind == Cell.Kind.WORKING && area.getLength() > 0) {
-            StyleSpansBuilder<java.util.Collection<String>> spans = new StyleSpansBuilder<>();
+            StyleSpansBuilder<Collection<String>> spans = new StyleSpansBuilder<>();
             JavaColours.of(area.getText()).forEach(run -> spans.add(List.of(run.style()), run.text().length()));
             area.setStyleSpans(0, spans.create());
         }
     }
 
-    private void key(KeyEvent e, Exits exits) {
+    private void key(KeyEvent e, Host host) {
         if (e.getCode() == KeyCode.ESCAPE) {
             e.consume();
-            exits.leave();
+            host.leave();
         } else if (e.getCode() == KeyCode.ENTER && e.isShortcutDown()) {
             e.consume();
-            exits.workOut();
+            host.workOut();
         } else if (e.getCode() == KeyCode.ENTER && !e.isAltDown() && kind == Cell.Kind.WORKING) {
             e.consume();
             String line = area.getParagraph(area.getCurrentParagraph()).getText();
@@ -111,7 +120,7 @@ final class CellEditor extends Region {
             area.replaceSelection("    ");
         } else if (e.getCode() == KeyCode.TAB) {
             e.consume();
-            exits.leave();
+            host.leave();
         }
     }
 
@@ -168,7 +177,7 @@ final class CellEditor extends Region {
         scroll.resizeRelocate(snappedLeftInset(), snappedTopInset(), getWidth() - snappedLeftInset() - snappedRightInset(),
                 getHeight() - snappedTopInset() - snappedBottomInset());
         if (Math.abs(computePrefHeight(getWidth()) - getHeight()) > 0.5) {
-            javafx.application.Platform.runLater(this::requestParentLayout);
+            Platform.runLater(this::requestParentLayout);
         }
     }
 }

@@ -245,7 +245,7 @@ final class Pad extends BorderPane {
 
     // --- editing ---
 
-    private final class Actions implements StepActions, CellEditor.Exits {
+    private final class Actions implements StepActions, CellEditor.Host {
         @Override
         public void takeUp(long id) {
             StepView edited = page.edited();
@@ -277,6 +277,14 @@ final class Pad extends BorderPane {
         }
 
         @Override
+        public void caretAt(Bounds place) {
+            Bounds at = scroll.getContent().screenToLocal(place);
+            if (at != null) {
+                reveal(at);
+            }
+        }
+
+        @Override
         public void add(int at, Cell.Kind kind) {
             addStep(Math.min(at, desk.steps().size()), kind);
         }
@@ -301,12 +309,11 @@ final class Pad extends BorderPane {
         }
         page.setAtHand(id);
         StepView view = page.view(id);
-        Actions exits = new Actions();
         if (folded && view.step().cell().kind() == Cell.Kind.WORKING) {
             folded = false;
             show();
         }
-        view.edit(caret, exits);
+        view.edit(caret, new Actions());
         bar.show();
     }
 
@@ -436,24 +443,26 @@ final class Pad extends BorderPane {
         });
     }
 
-    /** Scrolls just so far that the node is seen; its top when it is higher than the window. */
     private void reveal(Node node) {
         scroll.layout();
-        Bounds content = scroll.getContent().getBoundsInLocal();
+        reveal(scroll.getContent().sceneToLocal(node.localToScene(node.getBoundsInLocal())));
+    }
+
+    /** Scrolls just so far that a place on the page is seen; one that is higher than the window is left if any of it is. */
+    private void reveal(Bounds at) {
         double view = scroll.getViewportBounds().getHeight();
-        double room = content.getHeight() - view;
-        if (room <= 0) {
-            return;
-        }
-        Bounds at = scroll.getContent().sceneToLocal(node.localToScene(node.getBoundsInLocal()));
+        double room = scroll.getContent().getBoundsInLocal().getHeight() - view;
         double top = scroll.getVvalue() * room;
         double margin = zoom.em(1);
-        if (at.getMinY() - margin < top || at.getHeight() > view) {
-            if (at.getMinY() - margin < top || at.getMinY() > top + view - zoom.em(4)) {
-                scroll.setVvalue(Math.max(0, at.getMinY() - margin) / room);
-            }
+        boolean tall = at.getHeight() + 2 * margin > view;
+        boolean seen = at.getMaxY() > top && at.getMinY() < top + view;
+        if (room <= 0 || tall && seen) {
+            return;
+        }
+        if (at.getMinY() - margin < top || tall) {
+            scroll.setVvalue(Math.max(0, Math.min(1, (at.getMinY() - margin) / room)));
         } else if (at.getMaxY() + margin > top + view) {
-            scroll.setVvalue(Math.min(1, (at.getMaxY() + margin - view) / room));
+            scroll.setVvalue(Math.max(0, Math.min(1, (at.getMaxY() + margin - view) / room)));
         }
     }
 

@@ -80,6 +80,11 @@ final class PictureView extends Region {
     }
 
     @Override
+    protected double computeMaxHeight(double width) {
+        return computePrefHeight(width);
+    }
+
+    @Override
     protected void layoutChildren() {
         Picture now = pictureFor(getWidth());
         if (now != painted || paintedAt != zoom.factor()) {

@@ -143,17 +143,17 @@ final class StepView extends ThreeColumns {
     // --- editing ---
 
     /** Opens the editor; the caret stands before this letter, at the end for −1. */
-    void edit(int caret, CellEditor.Exits exits) {
+    void edit(int caret, CellEditor.Host host) {
         if (editor == null) {
-            editor = new CellEditor(step.cell().kind(), step.cell().source(), zoom, exits, text -> fillCalculation());
+            editor = new CellEditor(step.cell().kind(), step.cell().source(), zoom, host, text -> fillCalculation());
             labelField = new TextField(step.cell().label());
             labelField.setPromptText("label");
             labelField.getStyleClass().add("label-field");
-            labelField.setOnAction(e -> exits.leave());
+            labelField.setOnAction(e -> host.leave());
             labelField.addEventHandler(KeyEvent.KEY_PRESSED, e -> {
                 if (e.getCode() == KeyCode.ESCAPE) {
                     e.consume();
-                    exits.leave();
+                    host.leave();
                 }
             });
             fillReference();

@@ -113,7 +113,7 @@ class PadTest {
             started++;
             return calculator;
         }, Platform::runLater);
-        Scene scene = new Scene(pad, 1300, 900);
+        Scene scene = new Scene(pad, 1240, 760);
         PadWindow.install(scene, pad);
         stage = new Stage();
         stage.setScene(scene);
@@ -488,7 +488,6 @@ class PadTest {
         untilIdle();
         for (double width : new double[] {1600, 1000, 700, 560}) {
             Fx.run(() -> {
-                stage.setWidth(width);
                 pad.resize(width, 800);
                 pad.applyCss();
                 pad.layout();
