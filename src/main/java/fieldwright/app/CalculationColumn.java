@@ -37,16 +37,17 @@ final class CalculationColumn {
     /**
      * The text of a step as it is read.
      *
+     * @param worked  lines of a derive step as the last run set them
      * @param folded  true when Java text is folded away
      * @param note    a note's CommonMark with its live results filled in
      * @param clicked told at which letter the reader clicked, −1 where no letter can be told
      */
-    List<Node> text(Cell cell, String note, boolean folded, IntConsumer clicked) {
+    List<Node> text(Cell cell, String note, List<Output.Typeset> worked, boolean folded, IntConsumer clicked) {
         List<Node> nodes = new ArrayList<>();
         switch (cell.kind()) {
             case NOTE -> nodes.add(note.isBlank() ? hint("empty note") : NoteText.of(note));
             case INPUT -> nodes.add(inputs(cell.inputs()));
-            case DERIVE -> derives(nodes, cell.derives());
+            case DERIVE -> derives(nodes, cell.derives(), worked);
             case WORKING -> {
                 if (folded) {
                     long lines = cell.source().lines().count();
@@ -115,30 +116,34 @@ final class CalculationColumn {
         return "±\u00a0" + width + (m.group(3) == null ? "" : " " + m.group(3));
     }
 
-    private void derives(List<Node> nodes, List<DeriveLine> lines) {
+    private void derives(List<Node> nodes, List<DeriveLine> lines, List<Output.Typeset> worked) {
         if (lines.isEmpty()) {
             nodes.add(hint("no formulas yet: name = formula | description"));
         }
         for (DeriveLine line : lines) {
             if (line instanceof DeriveEntry entry) {
-                nodes.add(derived(entry));
+                nodes.add(derived(entry, worked));
             } else if (line instanceof MalformedLine bad) {
                 nodes.add(OutputColumn.line(bad.message(), "problem"));
             }
         }
     }
 
-    private Node derived(DeriveEntry entry) {
-        VBox box = derived(Notation.line(entry), entry.name() + " = " + entry.formula(), entry.description());
+    private Node derived(DeriveEntry entry, List<Output.Typeset> worked) {
+        String words = Notation.words(entry);
+        VBox box = derived(Notation.line(entry), words, remark(words, worked, entry.description()));
         for (DeriveEntry.Continuation next : entry.continuations()) {
-            PictureView line = Typesetting.formula(Notation.line(next), next.formula(), zoom);
+            String nextWords = Notation.words(next);
+            VBox line = derived(Notation.line(next), nextWords, remark(nextWords, worked, next.description()));
             VBox.setMargin(line, new Insets(0, 0, 0, zoom.em(1.5)));
             box.getChildren().add(line);
-            if (!next.description().isEmpty()) {
-                box.getChildren().add(OutputColumn.line(next.description(), "description"));
-            }
         }
         return box;
+    }
+
+    /** What the run says of a line, such as that it was not checked; before a run what its author says of it. */
+    private static String remark(String words, List<Output.Typeset> worked, String description) {
+        return worked.stream().filter(line -> line.plainText().equals(words)).map(Output.Typeset::description).findFirst().orElse(description);
     }
 
     private VBox derived(String latex, String words, String description) {

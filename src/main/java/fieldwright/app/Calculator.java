@@ -9,10 +9,10 @@ interface Calculator extends AutoCloseable {
 
     /** Told on the way, from any thread. */
     interface Listener {
-        /** This step, 1-based, is being worked now. */
+        /** This step, 1-based, is being worked now; 0 when all results stand and only their tolerances are worked. */
         void reached(int step);
 
-        /** This is what a step gave so far. */
+        /** This is what a step gave; told again when tolerances are known. */
         void gave(CellOutcome outcome);
     }
 

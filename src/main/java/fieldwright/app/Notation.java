@@ -2,6 +2,7 @@ package fieldwright.app;
 
 import fieldwright.formula.Formula;
 import fieldwright.formula.FormulaException;
+import fieldwright.formula.Names;
 import fieldwright.sheet.DeriveEntry;
 import java.util.stream.Collectors;
 
@@ -27,6 +28,21 @@ final class Notation {
     /** A line that goes on: equal, or what it becomes in a limiting case. */
     static String line(DeriveEntry.Continuation next) {
         return (next.relation() == DeriveEntry.Relation.EQUAL ? "= " : "\\simeq ") + formula(next.formula()) + condition(next.condition());
+    }
+
+    /** A derive line in plain text, as a run words it. */
+    static String words(DeriveEntry entry) {
+        String arguments = entry.parameters().stream().map(p -> Names.fold(p.name())).collect(Collectors.joining(", "));
+        return Names.fold(entry.name()) + (arguments.isEmpty() ? "" : "(" + arguments + ")") + " = " + entry.formula()
+                + conditionWords(entry.condition());
+    }
+
+    static String words(DeriveEntry.Continuation next) {
+        return (next.relation() == DeriveEntry.Relation.EQUAL ? "= " : "~ ") + next.formula() + conditionWords(next.condition());
+    }
+
+    private static String conditionWords(String condition) {
+        return condition.isEmpty() ? "" : " for " + condition;
     }
 
     private static String condition(String text) {

@@ -2,6 +2,7 @@ package fieldwright.app;
 
 import fieldwright.draw.Reading;
 import fieldwright.output.Output;
+import fieldwright.output.Value;
 import fieldwright.sheet.Cell;
 import java.util.ArrayList;
 import java.util.HashMap;
@@ -47,12 +48,12 @@ final class PageView extends VBox {
     void show(List<Step> steps, List<Output.Problem> sheetProblems, boolean folded, int workingNow) {
         problems.getChildren().setAll(sheetProblems.stream().map(p -> (Node) OutputColumn.line(p.text(), "problem")).toList());
         problems.setManaged(!sheetProblems.isEmpty());
-        Map<String, Output.Result> results = results(steps);
+        Map<String, Value> quotable = quotable(steps);
         List<Node> now = new ArrayList<>();
         Set<Long> kept = new HashSet<>();
         for (Step step : steps) {
             StepView view = views.computeIfAbsent(step.id(), id -> new StepView(id, zoom, actions));
-            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? step.filled(name -> figures(results.get(name))) : "", folded, step.number() == workingNow);
+            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? step.filled(name -> figures(quotable.get(name))) : "", folded, step.number() == workingNow);
             view.setAtHand(step.id() == atHand);
             now.add(view);
             kept.add(step.id());
@@ -111,14 +112,18 @@ final class PageView extends VBox {
 
     // --- notes ---
 
-    private static Map<String, Output.Result> results(List<Step> steps) {
-        Map<String, Output.Result> results = new HashMap<>();
-        steps.forEach(step -> step.all(Output.Result.class).forEach(r -> results.put(r.name(), r)));
-        return results;
+    /** What notes can quote: inputs and results by name. */
+    private static Map<String, Value> quotable(List<Step> steps) {
+        Map<String, Value> values = new HashMap<>();
+        for (Step step : steps) {
+            step.all(Output.Given.class).stream().filter(g -> g.value() != null).forEach(g -> values.put(g.name(), g.value()));
+            step.all(Output.Result.class).forEach(r -> values.put(r.name(), r.value()));
+        }
+        return values;
     }
 
-    private static String figures(Output.Result result) {
-        return result == null ? null : String.join("; ", Reading.of(result.value()).stream()
+    private static String figures(Value value) {
+        return value == null ? null : String.join("; ", Reading.of(value).stream()
                 .map(r -> (r.part().isEmpty() ? "" : r.part() + " ") + r.figure()).toList());
     }
 }

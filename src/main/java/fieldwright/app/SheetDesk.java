@@ -237,9 +237,13 @@ final class SheetDesk {
         worked.computeIfPresent(id, (i, w) -> new Worked(w.cell, w.outcome, true));
     }
 
-    /** Takes what one step of an order gave, as soon as it is known. */
-    void take(Order order, CellOutcome outcome) {
-        if (store(order, outcome)) {
+    /** Takes what steps of an order gave, as soon as it is known. */
+    void take(Order order, List<CellOutcome> outcomes) {
+        boolean changed = false;
+        for (CellOutcome outcome : outcomes) {
+            changed |= store(order, outcome);
+        }
+        if (changed) {
             refresh();
         }
     }

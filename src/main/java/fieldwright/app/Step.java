@@ -1,5 +1,6 @@
 package fieldwright.app;
 
+import fieldwright.formula.Names;
 import fieldwright.output.CellOutcome;
 import fieldwright.output.Output;
 import fieldwright.sheet.Cell;
@@ -45,14 +46,13 @@ record Step(long id, int number, Cell cell, Cell worked, CellOutcome outcome, bo
         return worked == null || !worked.source().equals(cell.source()) || worked.kind() != cell.kind();
     }
 
-    /** Names of the sheet that it declares, by its text and by its last run. */
+    /** Names of the sheet that it declares, by its text and by its last run; folded as formulas fold them. */
     Set<String> names() {
         Set<String> names = new HashSet<>();
         if (cell.kind() == Cell.Kind.INPUT) {
-            cell.inputs().stream().filter(InputEntry.class::isInstance).forEach(e -> names.add(((InputEntry) e).name()));
+            cell.inputs().stream().filter(InputEntry.class::isInstance).forEach(e -> names.add(Names.fold(((InputEntry) e).name())));
         } else if (cell.kind() == Cell.Kind.DERIVE) {
-            cell.derives().stream().filter(DeriveEntry.class::isInstance)
-                    .forEach(e -> names.add(((DeriveEntry) e).name()));
+            cell.derives().stream().filter(DeriveEntry.class::isInstance).forEach(e -> names.add(Names.fold(((DeriveEntry) e).name())));
         }
         all(Output.Result.class).forEach(r -> names.add(r.name()));
         all(Output.Given.class).forEach(g -> names.add(g.name()));
@@ -61,21 +61,22 @@ record Step(long id, int number, Cell cell, Cell worked, CellOutcome outcome, bo
         return names;
     }
 
-    private static final Pattern QUOTED = Pattern.compile("\\{([\\p{L}_][\\p{L}\\p{N}_]*)\\}");
+    /** A quoted name in a note; with a backslash before it the brace stands for itself. */
+    private static final Pattern QUOTED = Pattern.compile("(?<!\\\\)\\{([\\p{L}_][\\p{L}\\p{N}_]*)\\}");
 
-    /** Names of results that a note quotes as {@code {E_roof}}; empty for other steps. */
+    /** Names that a note quotes as {@code {E_roof}}; empty for other steps. */
     Set<String> quotes() {
         Set<String> names = new HashSet<>();
         if (cell.kind() == Cell.Kind.NOTE) {
-            QUOTED.matcher(cell.source()).results().forEach(m -> names.add(m.group(1)));
+            QUOTED.matcher(cell.source()).results().forEach(m -> names.add(Names.fold(m.group(1))));
         }
         return names;
     }
 
-    /** A note's CommonMark with the figures of the results it quotes; a name without figures stays as it is written. */
+    /** A note's CommonMark with the figures of what it quotes; a name without figures stays as it is written. */
     String filled(UnaryOperator<String> figures) {
         return QUOTED.matcher(cell.source()).replaceAll(m -> {
-            String known = figures.apply(m.group(1));
+            String known = figures.apply(Names.fold(m.group(1)));
             return Matcher.quoteReplacement(known == null ? m.group() : "**" + known + "**");
         });
     }

@@ -124,7 +124,7 @@ final class StepView extends ThreeColumns {
     private void fillCalculation() {
         List<Node> nodes = new ArrayList<>();
         if (editor == null) {
-            nodes.addAll(calculationColumn.text(step.cell(), note, folded, caret -> actions.edit(id, caret)));
+            nodes.addAll(calculationColumn.text(step.cell(), note, step.all(Output.Typeset.class), folded, caret -> actions.edit(id, caret)));
         } else {
             nodes.add(editor);
             nodes.addAll(preview(editor.text()));
@@ -136,7 +136,7 @@ final class StepView extends ThreeColumns {
     /** While a derive or input step is edited its text stands typeset below. */
     private List<Node> preview(String text) {
         return step.cell().kind() == Cell.Kind.DERIVE || step.cell().kind() == Cell.Kind.INPUT
-                ? calculationColumn.text(Cell.of(step.cell().kind(), "", text), "", false, caret -> { })
+                ? calculationColumn.text(Cell.of(step.cell().kind(), "", text), "", List.of(), false, caret -> { })
                 : List.of();
     }
 

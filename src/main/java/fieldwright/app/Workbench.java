@@ -3,10 +3,14 @@ package fieldwright.app;
 import fieldwright.output.CellOutcome;
 import fieldwright.output.Output;
 import fieldwright.output.RunOutcome;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Queue;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.CompletionException;
+import java.util.concurrent.ConcurrentLinkedQueue;
 import java.util.concurrent.Executor;
+import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.function.Supplier;
 
 /**
@@ -107,23 +111,42 @@ final class Workbench implements AutoCloseable {
 
     private Calculator.Listener listener(SheetDesk.Order order) {
         return new Calculator.Listener() {
+            private final Queue<CellOutcome> arrived = new ConcurrentLinkedQueue<>();
+            private final AtomicBoolean told = new AtomicBoolean();
+            private volatile int at;
+
             @Override
             public void reached(int step) {
-                home.execute(() -> {
-                    if (busy && !closed) {
-                        reached = step;
-                        changed.run();
-                    }
-                });
+                at = step;
+                tell();
             }
 
             @Override
             public void gave(CellOutcome outcome) {
-                home.execute(() -> {
-                    if (busy && !closed) {
-                        desk.take(order, outcome);
-                    }
-                });
+                arrived.add(outcome);
+                tell();
+            }
+
+            /** News that come faster than the window can show them are taken together. */
+            private void tell() {
+                if (told.compareAndSet(false, true)) {
+                    home.execute(() -> {
+                        told.set(false);
+                        hear();
+                    });
+                }
+            }
+
+            private void hear() {
+                List<CellOutcome> now = new ArrayList<>();
+                for (CellOutcome outcome = arrived.poll(); outcome != null; outcome = arrived.poll()) {
+                    now.add(outcome);
+                }
+                if (busy && !closed && order.text().equals(underWay)) {
+                    reached = at;
+                    desk.take(order, now);
+                    changed.run();
+                }
             }
         };
     }
@@ -138,7 +161,7 @@ final class Workbench implements AutoCloseable {
             // Superseded: what its steps gave still counts, its complaints about being stopped do not.
             again = false;
             if (run != null) {
-                run.cells().forEach(cell -> desk.take(order, cell));
+                desk.take(order, run.cells());
             }
             order();
             return;

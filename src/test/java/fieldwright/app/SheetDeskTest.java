@@ -108,7 +108,7 @@ class SheetDeskTest {
         SheetDesk desk = worked();
         desk.editStep(id(desk, 2), desk.sheet().cells().get(1).source().replace("4.00 m", "5.00 m"));
         SheetDesk.Order order = desk.order();
-        desk.take(order, Samples.outcome(order.text()).cells().get(1));
+        desk.take(order, List.of(Samples.outcome(order.text()).cells().get(1)));
         assertEquals("1 3 4 5", stale(desk));
     }
 
