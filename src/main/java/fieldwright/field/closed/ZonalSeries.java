@@ -28,7 +28,7 @@ final class ZonalSeries {
             eR += (l + 1) * moments[n] * power / r * p0;
             eTheta += s * moments[n] * power / r * d0;
             power *= t;
-            for (int k = l; k < l + 2; k++) { // P_(k+2), P'_(k+2): DLMF 18.9.1, 18.9.19 style recurrences
+            for (int k = l; k < l + 2; k++) { // Bonnet's recurrence; P'(k+2) = P'(k) + (2k+3) P(k+1)
                 double p2 = ((2 * k + 3) * c * p1 - (k + 1) * p0) / (k + 2);
                 double d2 = d0 + (2 * k + 3) * p1;
                 p0 = p1;

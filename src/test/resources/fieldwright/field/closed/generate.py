@@ -8,7 +8,7 @@ import math
 import os
 import random
 import sys
-from mpmath import mp, mpf, sqrt, asinh, atan, atan2, log, pi, quad, cos, sin, ellipk, ellipe, matrix, linspace
+from mpmath import mp, mpf, sqrt, asinh, atan, atan2, log, pi, quad, cos, sin, ellipk, ellipe, linspace
 
 mp.dps = 100
 HERE = os.path.dirname(os.path.abspath(__file__))
@@ -103,7 +103,6 @@ def box_uniform(p, r):
     x, y, z = F(r)
     out = [mpf(0)] * 4
     at = lambda u, w: atan(u / w) if w != 0 else mpf(0)
-    ln = lambda u, big: mpf(0) if big == 0 else log(u)
     for i, X in enumerate((x1 - x, x2 - x)):
         for j, Y in enumerate((y1 - y, y2 - y)):
             for k, Z in enumerate((z1 - z, z2 - z)):
@@ -544,8 +543,7 @@ def self_check():
         close(box(p, rb), sums, 'box')
     a = mpf(1.25)
     close(ring([1.25, 0.8], r), [quad(lambda f: kernel(r, (a * cos(f), a * sin(f), mpf(0)), mpf(0.8) * a)[c], linspace(0, 2 * pi, 9)) for c in range(4)], 'ring')
-    close(disc([1.25, 0.8], r), [quad(lambda s: ring([float(s), 0.8], r)[c], [0, 1.25]) if False else
-                                 sum(w * a / 2 * ring_mp(a * (1 + n) / 2, mpf(0.8), r)[c] for n, w in zip(*gauss(40))) for c in range(4)], 'disc')
+    close(disc([1.25, 0.8], r), [sum(w * a / 2 * ring_mp(a * (1 + n) / 2, mpf(0.8), r)[c] for n, w in zip(*gauss(40))) for c in range(4)], 'disc')
     p = [-1.0, 0.5, 0.8, 1.3]
     r = (1.7, -0.5, 0.9)
     b = mpf(0.8)
@@ -583,7 +581,6 @@ def ring_mp(a, q, r):
 
 
 def gauss(n):
-    from mpmath import legendre, polyroots, diff
     xs, ws = [], []
     for i in range(n):
         t = cos(pi * (i + mpf(3) / 4) / (n + mpf(1) / 2))
@@ -601,8 +598,6 @@ def gauss(n):
 def main(only):
     self_check()
     build()
-    if __name__ != '__main__':
-        return
     by = {}
     for name, formula, params, places, gap in CASES:
         if only and name not in only:
@@ -615,7 +610,7 @@ def main(only):
                                  + [mp.nstr(c, 22) for c in value]))
     for name, rows in by.items():
         with open(os.path.join(HERE, name + '.csv'), 'w') as f:
-            f.write('# generate.py with mpmath; formulas worked at 100 digits (disc, sloping box: quadrature at 34 to 40), 22 printed\n')
+            f.write('# generate.py with mpmath; formulas worked at 100 digits (disc, cylinder, sloping box, tube: quadrature at 26 to 40), 22 printed\n')
             f.write('# bare kernel, no 1/(4 pi eps0); gap: distance to the nearest edge, rim or line (1 where there is none)\n')
             f.write('parameters,x,y,z,gap,ex,ey,ez,v\n')
             f.write('\n'.join(rows) + '\n')
