@@ -1048,7 +1048,7 @@ final class Paver {
                 for (int k = 0; k < 3; k++) {
                     low[k] = from[k] - at[k];
                     high[k] = to[k] - at[k];
-                    scale[k] = speed[k] > 0 ? Math.hypot(length, height) / speed[k] : to[k] - from[k];
+                    scale[k] = speed[k] > 0 ? Math.hypot(length, height) / speed[k] : Double.POSITIVE_INFINITY;
                 }
                 Pieces.Pyramid pyramid = new Pieces.Pyramid(s, at, depth, reach, low, high, scale, length, height);
                 double span = height > 0 ? pyramid.span() : 1;

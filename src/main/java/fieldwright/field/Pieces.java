@@ -349,7 +349,11 @@ final class Pieces {
         private final double length;
         private final Radius radius;
 
-        /** {@code low}, {@code high}: the face's box minus the apex; {@code length}: of the apex' distance to the face, m. */
+        /**
+         * {@code low}, {@code high}: the face's box minus the apex; {@code length}: of the apex' distance to the face, m.
+         * A coordinate that does not move the place at the apex (phi on the axis) has scale +infinity: it runs through its whole
+         * range at every distance, so that the pyramids over the other faces fill the box.
+         */
         Pyramid(Sampler sampler, double[] at, int depth, double reach, double[] low, double[] high, double[] scale, double length,
             double height) {
             super(sampler, at);
@@ -373,15 +377,20 @@ final class Pieces {
             for (int i = 0; i < n; i++) {
                 double w = span * u[0][i];
                 double lambda = radius.at(w, length) / length;
-                double volume = lambda * lambda * Math.abs(reach) * (radius.slope(w, length) / length) * span;
+                double volume = Math.abs(reach) * (radius.slope(w, length) / length) * span;
                 du[depth][i] = lambda * reach;
                 for (int k = 1; k < 3; k++) {
                     int j = (depth + k) % 3;
+                    if (scale[j] == Double.POSITIVE_INFINITY) {
+                        du[j][i] = low[j] + (high[j] - low[j]) * u[k][i];
+                        volume *= high[j] - low[j];
+                        continue;
+                    }
                     double vA = asinh(low[j] / scale[j]);
                     double vB = asinh(high[j] / scale[j]);
                     double v = vA + (vB - vA) * u[k][i];
                     du[j][i] = lambda * scale[j] * Math.sinh(v);
-                    volume *= scale[j] * Math.cosh(v) * (vB - vA);
+                    volume *= lambda * scale[j] * Math.cosh(v) * (vB - vA);
                 }
                 jacobian[i] = volume;
             }
