@@ -10,6 +10,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Stream;
 
 /** One line of a profile: what to ask of which charge, or a formula of the coordinates. Immutable. */
 public final class Curve {
@@ -78,7 +79,10 @@ public final class Curve {
         return amounts.stream().map(List::of).toList();
     }
 
-    /** On a charged surface the side the path comes from and the side it goes to; at an end, the one side there is. */
+    /**
+     * On a charged surface the side the path comes from and the side it goes to; at an end, the one side there is. Along a
+     * conductor the side that has a field.
+     */
     private static List<Amount> sides(Vector field, List<Path.Stop> stops, int i, String component) {
         if (!field.isSided()) {
             return List.of(part(field, component));
@@ -88,10 +92,30 @@ public final class Curve {
             if (neighbour >= 0 && neighbour < stops.size()) {
                 Place here = field.place();
                 Place there = stops.get(neighbour).place();
-                values.add(part(field.onSide(there.x() - here.x(), there.y() - here.y(), there.z() - here.z()), component));
+                double[] way = {there.x() - here.x(), there.y() - here.y(), there.z() - here.z()};
+                if (!runsAlong(field.normal(), way)) {
+                    values.add(part(field.onSide(way[0], way[1], way[2]), component));
+                }
             }
         }
-        return values;
+        return values.isEmpty() ? List.of(part(outsideConductor(field), component)) : values;
+    }
+
+    private static boolean runsAlong(double[] normal, double[] way) {
+        double across = normal[0] * way[0] + normal[1] * way[1] + normal[2] * way[2];
+        return Math.abs(across) < 1e-6 * Math.hypot(Math.hypot(way[0], way[1]), way[2]);
+    }
+
+    private static Vector outsideConductor(Vector field) {
+        if (isNothing(field.plusSide()) || isNothing(field.minusSide())) {
+            return isNothing(field.plusSide()) ? field.minusSide() : field.plusSide();
+        }
+        throw new AuthorException("a path runs along a charged surface, where the field has two values. Move it a little to one side.");
+    }
+
+    /** Inside a conductor the field is exactly zero. */
+    private static boolean isNothing(Vector field) {
+        return Stream.of(field.x(), field.y(), field.z()).allMatch(c -> c.si() == 0 && c.error() == 0);
     }
 
     private static Amount part(Vector v, String component) {

@@ -8,14 +8,19 @@ import fieldwright.quantity.Amount;
 import fieldwright.quantity.AuthorException;
 import fieldwright.quantity.Units;
 import fieldwright.quantity.Vector;
+import java.math.BigDecimal;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.Map;
 import java.util.Set;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import javax.measure.Dimension;
 
 /** What an author gives as an argument: a formula text, a {@link Formula}, an {@link Amount} or a number. */
 final class Given {
+    private static final Pattern QUANTITY = Pattern.compile("\\s*([0-9]+(?:\\.[0-9]*)?(?:[eE][+-]?[0-9]+)?)\\s+([^0-9\\s(][^\\s(]*[/*\u00b7][^\\s(]*)\\s*");
+
     private Given() { }
 
     /** Names bound by the desk; coordinates stay free. */
@@ -29,7 +34,8 @@ final class Given {
             if (text.isBlank()) {
                 throw new AuthorException(what + " is empty. Write a formula, for example \"2*pi\" or \"0.3 m\".");
             }
-            return Formula.parseValue(text).bind(Desk.current().scope(), free);
+            Amount quantity = quantity(text);
+            return quantity != null ? Formula.constant(quantity) : Formula.parseValue(text).bind(Desk.current().scope(), free);
         }
         if (given instanceof Formula formula) {
             return formula.bind(Desk.current().scope(), free);
@@ -42,6 +48,22 @@ final class Given {
         }
         throw new AuthorException(what + " is " + (given == null ? "null" : "a " + given.getClass().getSimpleName())
                 + ". Give a formula in quotes, a Formula, an Amount or a number.");
+    }
+
+    /**
+     * A text that is nothing but a number and a compound unit, {@code 5 kV/m}, as on an input line; null for any other, and
+     * where a name of the sheet could be meant.
+     */
+    private static Amount quantity(String text) {
+        Matcher m = QUANTITY.matcher(text);
+        if (!m.matches() || Desk.current().scope().names().stream().anyMatch(name -> m.group(2).matches(".*\\b" + name + "\\b.*"))) {
+            return null;
+        }
+        try {
+            return Amount.of(new BigDecimal(m.group(1)), m.group(2));
+        } catch (AuthorException noUnit) {
+            return null;    // the formula parser says what is wrong with it
+        }
     }
 
     /** A number with unit; a formula may not mention coordinates. */

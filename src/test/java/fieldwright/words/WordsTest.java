@@ -103,6 +103,15 @@ class WordsTest {
         return Given.amount("test", f, Given.locals("test", name, value));
     }
 
+    @Test
+    void aQuantityMayBeWrittenAsOnAnInputLine() {
+        near(5000, desk.work(() -> calc("5 kV/m")));
+        near(2e-6, desk.work(() -> calc("2 uC/m^2")));
+        desk.value("m", 2, "");
+        assertTrue(complaint(() -> calc("5 kV/m")).contains("round brackets"));
+        assertTrue(complaint(() -> calc("5 kV/mx")).contains("mx"));
+    }
+
     // Regions and charge
 
     @Test
@@ -391,6 +400,16 @@ class WordsTest {
         Output.Plot plot = desk.shown(Output.Plot.class).get(0);
         assertTrue(Double.isNaN(plot.series().get(0).y()[60]));
         assertTrue(plot.remarks().get(0).startsWith("charge: 1 point is left out"), plot.remarks().toString());
+        desk.work(() -> {
+            profile("Along the plane", "V/m", along("x", "-1 m", "1 m"),
+                    curve("field", pointCharge(at(0, 0, "1 m"), "2 nC").above(groundPlane("z", 0)), "E_z"));
+            return null;
+        });
+        assertEquals(-2e-9 / (2 * Math.PI * EPS0), desk.shown(Output.Plot.class).get(1).series().get(0).y()[60], 1e-9);
+        assertTrue(complaint(() -> {
+            profile("In the film", "V/m", along("x", "-1 m", "1 m"), curve("field", endlessPlane("sigma_0").inFreeSpace(), "E_z"));
+            return null;
+        }).contains("to one side"));
         assertTrue(complaint(() -> curve("c", pointCharge(at(0, 0, 0), "2 nC").inFreeSpace(), "E_q")).contains("E_z"));
         assertTrue(complaint(() -> along("phi", "0", "1")).contains("through which place"));
         assertTrue(complaint(() -> along("x", "1 m", "0")).contains("start must lie below"));
