@@ -99,11 +99,8 @@ final class Images {
             return Question.of(List.of(), 1);
         }
         Probe direct = Probe.direct(place.x(), place.y(), place.z());
-        if (r < 1e-5 * a) {
-            double h = 1e-5 * a;
-            Probe one = inverted(g, new double[] {p[0] + h, p[1], p[2]}, 0.5, false);
-            Probe two = inverted(g, new double[] {p[0] - h, p[1], p[2]}, 0.5, false);
-            return Question.of(List.of(direct, one, two), 1);
+        if (r < 3e-4 * a) {
+            return Question.of(aroundCentre(g, p, direct), 1);
         }
         List<Probe> probes = List.of(direct, inverted(g, p, 1, on));
         if (!on) {
@@ -111,6 +108,21 @@ final class Images {
         }
         double sign = g.outside() ? 1 : -1;
         return new Question(probes, 1, new double[] {sign * p[0] / r, sign * p[1] / r, sign * p[2] / r}, null, 1);
+    }
+
+    /**
+     * Near the centre the inverted place runs off to infinity: the induced field is harmonic, so its value is the mean over six places
+     * round about (exact but for fourth order in their distance, 6e-4 radii).
+     */
+    private static List<Probe> aroundCentre(Surroundings.GroundedSphere g, double[] p, Probe direct) {
+        double h = 6e-4 * g.radius();
+        java.util.ArrayList<Probe> probes = new java.util.ArrayList<>(List.of(direct));
+        for (int k = 0; k < 6; k++) {
+            double[] q = p.clone();
+            q[k / 2] += k % 2 == 0 ? h : -h;
+            probes.add(inverted(g, q, 1.0 / 6, false));
+        }
+        return probes;
     }
 
     private static Probe inverted(Surroundings.GroundedSphere g, double[] p, double factor, boolean on) {

@@ -199,7 +199,7 @@ final class Paver {
 
     /** A distance below this cannot be told from zero. */
     private static double touching(Sampler s, Chart.Anchor anchor) {
-        return 4 * Sampler.EPS * (norm(s.seen) + norm(anchor.position()));
+        return 4 * Sampler.EPS * (norm(s.seen) + norm(anchor.position()) + s.reach());
     }
 
     /** For half-endless kernels: how far the place is beyond the end, which keeps it away from all sources. */

@@ -103,6 +103,24 @@ abstract class Sampler {
      */
     abstract void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise);
 
+    private double reach = -1;
+
+    /** Distance from the frame's origin to the furthest corner: the size its coordinates are rounded at. */
+    double reach() {
+        if (reach < 0) {
+            int n = axes.length;
+            for (int i = 0; i < 1 << n; i++) {
+                double[] v = new double[n];
+                for (int k = 0; k < n; k++) {
+                    v[k] = chart.isEndless(axes[k]) ? 0.5 : i >> k & 1;
+                }
+                double[] p = anchor(v).position();
+                reach = Math.max(reach, Math.sqrt(p[0] * p[0] + p[1] * p[1] + p[2] * p[2]));
+            }
+        }
+        return reach;
+    }
+
     /** Density at an anchor. */
     double densityAt(Chart.Anchor anchor) {
         for (int k = 0; k < 3; k++) {
