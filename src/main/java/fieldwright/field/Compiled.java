@@ -21,6 +21,7 @@ import fieldwright.geometry.CoordinateSystem;
 import fieldwright.geometry.Extent;
 import fieldwright.geometry.Frame;
 import fieldwright.geometry.NodeFunction;
+import fieldwright.geometry.Nodes;
 import fieldwright.geometry.PlacedRegion;
 import fieldwright.geometry.Region;
 import fieldwright.geometry.RegionParts;
@@ -30,6 +31,8 @@ import fieldwright.quantity.Units;
 
 /** A source with its formulas compiled: patches and point charges. */
 final class Compiled {
+    private static final int GRID = 16;
+
     final List<Patch> patches = new ArrayList<>();
     final List<PointCharge> points = new ArrayList<>();
     final List<Charge> charges = new ArrayList<>();
@@ -71,12 +74,49 @@ final class Compiled {
         }
     }
 
-    private static Patch patch(Chart chart, Frame frame, Formula density, int dimension, Kernel kernel) {
-        checkUnit(chart, density, dimension);
+    private static Patch patch(Chart chart, Frame frame, Formula stated, int dimension, Kernel kernel) {
+        checkUnit(chart, stated, dimension);
+        Formula density = stated.isGuarded() ? holdingEverywhere(stated, chart) : stated;
         NodeFunction weight = NodeFunction.of(density, chart);
         SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
         double[][] breaks = RegionIntegral.breaks(chart, density);
         return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks);
+    }
+
+    /**
+     * The density without the conditions of the sheet's formulas in it, once they were seen to hold over the region: on a grid
+     * that reaches to its ends. It is then smooth, and may be read beyond the region where a rule needs that.
+     * Errors: AuthorException naming the condition that does not hold.
+     */
+    private static Formula holdingEverywhere(Formula density, Chart chart) {
+        int d = chart.dimension();
+        int side = d == 1 ? 4 * GRID : GRID;
+        int total = (int) Math.round(Math.pow(side, d));
+        NodeFunction guarded = NodeFunction.of(density, chart);
+        double[] middle = new double[d];
+        java.util.Arrays.fill(middle, 0.5);
+        Chart.Anchor anchor = chart.anchor(middle);
+        Nodes nodes = new Nodes();
+        double[][] du = new double[d][Nodes.BLOCK];
+        double[] out = new double[Nodes.BLOCK];
+        for (int first = 0; first < total; first += Nodes.BLOCK) {
+            int n = Math.min(Nodes.BLOCK, total - first);
+            for (int i = 0; i < n; i++) {
+                int rest = first + i;
+                for (int k = 0; k < d; k++) {
+                    du[k][i] = gridPoint(rest % side, side, chart.isEndless(k) ? 1e-3 : 1e-7) - 0.5;
+                    rest /= side;
+                }
+            }
+            chart.evaluate(anchor, du, n, nodes);
+            guarded.evaluate(nodes, anchor.position(), n, out);
+        }
+        return density.unguarded();
+    }
+
+    /** Evenly spread, the first and last close to the ends: on an end itself rounding could step over a condition. */
+    private static double gridPoint(int i, int side, double margin) {
+        return Math.min(1 - margin, Math.max(margin, i / (side - 1.0)));
     }
 
     private static void checkUnit(Chart chart, Formula density, int dimension) {

@@ -237,6 +237,16 @@ public final class Formula {
         return new Formula(whole, written, text, integrator);
     }
 
+    /** True when a formula of the sheet stands in this one with a condition for which it holds. */
+    public boolean isGuarded() {
+        return Trees.any(tree, n -> n instanceof Node.Inlined f && f.condition() != null);
+    }
+
+    /** This formula without those conditions: for a caller that has seen to it that they hold. */
+    public Formula unguarded() {
+        return new Formula(Trees.unguarded(tree), written, text, integrator);
+    }
+
     public Formula plus(Formula b) {
         return combined(Node.Operator.PLUS, b);
     }

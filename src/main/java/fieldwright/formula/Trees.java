@@ -111,6 +111,14 @@ final class Trees {
         n.children().forEach(c -> visit(c, visitor));
     }
 
+    /** The tree without the conditions of the sheet's formulas in it. */
+    static Node unguarded(Node n) {
+        if (n instanceof Node.Inlined f && f.condition() != null) {
+            return unguarded(new Node.Inlined(f.written(), f.holdsFor(), f.parameters(), f.arguments(), null, f.body(), f.at()));
+        }
+        return n.withChildren(n.children().stream().map(Trees::unguarded).toList());
+    }
+
     static boolean any(Node n, java.util.function.Predicate<Node> test) {
         return test.test(n) || n.children().stream().anyMatch(c -> any(c, test));
     }

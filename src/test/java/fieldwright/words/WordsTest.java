@@ -7,8 +7,10 @@ import static org.junit.jupiter.api.Assertions.assertNull;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import fieldwright.formula.Binding;
 import fieldwright.formula.Constants;
 import fieldwright.formula.Formula;
+import fieldwright.formula.Parameter;
 import fieldwright.judge.Threshold;
 import fieldwright.output.Output;
 import fieldwright.output.Series;
@@ -17,6 +19,7 @@ import fieldwright.output.Value;
 import fieldwright.quantity.Amount;
 import fieldwright.quantity.AuthorException;
 import fieldwright.quantity.Place;
+import fieldwright.quantity.Units;
 import fieldwright.quantity.UnknownNameException;
 import fieldwright.quantity.Vector;
 import java.util.List;
@@ -191,6 +194,20 @@ class WordsTest {
 
     private Amount measure(Callable<Shape> shape) {
         return desk.work(() -> integral("1").over(shape.call()));
+    }
+
+    @Test
+    void aDensityMayHaveAConditionThatHoldsOverItsRegion() {
+        desk.names.put("inner", new Binding.Definition(List.of(new Parameter("s", Units.LENGTH)),
+                Formula.parse("rho_0*(1 - k*(s/R_s)^2)").bind(desk, java.util.Set.of("s")),
+                Formula.parseCondition("s <= R_s").bind(desk, java.util.Set.of("s"))));
+        Amount free = desk.work(() -> volumeCharge(cylinder("R_s", "H"), "fall").inFreeSpace().electricField(at("0.2 m", 0, "3.5 m")).z());
+        Amount guarded = desk.work(() -> volumeCharge(cylinder("R_s", "H"), "inner(rho)").inFreeSpace().electricField(at("0.2 m", 0, "3.5 m")).z());
+        assertEquals(free.si(), guarded.si(), 0);
+        String text = complaint(() -> volumeCharge(cylinder("1.01*R_s", "H"), "inner(rho)").inFreeSpace().electricField(at(0, 0, "5 m")));
+        assertTrue(text.contains("s <= R_s"), text);
+        String charge = complaint(() -> volumeCharge(cylinder("1.01*R_s", "H"), "inner(rho)").inFreeSpace().totalCharge());
+        assertTrue(charge.contains("s <= R_s"), charge);
     }
 
     // Surroundings and questions
