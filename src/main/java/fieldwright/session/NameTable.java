@@ -22,6 +22,16 @@ final class NameTable {
         }
     }
 
+    /** Notes for objects that may change that a cell has had them in hand. */
+    void touch(CellRun run) {
+        for (String read : run.reads().found()) {
+            SheetName name = names.get(read);
+            if (name != null && !Constancy.isConstant(name.value())) {
+                names.put(read, name.touchedBy(run));
+            }
+        }
+    }
+
     Collection<SheetName> all() {
         return names.values();
     }

@@ -76,6 +76,7 @@ final class Pass {
             CellRun run = work(number, forced.contains(number), fresh);
             runs.add(run);
             listener.accept(number, run);
+            names.touch(run);
             for (SheetName name : run.writes().values()) {
                 put(name.inCell(number));
             }

@@ -2,7 +2,10 @@ package fieldwright.session;
 
 import fieldwright.formula.Binding;
 import fieldwright.session.snippet.Declaration;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Objects;
+import java.util.stream.IntStream;
 
 /**
  * A name as it stands below the cell that writes it.
@@ -12,8 +15,13 @@ import java.util.Objects;
  * @param binding  what formulas see; null when they do not see it at all
  * @param declares how Java code names it; null when it cannot
  * @param failure  why it has no value; null when it has one
+ * @param touched  for an object that may change: the workings of cells that have had it in hand since it was made
  */
-record SheetName(String name, int cell, Object value, Binding binding, Declaration declares, String failure) {
+record SheetName(String name, int cell, Object value, Binding binding, Declaration declares, String failure, List<CellRun> touched) {
+
+    SheetName(String name, int cell, Object value, Binding binding, Declaration declares, String failure) {
+        this(name, cell, value, binding, declares, failure, List.of());
+    }
 
     /** A name that its cell should have given a value and did not. */
     static SheetName failed(String name, int cell, String failure) {
@@ -21,11 +29,14 @@ record SheetName(String name, int cell, Object value, Binding binding, Declarati
     }
 
     SheetName inCell(int newCell) {
-        return new SheetName(name, newCell, value, binding, declares, failure);
+        return new SheetName(name, newCell, value, binding, declares, failure, touched);
     }
 
-    SheetName withValue(Object newValue, Binding newBinding) {
-        return new SheetName(name, cell, newValue, newBinding, declares, failure);
+    /** After a cell has had it in hand. */
+    SheetName touchedBy(CellRun run) {
+        List<CellRun> more = new ArrayList<>(touched);
+        more.add(run);
+        return new SheetName(name, cell, value, binding, declares, failure, more);
     }
 
     boolean isFailed() {
@@ -34,12 +45,16 @@ record SheetName(String name, int cell, Object value, Binding binding, Declarati
 
     /**
      * True when whoever reads the one would find the same in the other. Of objects that may change under way only the
-     * very same object is the same.
+     * very same object is the same, and only if the same has been done to it.
      */
     boolean meansSame(SheetName other) {
-        boolean sameValue = value == other.value
-                || Constancy.isConstant(value) && Constancy.isConstant(other.value) && Objects.equals(value, other.value);
+        boolean constant = Constancy.isConstant(value) && Constancy.isConstant(other.value);
+        boolean sameValue = constant ? Objects.equals(value, other.value) : value == other.value && isSame(touched, other.touched);
         return sameValue && Objects.equals(binding, other.binding) && Objects.equals(declares, other.declares)
                 && Objects.equals(failure, other.failure);
+    }
+
+    private static boolean isSame(List<CellRun> a, List<CellRun> b) {
+        return a.size() == b.size() && IntStream.range(0, a.size()).allMatch(i -> a.get(i) == b.get(i));
     }
 }
