@@ -1,6 +1,8 @@
 package fieldwright.cli;
 
 import fieldwright.output.RunOutcome;
+import fieldwright.session.Session;
+import fieldwright.session.WorkOptions;
 import fieldwright.sheet.Trust;
 import java.io.PrintWriter;
 import picocli.CommandLine;
@@ -17,7 +19,14 @@ public final class Main {
     static final class Root { }
 
     public static void main(String[] arguments) {
-        System.exit(run(Terminal.real(), Trust.ofUser(), null, arguments));
+        System.exit(run(Terminal.real(), Trust.ofUser(), Main::workInSession, arguments));
+    }
+
+    /** Works a sheet in a calculation process of its own, which ends with it. */
+    static RunOutcome workInSession(String text) throws Exception {
+        try (Session session = Session.start()) {
+            return session.work(text, WorkOptions.FULL, progress -> { }).get();
+        }
     }
 
     /** Runs one command and gives its exit code. */
