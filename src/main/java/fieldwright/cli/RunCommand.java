@@ -89,7 +89,7 @@ final class RunCommand implements Callable<Integer> {
         for (Cell cell : sheet.cells()) {
             for (RecordLine line : cell.records()) {
                 if (!line.isReadable()) {
-                    say("record not readable, kept as it is: '" + line.text() + "': " + line.trouble());
+                    terminal.say("record not readable, kept as it is: '" + line.text() + "': " + line.trouble());
                 }
             }
         }
@@ -118,7 +118,7 @@ final class RunCommand implements Callable<Integer> {
             throw new WrongUse(file + ": not made here, and nobody at a terminal to ask; nothing was run. A sheet is a program: "
                     + "read it, then run it with --trust.");
         }
-        String answer = terminal.ask().apply(shown(file + " was not made here. A sheet is a program and can do to your files what you can. "
+        String answer = terminal.ask().apply(terminal.shown(file + " was not made here. A sheet is a program and can do to your files what you can. "
                 + "Run it? [y/N] "));
         if (answer == null || !answer.strip().toLowerCase(java.util.Locale.ROOT).matches("y|yes")) {
             throw new WrongUse(file + ": not trusted; nothing was run.");
@@ -144,13 +144,13 @@ final class RunCommand implements Callable<Integer> {
         if (json) {
             terminal.json().println(JsonReport.of(run));
         } else {
-            terminal.out().print(shown(TextReport.of(sheet, run)));
+            terminal.out().print(terminal.shown(TextReport.of(sheet, run)));
         }
     }
 
     private void record(String text, Sheet sheet, RunOutcome run, boolean known) throws IOException, SheetException, WrongUse {
         if (run.hasError()) {
-            say("nothing recorded: the sheet has an error.");
+            terminal.say("nothing recorded: the sheet has an error.");
             return;
         }
         Sheet recorded = sheet;
@@ -176,21 +176,13 @@ final class RunCommand implements Callable<Integer> {
         if (json) {
             terminal.json().println(JsonReport.of(refused));
         } else {
-            say(file + ", " + refused.problems().get(0).text());
+            terminal.say(file + ", " + refused.problems().get(0).text());
         }
         return refused.exitCode();
     }
 
     private int wrongUse(String message) {
-        say(message);
+        terminal.say(message);
         return RunOutcome.WRONG_USE;
-    }
-
-    private void say(String message) {
-        terminal.err().println(shown("fieldwright: " + message));
-    }
-
-    private String shown(String text) {
-        return terminal.unicode() ? text : Ascii.of(text);
     }
 }

@@ -1,10 +1,9 @@
 package fieldwright.cli;
 
+import java.io.Console;
 import java.io.FileDescriptor;
 import java.io.FileOutputStream;
-import java.io.OutputStream;
 import java.io.PrintStream;
-import java.io.Console;
 import java.nio.charset.Charset;
 import java.nio.charset.StandardCharsets;
 import java.util.function.UnaryOperator;
@@ -25,8 +24,18 @@ record Terminal(PrintStream out, PrintStream err, PrintStream json, boolean unic
                 stream(FileDescriptor.out, StandardCharsets.UTF_8), charset.equals(StandardCharsets.UTF_8), asker());
     }
 
+    /** A text as this terminal can show it. */
+    String shown(String text) {
+        return unicode ? text : Ascii.of(text);
+    }
+
+    /** A message beside the results. */
+    void say(String message) {
+        err.println(shown("fieldwright: " + message));
+    }
+
     private static PrintStream stream(FileDescriptor descriptor, Charset charset) {
-        return new PrintStream((OutputStream) new FileOutputStream(descriptor), true, charset);
+        return new PrintStream(new FileOutputStream(descriptor), true, charset);
     }
 
     private static Charset charset() {

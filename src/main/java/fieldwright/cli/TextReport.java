@@ -57,8 +57,8 @@ final class TextReport {
     private void cell(Cell cell, CellOutcome outcome) {
         lines.add("");
         lines.add(outcome.cell() + " " + cell.kind().word() + (cell.label().isEmpty() ? "" : ": " + cell.label()));
-        int width = outcome.all(Output.Given.class).stream().mapToInt(given -> given.name().length()).max().orElse(0);
-        outcome.outputs().forEach(output -> show(output, width));
+        Inputs inputs = Inputs.of(outcome.all(Output.Given.class));
+        outcome.outputs().forEach(output -> show(output, inputs));
         switch (outcome.state()) {
             case STOPPED -> lines.add(INDENT + "✕ stopped");
             case NOT_REACHED -> lines.add(INDENT + "not reached");
@@ -66,12 +66,34 @@ final class TextReport {
         }
     }
 
-    private void show(Output output, int nameWidth) {
+    /** Widths of the columns of an input cell. */
+    private record Inputs(int name, int written, int description) {
+
+        static Inputs of(List<Output.Given> inputs) {
+            return new Inputs(widest(inputs.stream().map(Output.Given::name)), widest(inputs.stream().map(Output.Given::written)),
+                    widest(inputs.stream().map(Output.Given::description)));
+        }
+
+        String line(Output.Given given) {
+            return padded(given.name(), name) + " = " + padded(given.written(), written) + GAP
+                    + (description == 0 ? "" : padded(given.description(), description) + GAP)
+                    + (given.source().isEmpty() ? "no source" : given.source());
+        }
+    }
+
+    private static int widest(Stream<String> texts) {
+        return texts.mapToInt(String::length).max().orElse(0);
+    }
+
+    private static String padded(String text, int width) {
+        return text + " ".repeat(width - text.length());
+    }
+
+    private void show(Output output, Inputs inputs) {
         if (output instanceof Output.Result result) {
             result(result);
         } else if (output instanceof Output.Given given) {
-            add(given.name() + " ".repeat(nameWidth - given.name().length()) + " = " + given.written()
-                    + behind(given.description()) + GAP + (given.source().isEmpty() ? "no source" : given.source()));
+            add(inputs.line(given));
         } else if (output instanceof Output.Typeset typeset) {
             add(typeset.plainText());
         } else if (output instanceof Output.Check check) {
@@ -107,8 +129,8 @@ final class TextReport {
             return;
         }
         add(result.name() + place(result.value()) + remark);
-        int width = readings.stream().mapToInt(reading -> reading.part().length()).max().orElse(0);
-        readings.forEach(part -> add(INDENT + part.part() + " ".repeat(width - part.part().length()) + " = " + reading(part)));
+        int width = widest(readings.stream().map(Reading::part));
+        readings.forEach(part -> add(INDENT + plain(padded(part.part(), width)) + " = " + reading(part)));
     }
 
     private static String place(Value value) {
@@ -191,7 +213,8 @@ final class TextReport {
         for (List<String> row : rows) {
             StringBuilder line = new StringBuilder();
             for (int column = 0; column < widths.length; column++) {
-                line.append(column == 0 ? INDENT : GAP).append(" ".repeat(widths[column] - row.get(column).length())).append(row.get(column));
+                line.append(column == 0 ? INDENT : GAP).append(" ".repeat(widths[column] - row.get(column).length()))
+                        .append(row.get(column));
             }
             add(line.toString());
         }

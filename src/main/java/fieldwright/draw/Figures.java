@@ -24,10 +24,18 @@ public final class Figures {
         return withUnit(number(si, tolerance, numericalError, scale), scale.printed());
     }
 
-    /** The same with no more than so many decimals: the parts of one value stand beside each other. */
+    /**
+     * The same with no more than so many decimals: the parts of one value stand beside each other. A part that is more
+     * than its own doubt is never rounded to 0 for the sake of the others.
+     */
     static String value(double si, Double tolerance, Double numericalError, Scale scale, int mostDecimals) {
         if (!Double.isFinite(si) || decimals(si, tolerance, numericalError, scale) <= mostDecimals) {
             return value(si, tolerance, numericalError, scale);
+        }
+        double doubt = (tolerance == null ? 0 : tolerance) + (numericalError == null ? 0 : numericalError);
+        boolean vanishes = new BigDecimal(scale.shown(si)).setScale(mostDecimals, RoundingMode.HALF_EVEN).signum() == 0;
+        if (vanishes && Math.abs(si) > doubt) {
+            return withUnit(significant(scale.shown(si), 2), scale.printed());
         }
         return withUnit(fixed(scale.shown(si), mostDecimals), scale.printed());
     }

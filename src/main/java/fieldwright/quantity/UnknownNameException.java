@@ -52,6 +52,9 @@ public final class UnknownNameException extends AuthorException {
         double bestDistance = Math.max(1.0, name.length() / 3.0) + 0.25;
         for (String candidate : defined) {
             double distance = distance(name, candidate);
+            if (distance >= name.length()) {
+                continue;   // nothing in common
+            }
             if (distance < bestDistance || (distance == bestDistance && best != null && candidate.compareTo(best) < 0)) {
                 best = candidate;
                 bestDistance = distance;
@@ -60,22 +63,24 @@ public final class UnknownNameException extends AuthorException {
         return best;
     }
 
-    /** Levenshtein distance; a change of case only costs one half. */
+    /** Edit distance in which two neighbours changing places cost one, and a change of case only one half. */
     private static double distance(String a, String b) {
-        double[] row = new double[b.length() + 1];
-        for (int j = 0; j <= b.length(); j++) {
-            row[j] = j;
-        }
-        for (int i = 1; i <= a.length(); i++) {
-            double diagonal = row[0];
-            row[0] = i;
-            for (int j = 1; j <= b.length(); j++) {
-                double substituted = diagonal + cost(a.substring(i - 1, i), b.substring(j - 1, j));
-                diagonal = row[j];
-                row[j] = Math.min(substituted, Math.min(row[j], row[j - 1]) + 1);
+        double[][] d = new double[a.length() + 1][b.length() + 1];
+        for (int i = 0; i <= a.length(); i++) {
+            for (int j = 0; j <= b.length(); j++) {
+                if (i == 0 || j == 0) {
+                    d[i][j] = i + j;
+                    continue;
+                }
+                d[i][j] = Math.min(d[i - 1][j - 1] + cost(a.substring(i - 1, i), b.substring(j - 1, j)),
+                    Math.min(d[i - 1][j], d[i][j - 1]) + 1);
+                boolean swapped = i > 1 && j > 1 && a.charAt(i - 1) == b.charAt(j - 2) && a.charAt(i - 2) == b.charAt(j - 1);
+                if (swapped) {
+                    d[i][j] = Math.min(d[i][j], d[i - 2][j - 2] + 1);
+                }
             }
         }
-        return row[b.length()];
+        return d[a.length()][b.length()];
     }
 
     private static double cost(String a, String b) {

@@ -157,7 +157,7 @@ class RunCommandTest {
                   Q = 59.9 µC   ± 17 µC (k = 2)   num. 3e-20 C   all of it
                   E at (0, 0, 4) m
                     x = 0 kV/m   num. 2e-5 V/m
-                    y = -0.00150000 kV/m   num. 2e-5 V/m
+                    y = -0.0015 kV/m   num. 2e-5 V/m
                     z = 277 kV/m   ± 80 kV/m (k = 2)   num. 2e-5 V/m
                   V = 12.5 V   did not converge: 2000 evaluations   num. 0.3 V
                   E_w = unbounded: on the rim

@@ -14,6 +14,15 @@ class ReadingTest {
     }
 
     @Test
+    void aPartIsNotRoundedToNothingForTheSakeOfALargerOne() {
+        Value.Scalar large = new Value.Scalar(276969, 2e-5, 8e4, "V/m", null, Status.CONVERGED, "");
+        Value.Scalar small = new Value.Scalar(-1.5, 2e-5, 0.2, "V/m", null, Status.CONVERGED, "");
+        Value.Scalar noise = new Value.Scalar(1e-6, 2e-5, 0.2, "V/m", null, Status.CONVERGED, "");
+        List<Reading> parts = Reading.of(new Value.Triple(small, noise, large, null));
+        assertEquals(List.of("−0.0015\u00a0kV/m", "0\u00a0kV/m", "277\u00a0kV/m"), parts.stream().map(Reading::figure).toList());
+    }
+
+    @Test
     void theUnitChosenOnTheSheetStands() {
         Value.Scalar inVolts = Value.Scalar.of(276969, 1e-4, "V/m").withDisplay(new Display("V/mm", 1e3));
         assertEquals("276.969\u00a0V/mm", Reading.of(inVolts).figure());

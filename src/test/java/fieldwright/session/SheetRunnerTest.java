@@ -254,8 +254,8 @@ class SheetRunnerTest {
     void notesQuoteResults() {
         RunOutcome outcome = work("note\nIt is {U} at most, {n} times, \\{x}.", "input\nn = 3 (whole)", "derive\nU = 12345.678 V in kV");
         assertEquals("It is 12.35 kV at most, 3 times, {x}.", outcome.all(Output.Note.class).get(0).commonmark());
-        assertEquals(List.of("cell 1, line 5: the note quotes {W}, but there is no such result. Closest: 'U'. A brace that quotes nothing is written \\{."),
-                problems(work("note\nIt is\n{W}.", "derive\nU = 1 V")));
+        assertEquals(List.of("cell 1, line 5: the note quotes {U_q}, but there is no such result. Closest: 'U_p'. A brace that quotes nothing is written \\{."),
+                problems(work("note\nIt is\n{U_q}.", "derive\nU_p = 1 V")));
     }
 
     @Test
