@@ -60,7 +60,7 @@ final class Binder {
             }
             List<Node> arguments = new ArrayList<>();
             a.arguments().forEach(x -> arguments.add(bind(x, free)));
-            return inline(Printer.text(a), d, arguments, a.at());
+            return inline(a.name(), d, arguments, a.at());
         }
         if (b == null && !free.contains(a.name())) {
             Collection<String> known = new HashSet<>(scope.names());
@@ -71,7 +71,7 @@ final class Binder {
             + a.name() + "*(…).");
     }
 
-    private Node inline(String written, Binding.Definition d, List<Node> arguments, Node.At at) {
+    private Node inline(String name, Binding.Definition d, List<Node> arguments, Node.At at) {
         Set<String> parameters = new HashSet<>();
         Map<String, Node> values = new LinkedHashMap<>();
         for (int i = 0; i < arguments.size(); i++) {
@@ -80,7 +80,7 @@ final class Binder {
         }
         Node body = put(d.body(), parameters, values, at);
         Node condition = d.condition() == null ? null : put(d.condition(), parameters, values, at);
-        return new Node.Inlined(written, d.condition() == null ? null : d.condition().text(), d.parameters(), arguments, condition, body, at);
+        return new Node.Inlined(name, d.condition() == null ? null : d.condition().text(), d.parameters(), arguments, condition, body, at);
     }
 
     private Node put(Formula f, Set<String> parameters, Map<String, Node> values, Node.At at) {

@@ -63,7 +63,7 @@ final class Compiler {
             return when(w);
         } else if (n instanceof Node.Inlined f) {
             return f.condition() == null ? of(f.body())
-                : emit(List.of("inlined", f.written(), Printer.text(f.condition())), guard(f), condition(f.condition()), of(f.body()));
+                : emit(List.of("inlined", f.call(), f.condition()), guard(f), condition(f.condition()), of(f.body()));
         } else if (n instanceof Node.Integral i) {
             return integral(i);
         }
@@ -172,7 +172,7 @@ final class Compiler {
     }
 
     private Program.Kernel guard(Node.Inlined f) {
-        FormulaException violated = new FormulaException(text, f.at().offset(), f.written() + " holds only for " + f.holdsFor()
+        FormulaException violated = new FormulaException(text, f.at().offset(), f.call() + " holds only for " + f.holdsFor()
             + ", and it is asked for outside. Stay inside the condition or write a formula for this case.");
         return Kernels.notFolded((r, s, out, n) -> {
             for (int i = 0; i < n; i++) {

@@ -37,7 +37,7 @@ final class Derivative {
             return new Node.When(w.condition(), of(w.yes()), of(w.no()), w.at());
         } else if (n instanceof Node.Inlined f) {
             return f.condition() == null ? of(f.body())
-                : new Node.Inlined(f.written(), f.holdsFor(), f.parameters(), f.arguments(), f.condition(), of(f.body()), f.at());
+                : new Node.Inlined(null, f.holdsFor(), f.parameters(), f.arguments(), f.condition(), of(f.body()), f.at());
         } else if (n instanceof Node.Integral i) {
             return integral(i.body(), Nesting.order(i, text), i.at());
         }

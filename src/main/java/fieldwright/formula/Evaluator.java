@@ -78,7 +78,7 @@ final class Evaluator {
         }
         Truth truth = truth(f.condition());
         if (!truth.holds() && !truth.open()) {
-            throw new FormulaException(text, f.at().offset(), f.written() + " holds only for " + f.holdsFor()
+            throw new FormulaException(text, f.at().offset(), f.call() + " holds only for " + f.holdsFor()
                 + violation(f.condition()) + ". Stay inside the condition or write a formula for this case.");
         }
         return of(f.body());

@@ -24,7 +24,7 @@ public final class Latex {
     private static final Map<Function, String> ORDERED = Map.of(Function.BESSEL_J, "J", Function.BESSEL_Y, "Y", Function.BESSEL_I, "I",
         Function.BESSEL_K, "K", Function.LEGENDRE_P, "P");
     private static final int SUM = 4;
-    private static final int PRODUCT = 5;
+    private static final int PRODUCT = 6;
     private static final int POWER = 7;
     private static final int ATOM = 8;
 
@@ -135,7 +135,7 @@ public final class Latex {
         } else if (n instanceof Node.Apply a) {
             return name(a.name()) + list(a.arguments());
         } else if (n instanceof Node.Inlined f) {
-            return of(Formula.parse(f.written()).tree());
+            return f.name() == null ? of(f.body()) : name(f.name()) + (f.arguments().isEmpty() ? "" : list(f.arguments()));
         } else if (n instanceof Node.When w) {
             return when(w);
         } else if (n instanceof Node.Compare c) {
@@ -155,14 +155,13 @@ public final class Latex {
 
     private static String binary(Node.Binary b) {
         return switch (b.operator()) {
-            case PLUS, MINUS -> within(b.left(), SUM) + b.operator().sign + within(b.right(), startsWithMinus(b.right()) ? ATOM : PRODUCT);
+            case PLUS, MINUS -> within(b.left(), SUM) + b.operator().sign + within(b.right(), PRODUCT);
             case TIMES -> {
                 String right = within(b.right(), POWER);
                 boolean digit = Character.isDigit(right.charAt(0)) || right.startsWith("\\frac{") && Character.isDigit(right.charAt(6));
                 yield within(b.left(), PRODUCT) + (digit ? "\\cdot " : "\\,") + right;
             }
-            case OVER -> b.left() instanceof Node.Negate m
-                ? "-\\frac{" + of(m.of()) + "}{" + of(b.right()) + "}" : "\\frac{" + of(b.left()) + "}{" + of(b.right()) + "}";
+            case OVER -> "\\frac{" + of(b.left()) + "}{" + of(b.right()) + "}";
             case POWER -> power(b);
         };
     }
@@ -254,14 +253,12 @@ public final class Latex {
         return level(n) < least ? brackets(of(n)) : of(n);
     }
 
-    private static boolean startsWithMinus(Node n) {
-        return n instanceof Node.Negate || n instanceof Node.Binary b && b.operator() != Node.Operator.POWER && startsWithMinus(b.left())
-            && level(b) > SUM;
-    }
-
     private static int level(Node n) {
+        if (n instanceof Node.Inlined f && f.name() == null) {
+            return level(f.body());
+        }
         if (n instanceof Node.Binary b && b.operator() == Node.Operator.OVER) {
-            return b.left() instanceof Node.Negate ? Printer.level(b.left()) : POWER;   // a fraction needs no brackets as a factor
+            return POWER;   // a fraction needs no brackets as a factor
         }
         return n instanceof Node.When ? PRODUCT : Printer.level(n);   // an integral ends with its differential
     }

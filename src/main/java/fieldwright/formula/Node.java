@@ -134,17 +134,23 @@ public sealed interface Node {
     }
 
     /**
-     * A formula of the sheet put in place of its call; {@code written} is how it was called.
+     * A formula of the sheet put in place of its call.
      *
+     * @param name its name; null for what was made from one, such as a derivative
      * @param holdsFor the condition as its author wrote it, for messages; null when there is none
      * @param arguments as called; the body holds them already, they stay for the check of their units
      * @param condition where it holds, or null
      */
-    record Inlined(String written, String holdsFor, List<Parameter> parameters, List<Node> arguments, Node condition, Node body, At at)
+    record Inlined(String name, String holdsFor, List<Parameter> parameters, List<Node> arguments, Node condition, Node body, At at)
         implements Node {
         public Inlined {
             parameters = List.copyOf(parameters);
             arguments = List.copyOf(arguments);
+        }
+
+        /** As called, {@code E(z)}, for messages. */
+        String call() {
+            return name == null ? "a formula" : Printer.text(this);
         }
 
         /** The arguments, the condition if there is one, the body. */
@@ -161,7 +167,7 @@ public sealed interface Node {
         @Override
         public Node withChildren(List<Node> c) {
             int n = arguments.size();
-            return new Inlined(written, holdsFor, parameters, c.subList(0, n), condition == null ? null : c.get(n), c.get(c.size() - 1), at);
+            return new Inlined(name, holdsFor, parameters, c.subList(0, n), condition == null ? null : c.get(n), c.get(c.size() - 1), at);
         }
     }
 
@@ -314,7 +320,7 @@ public sealed interface Node {
         } else if (n instanceof Apply a) {
             return new Apply(a.name(), a.arguments(), at);
         } else if (n instanceof Inlined f) {
-            return new Inlined(f.written(), f.holdsFor(), f.parameters(), f.arguments(), f.condition(), f.body(), at);
+            return new Inlined(f.name(), f.holdsFor(), f.parameters(), f.arguments(), f.condition(), f.body(), at);
         } else if (n instanceof When w) {
             return new When(w.condition(), w.yes(), w.no(), at);
         } else if (n instanceof Compare c) {

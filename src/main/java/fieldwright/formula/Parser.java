@@ -14,12 +14,15 @@ import java.util.List;
 import java.util.Map;
 
 /**
- * Text to tree, by recursive descent. Binding, loosest first: or, and, not, comparison, + -, * /, sign, ^ (to the right).
+ * Text to tree, by recursive descent. Binding, loosest first: or, and, not, comparison, + - and a leading sign, * /, a sign
+ * further in, ^ (to the right).
  * Places in errors are offsets into the text as written.
  */
 final class Parser {
     private static final Map<String, Relation> RELATIONS = Map.of("<", Relation.LESS, "<=", Relation.LESS_OR_EQUAL, ">", Relation.GREATER,
         ">=", Relation.GREATER_OR_EQUAL, "<<", Relation.MUCH_LESS, ">>", Relation.MUCH_GREATER);
+
+    private static final int MOST_TOKENS = 4000;
 
     private final String text;
     private final List<Lexer.Token> tokens;
@@ -29,6 +32,10 @@ final class Parser {
     Parser(String text) {
         this.text = text;
         this.tokens = new Lexer(text).tokens();
+        if (tokens.size() > MOST_TOKENS) {
+            throw new FormulaException(text, tokens.get(MOST_TOKENS).from(), "a formula of " + tokens.size() + " signs and names. Name parts of it on lines "
+                + "of their own.");
+        }
     }
 
     Node formula() {
@@ -43,12 +50,16 @@ final class Parser {
     }
 
     private Node logic() {
-        if (++depth > 200) {
-            throw new FormulaException(text, peek().from(), "more than 200 brackets inside each other. Name parts of it on lines of their own.");
-        }
+        deeper();
         Node left = junction(Junction.OR, "or", () -> junction(Junction.AND, "and", this::not));
         depth--;
         return left;
+    }
+
+    private void deeper() {
+        if (++depth > 200) {
+            throw new FormulaException(text, peek().from(), "more than 200 brackets and signs inside each other. Name parts of it on lines of their own.");
+        }
     }
 
     private Node junction(Junction kind, String word, java.util.function.Supplier<Node> part) {
@@ -90,13 +101,23 @@ final class Parser {
     }
 
     private Node sum() {
-        Node left = product();
+        Node left = isSign("-") ? minusProduct() : product();
         while (isSign("+") || isSign("-")) {
             At at = here();
             Operator operator = take().text().equals("+") ? Operator.PLUS : Operator.MINUS;
             left = new Node.Binary(operator, value(left), value(product()), at);
         }
         return left;
+    }
+
+    /** -a*b is -(a*b). */
+    private Node minusProduct() {
+        At at = here();
+        take();
+        deeper();
+        Node of = value(isSign("-") ? minusProduct() : product());
+        depth--;
+        return new Node.Negate(of, at);
     }
 
     private Node product() {
@@ -111,9 +132,11 @@ final class Parser {
 
     private Node signed() {
         if (isSign("-") || isSign("+")) {
+            deeper();
             At at = here();
             boolean minus = take().text().equals("-");
             Node of = value(signed());
+            depth--;
             return minus ? new Node.Negate(of, at) : of;
         }
         return power();
@@ -124,7 +147,10 @@ final class Parser {
         if (isSign("^")) {
             At at = here();
             take();
-            return new Node.Binary(Operator.POWER, value(base), value(signed()), at);
+            deeper();
+            Node exponent = value(signed());
+            depth--;
+            return new Node.Binary(Operator.POWER, value(base), exponent, at);
         }
         if (peek().kind() == Lexer.Kind.SUPERSCRIPT) {
             At at = here();
@@ -213,7 +239,8 @@ final class Parser {
         boolean power = isSign("^") || t.kind() == Lexer.Kind.SUPERSCRIPT;
         Lexer.Token second = tokens.get(Math.min(next + 1, tokens.size() - 1));
         Lexer.Token third = tokens.get(Math.min(next + 2, tokens.size() - 1));
-        boolean product = (isSign("/") || isSign("*")) && second.kind() == Lexer.Kind.NAME && Units.isSymbol(second.written())
+        boolean pure = unit.text().equals("%") || unit.text().equals("\u00b0") || unit.text().equals("deg");   // never part of a compound one
+        boolean product = !pure && (isSign("/") || isSign("*")) && second.kind() == Lexer.Kind.NAME && Units.isSymbol(second.written())
             && !(third.kind() == Lexer.Kind.SIGN && third.text().equals("("));
         if (power || product) {
             String compound = power ? unit.written() + "^2" : unit.written() + t.text() + second.written();

@@ -7,8 +7,8 @@ import java.util.stream.Collectors;
 /** A tree as text that the parser reads back to the same tree. */
 final class Printer {
     private static final int SUM = 4;
-    private static final int PRODUCT = 5;
-    private static final int SIGNED = 6;
+    private static final int NEGATIVE = 5;
+    private static final int PRODUCT = 6;
     private static final int POWER = 7;
     private static final int ATOM = 8;
 
@@ -30,7 +30,7 @@ final class Printer {
         } else if (n instanceof Node.Known k) {
             return k.name() != null ? k.name() : amount(k);
         } else if (n instanceof Node.Negate m) {
-            return "-" + within(m.of(), POWER);
+            return "-" + within(m.of(), NEGATIVE);
         } else if (n instanceof Node.Binary b) {
             return binary(b);
         } else if (n instanceof Node.Call c) {
@@ -38,7 +38,7 @@ final class Printer {
         } else if (n instanceof Node.Apply a) {
             return a.name() + list(a.arguments());
         } else if (n instanceof Node.Inlined f) {
-            return f.written();
+            return f.name() == null ? text(f.body()) : f.arguments().isEmpty() ? f.name() : f.name() + list(f.arguments());
         } else if (n instanceof Node.When w) {
             return "when" + list(w.children());
         } else if (n instanceof Node.Compare c) {
@@ -55,9 +55,14 @@ final class Printer {
     private static String binary(Node.Binary b) {
         return switch (b.operator()) {
             case PLUS, MINUS -> within(b.left(), SUM) + " " + b.operator().sign + " " + within(b.right(), PRODUCT);
-            case TIMES, OVER -> factor(b.left(), PRODUCT) + b.operator().sign + factor(b.right(), SIGNED);
-            case POWER -> factor(b.left(), ATOM) + "^" + factor(b.right(), SIGNED);
+            case TIMES, OVER -> factor(b.left(), PRODUCT) + b.operator().sign + factor(b.right(), POWER);
+            case POWER -> factor(b.left(), ATOM) + "^" + exponent(b.right());
         };
+    }
+
+    /** x^-1 needs no brackets. */
+    private static String exponent(Node n) {
+        return n instanceof Node.Negate m && level(m.of()) >= POWER && !(m.of() instanceof Node.Measure) ? text(n) : factor(n, POWER);
     }
 
     private static String logic(Node.Logic l) {
@@ -80,7 +85,7 @@ final class Printer {
 
     /** A number with unit is bracketed: {@code 1 V*m} could be read in two ways. */
     private static String factor(Node n, int least) {
-        return n instanceof Node.Measure ? "(" + text(n) + ")" : within(n, least);
+        return n instanceof Node.Measure || n instanceof Node.Known k && k.name() == null && !k.amount().isPlain() ? "(" + text(n) + ")" : within(n, least);
     }
 
     private static String within(Node n, int least) {
@@ -88,6 +93,9 @@ final class Printer {
     }
 
     static int level(Node n) {
+        if (n instanceof Node.Inlined f && f.name() == null) {
+            return level(f.body());
+        }
         if (n instanceof Node.Binary b) {
             return switch (b.operator()) {
                 case PLUS, MINUS -> SUM;
@@ -97,7 +105,7 @@ final class Printer {
         }
         boolean negative = n instanceof Node.Negate || n instanceof Node.Literal l && l.text() == null && l.value() < 0
             || n instanceof Node.Known k && k.name() == null && k.amount().si() < 0;
-        return negative ? SIGNED : n.isCondition() ? 0 : ATOM;
+        return negative ? NEGATIVE : n.isCondition() ? 0 : ATOM;
     }
 
     /** The shortest decimal that reads back as the same double, without a point where it is whole. */

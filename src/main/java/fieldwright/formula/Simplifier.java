@@ -223,7 +223,7 @@ final class Simplifier {
             return (additive ? "sum" : "product") + parts;
         }
         if (n.children().isEmpty()) {
-            return n instanceof Node.Known k && k.name() == null ? "known " + k.amount().si() + " " + k.amount().dimension() : Printer.text(n);
+            return n instanceof Node.Known k ? "known " + k.name() + k.amount() + k.amount().si() + k.amount().error() : Printer.text(n);
         }
         StringBuilder b = new StringBuilder(n instanceof Node.Binary ? "^" : n instanceof Node.Call c ? c.function().name()
             : n instanceof Node.Compare c ? c.relation().sign : n instanceof Node.Logic l ? l.junction().name() : n.getClass().getSimpleName());

@@ -62,7 +62,7 @@ final class UnitCheck {
             Parameter p = f.parameters().get(i);
             Dimension given = of(f.arguments().get(i));
             if (given != null && !given.equals(p.dimension())) {
-                throw wrong(f, "argument '" + p.name() + "' of " + f.written() + " is " + Units.describe(given) + " and must be "
+                throw wrong(f, "argument '" + p.name() + "' of " + f.call() + " is " + Units.describe(given) + " and must be "
                     + Units.describe(p.dimension()) + ". Check its unit.");
             }
         }

@@ -46,10 +46,10 @@ public final class UnknownNameException extends AuthorException {
         return position;
     }
 
-    /** The name within an edit distance of about a third of its length, upper and lower case counting half; or null. */
+    /** The name within an edit distance of about a third of its length, case only for one or two letters, upper and lower case counting half; or null. */
     public static String nearest(String name, Collection<String> defined) {
         String best = null;
-        double bestDistance = Math.max(1.0, name.length() / 3.0) + 0.25;
+        double bestDistance = Math.max(0.5, name.length() / 3.0) + 0.25;
         for (String candidate : defined) {
             double distance = distance(name, candidate);
             if (distance >= name.length()) {

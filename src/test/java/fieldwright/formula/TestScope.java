@@ -9,7 +9,7 @@ import java.util.List;
 import java.util.Map;
 
 /** Names for tests. */
-final class TestScope implements Scope {
+class TestScope implements Scope {
     private final Map<String, Binding> bindings = new LinkedHashMap<>();
     private Integrator integrator;
 
