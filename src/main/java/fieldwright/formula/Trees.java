@@ -114,7 +114,7 @@ final class Trees {
     /** The tree without the conditions of the sheet's formulas in it. */
     static Node unguarded(Node n) {
         if (n instanceof Node.Inlined f && f.condition() != null) {
-            return unguarded(new Node.Inlined(f.written(), f.holdsFor(), f.parameters(), f.arguments(), null, f.body(), f.at()));
+            return unguarded(new Node.Inlined(f.name(), f.holdsFor(), f.parameters(), f.arguments(), null, f.body(), f.at()));
         }
         return n.withChildren(n.children().stream().map(Trees::unguarded).toList());
     }
