@@ -5,7 +5,7 @@ package fieldwright.field;
  * components that vanish by symmetry are judged against the size of what cancels. Limits count evaluations, not time.
  */
 public record Accuracy(double relative, double absoluteFloor, int maxEvaluations) {
-    public static final Accuracy DEFAULT = new Accuracy(1e-9, 0, 4_000_000);
+    public static final Accuracy DEFAULT = new Accuracy(1e-9, 0, 2_000_000);
 
     public Accuracy {
         if (!(relative >= 0) || !(absoluteFloor >= 0) || maxEvaluations < 1) {

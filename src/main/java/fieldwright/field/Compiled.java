@@ -25,6 +25,7 @@ import fieldwright.geometry.Nodes;
 import fieldwright.geometry.PlacedRegion;
 import fieldwright.geometry.Region;
 import fieldwright.geometry.RegionParts;
+import fieldwright.geometry.TriangleRegion;
 import fieldwright.integral.RegionIntegral;
 import fieldwright.quantity.AuthorException;
 import fieldwright.quantity.Units;
@@ -67,20 +68,20 @@ final class Compiled {
                 kernel = r.kernel;
                 reduced = r.region;
             }
-            for (Region.PlacedChart part : reduced.charts()) {
+            for (Region.PlacedChart part : region instanceof TriangleRegion t ? t.parallelogram() : reduced.charts()) {
                 Frame all = frame.isOwn() ? part.frame() : part.frame().then(frame);
-                patches.add(patch(part.chart(), all, density, dimension, kernel));
+                patches.add(patch(part.chart(), all, density, dimension, kernel, region instanceof TriangleRegion));
             }
         }
     }
 
-    private static Patch patch(Chart chart, Frame frame, Formula stated, int dimension, Kernel kernel) {
+    private static Patch patch(Chart chart, Frame frame, Formula stated, int dimension, Kernel kernel, boolean triangle) {
         checkUnit(chart, stated, dimension);
-        Formula density = stated.isGuarded() ? holdingEverywhere(stated, chart) : stated;
+        Formula density = stated.isGuarded() ? holdingEverywhere(stated, chart, triangle) : stated;
         NodeFunction weight = NodeFunction.of(density, chart);
         SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
         double[][] breaks = RegionIntegral.breaks(chart, density);
-        return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks);
+        return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks, triangle);
     }
 
     /**
@@ -88,7 +89,7 @@ final class Compiled {
      * that reaches to its ends. It is then smooth, and may be read beyond the region where a rule needs that.
      * Errors: AuthorException naming the condition that does not hold.
      */
-    private static Formula holdingEverywhere(Formula density, Chart chart) {
+    private static Formula holdingEverywhere(Formula density, Chart chart, boolean triangle) {
         int d = chart.dimension();
         int side = d == 1 ? 4 * GRID : GRID;
         int total = (int) Math.round(Math.pow(side, d));
@@ -106,6 +107,9 @@ final class Compiled {
                 for (int k = 0; k < d; k++) {
                     du[k][i] = gridPoint(rest % side, side, chart.isEndless(k) ? 1e-3 : 1e-7) - 0.5;
                     rest /= side;
+                }
+                if (triangle) {
+                    du[1][i] = (du[1][i] + 0.5) * (0.5 - du[0][i]) - 0.5;
                 }
             }
             chart.evaluate(anchor, du, n, nodes);

@@ -5,8 +5,10 @@ import fieldwright.geometry.Chart;
 import fieldwright.geometry.Frame;
 import fieldwright.geometry.NodeFunction;
 
-/** One part of a source ready for numbers: chart, where it stands, density along it, and the kernel its points act with. */
-record Patch(Chart chart, Frame frame, Formula density, NodeFunction weight, Kernel kernel, SpaceFunction inSpace, double[][] breaks) {
+/** One part of a source ready for numbers: chart, where it stands, density along it, the kernel its points act with;
+ * {@code triangle}: only the half u + v ≤ 1 of the chart's box carries charge. */
+record Patch(Chart chart, Frame frame, Formula density, NodeFunction weight, Kernel kernel, SpaceFunction inSpace, double[][] breaks,
+    boolean triangle) {
     int dimension() {
         return chart.dimension();
     }

@@ -15,7 +15,7 @@ import fieldwright.quantity.Stop;
  */
 final class Paver {
     /** A box is far when the place is further from it than this many of its lengths. */
-    private static final double FAR = 0.6;
+    private static final double FAR = 0.45;
     /** Tangents of a box that is cut into rays differ by less than this part of their own length. */
     private static final double BENT = 0.8;
     private static final int DEEPEST = 70;
@@ -54,7 +54,69 @@ final class Paver {
         if (patch.dimension() == 3 && patch.inSpace() != null && patch.kernel() == Kernel.POINT && !chart.isEndless() && faces(patch, probe, chart, sampler)) {
             return;
         }
+        if (patch.triangle()) {
+            int first = pieces.size();
+            polar(sampler, TRIANGLE, nearestInTriangle(sampler), 0);
+            rebase(sampler, first);
+            return;
+        }
         boxes(patch, chart, sampler);
+    }
+
+    private static final double[][] TRIANGLE = {{0, 0}, {1, 0}, {0, 1}};
+
+    /** Nearest point of a flat triangle, u + v ≤ 1 in its own parameters: its foot if that is inside, else the nearest on a side. */
+    private double[] nearestInTriangle(Sampler s) {
+        Chart.Anchor corner = s.anchor(0, 0);
+        double[] b = s.toAnchor(corner);
+        for (double[] du : space.du) {
+            du[0] = 0;
+        }
+        s.place(corner, space.du, 1);
+        double[] p = column(s.tangent(0));
+        double[] q = column(s.tangent(1));
+        double det = dot(p, p) * dot(q, q) - dot(p, q) * dot(p, q);
+        double u = -(dot(q, q) * dot(p, b) - dot(p, q) * dot(q, b)) / det;
+        double v = -(dot(p, p) * dot(q, b) - dot(p, q) * dot(p, b)) / det;
+        if (u > 0 && v > 0 && u + v < 1) {
+            return refined(s, u, v);
+        }
+        double[] best = null;
+        double least = Double.POSITIVE_INFINITY;
+        for (int k = 0; k < 3; k++) {
+            double[] a = TRIANGLE[k];
+            double[] c = TRIANGLE[(k + 1) % 3];
+            double[] start = new double[3];
+            double[] side = new double[3];
+            for (int i = 0; i < 3; i++) {
+                start[i] = b[i] + a[0] * p[i] + a[1] * q[i];
+                side[i] = (c[0] - a[0]) * p[i] + (c[1] - a[1]) * q[i];
+            }
+            double t = snap(-dot(start, side) / dot(side, side), 0, 1);
+            double[] d = {start[0] + t * side[0], start[1] + t * side[1], start[2] + t * side[2]};
+            if (norm(d) < least) {
+                least = norm(d);
+                best = new double[] {a[0] + t * (c[0] - a[0]), a[1] + t * (c[1] - a[1])};
+            }
+        }
+        return best;
+    }
+
+    /** One more step from the foot itself, whose position is rounded less than the corner's. */
+    private double[] refined(Sampler s, double u, double v) {
+        Chart.Anchor foot = s.anchor(u, v);
+        double[] b = s.toAnchor(foot);
+        s.place(foot, space.du, 1);
+        double[] p = column(s.tangent(0));
+        double[] q = column(s.tangent(1));
+        double det = dot(p, p) * dot(q, q) - dot(p, q) * dot(p, q);
+        double nu = u - (dot(q, q) * dot(p, b) - dot(p, q) * dot(q, b)) / det;
+        double nv = v - (dot(p, p) * dot(q, b) - dot(p, q) * dot(p, b)) / det;
+        return nu > 0 && nv > 0 && nu + nv < 1 ? new double[] {nu, nv} : new double[] {u, v};
+    }
+
+    private static double[] column(double[][] t) {
+        return new double[] {t[0][0], t[1][0], t[2][0]};
     }
 
     /** An endless line or plane: the kernel itself is the answer. */
@@ -498,11 +560,12 @@ final class Paver {
         if (Math.max(bend0, bend1) > BENT && depth < DEEPEST) {
             double cost0 = bend0 * (bend0 > BENT ? 1 : 0) + 1e-3 * length[0] / size;
             double cost1 = bend1 * (bend1 > BENT ? 1 : 0) + 1e-3 * length[1] / size;
-            split(s, from, to, cost0 >= cost1 ? 0 : 1, depth);
+            boolean long0 = Math.hypot(least, lift) > 0.2 * size ? length[0] >= length[1] : cost0 >= cost1;
+            split(s, from, to, long0 ? 0 : 1, depth);
             return;
         }
         double[] guess = {from[0] + (to[0] - from[0]) * (nearest / 3) / 2.0, from[1] + (to[1] - from[1]) * (nearest % 3) / 2.0};
-        nearSurface(s, from, to, guess, lift, size, depth);
+        nearSurface(s, from, to, guess, lift, depth);
     }
 
     /** bends[k][j]: how much the tangent of parameter k changes along parameter j, against its own length. */
@@ -635,8 +698,20 @@ final class Paver {
         return true;
     }
 
-    private void nearSurface(Sampler s, double[] from, double[] to, double[] guess, double lift, double size, int depth) {
+    private void nearSurface(Sampler s, double[] from, double[] to, double[] guess, double lift, int depth) {
         double[] at = footOnSurface(s, from, to, guess);
+        double[][] corners = {{from[0], from[1]}, {to[0], from[1]}, {to[0], to[1]}, {from[0], to[1]}};
+        if (!polar(s, corners, at, lift)) {
+            if (depth < DEEPEST) {
+                split(s, from, to, depth % 2, depth);
+            } else {
+                pieces.add(Piece.whole(new Pieces.Box(s, from, to), 8, 8));
+            }
+        }
+    }
+
+    /** Triangles from the nearest point to each side of a flat or nearly flat polygon of parameters; false when the map is degenerate there. */
+    private boolean polar(Sampler s, double[][] corners, double[] at, double lift) {
         Chart.Anchor foot = s.anchor(at);
         double[] b = s.toAnchor(foot);
         for (double[] du : space.du) {
@@ -651,12 +726,7 @@ final class Paver {
         double area = norm(n);
         double[] e1 = norm(p) >= norm(q) ? unit(p) : unit(q);
         if (!(area > 1e-12 * norm(p) * norm(q)) || e1 == null) {
-            if (depth < DEEPEST) {
-                split(s, from, to, depth % 2, depth);
-            } else {
-                pieces.add(Piece.whole(new Pieces.Box(s, from, to), 8, 8));
-            }
-            return;
+            return false;
         }
         double[] normal = unit(n);
         double[] e2 = {normal[1] * e1[2] - normal[2] * e1[1], normal[2] * e1[0] - normal[0] * e1[2], normal[0] * e1[1] - normal[1] * e1[0]};
@@ -679,10 +749,9 @@ final class Paver {
                 }
             }
         }
-        double[][] corners = {{from[0], from[1]}, {to[0], from[1]}, {to[0], to[1]}, {from[0], to[1]}};
-        for (int k = 0; k < 4; k++) {
+        for (int k = 0; k < corners.length; k++) {
             double[] a = {corners[k][0] - at[0], corners[k][1] - at[1]};
-            double[] c = {corners[(k + 1) % 4][0] - at[0], corners[(k + 1) % 4][1] - at[1]};
+            double[] c = {corners[(k + 1) % corners.length][0] - at[0], corners[(k + 1) % corners.length][1] - at[1]};
             Pieces.Triangle triangle = new Pieces.Triangle(s, at, a, c, metric, height, pole);
             if (triangle.isEmpty()) {
                 continue;
@@ -692,6 +761,7 @@ final class Paver {
             }
             add(triangle, height > 0 ? triangle.spanW() : 1, triangle.spanV(), 8, 8);
         }
+        return true;
     }
 
     private static double dot(double[] a, double[] b) {

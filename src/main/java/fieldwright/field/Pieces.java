@@ -145,7 +145,7 @@ final class Pieces {
 
     static double asinh(double x) {
         double a = Math.abs(x);
-        double y = a < 1e-4 ? a - a * a * a / 6 : Math.log(a + Math.sqrt(a * a + 1));
+        double y = a > 1e8 ? Math.log(2 * a) : Math.log1p(a + a * a / (1 + Math.sqrt(a * a + 1)));
         return x < 0 ? -y : y;
     }
 
@@ -318,6 +318,12 @@ final class Pieces {
             this.length = length;
             radius = new Radius(height);
             touching(height);
+        }
+
+        /** On the tip the 1/R parts of a full turn cancel only if the rule round it is exact for them. */
+        @Override
+        public int leastOrder(int direction) {
+            return direction == 1 && radius.height == 0 ? 24 : 0;
         }
 
         double span() {

@@ -1,7 +1,6 @@
 package fieldwright.geometry;
 
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 
@@ -109,18 +108,8 @@ public final class Bodies {
         return new RegionParts(PolygonEars.triangles(corners));
     }
 
-    /** A flat triangle; parameters u (across) and v (outwards) run from 0 to 1. */
     static Region triangle(double[] a, double[] b, double[] c) {
-        Formula[] position = new Formula[3];
-        Formula u = Formula.variable("u");
-        Formula v = Formula.variable("v");
-        for (int k = 0; k < 3; k++) {
-            position[k] = length(a[k]).plus(u.times(length(b[k] - a[k]).plus(v.times(length(c[k] - b[k])))));
-        }
-        Map<String, Extent> over = new LinkedHashMap<>();
-        over.put("u", new Extent.Limits(ZERO, Formula.constant(1)));
-        over.put("v", new Extent.Limits(ZERO, Formula.constant(1)));
-        return new ParametricRegion(position[0], position[1], position[2], over);
+        return TriangleRegion.of(a, b, c);
     }
 
     /** Spherical surface. */

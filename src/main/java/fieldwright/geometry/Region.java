@@ -7,7 +7,7 @@ import java.util.List;
  * A point, line, surface or volume. Data only: building one costs nothing, {@link #charts} makes the numeric maps and
  * checks everything the formulas say.
  */
-public sealed interface Region permits CoordinateRegion, ParametricRegion, PlacedRegion, RegionParts {
+public sealed interface Region permits CoordinateRegion, ParametricRegion, TriangleRegion, PlacedRegion, RegionParts {
 
     /** 0 point, 1 line, 2 surface, 3 volume. */
     int dimension();

@@ -43,6 +43,7 @@ public final class Cubature {
 
     private static final double UNIT_ROUNDOFF = 1.2e-16;
     private static final int DEEPEST = 60;
+    private static final int STALLED = 12;
 
     private final int components;
     private final boolean grouped;
@@ -80,7 +81,16 @@ public final class Cubature {
         double floor;
         int direction;
         int depth;
+        double[] byDirection;
+        double[] decay;
+        boolean raised;
+        /** Halvings in a row that did not help. */
+        int stalled;
     }
+
+    /** Orders a piece starts with at most; the decay found there tells what it needs. */
+    private static final int[] START = {0, 10, 8, 6};
+    private static final int MOST = 24;
 
     private Result run(List<Piece> pieces) {
         PriorityQueue<Panel> heap = new PriorityQueue<>(Math.max(1, pieces.size()), (a, b) -> Double.compare(b.worst, a.worst));
@@ -96,7 +106,7 @@ public final class Cubature {
             }
         }
         for (Piece piece : pieces) {
-            Panel panel = work(piece, 0);
+            Panel panel = work(start(piece), 0);
             heap.add(panel);
             add(panel, 1, value, error, magnitude);
         }
@@ -111,7 +121,7 @@ public final class Cubature {
                 break;
             }
             Panel panel = heap.poll();
-            if (panel.worst <= panel.floor || panel.depth >= DEEPEST) {
+            if (panel.worst <= panel.floor || panel.depth >= DEEPEST || panel.stalled > STALLED) {
                 done.add(panel);
                 continue;
             }
@@ -122,8 +132,19 @@ public final class Cubature {
             }
             Stop.check();
             add(panel, -1, value, error, magnitude);
+            int[] higher = panel.raised ? null : higher(panel, 0.3 * allowed(value, magnitude) / Math.max(4, heap.size()));
+            if (higher != null) {
+                Panel again = work(new Piece(panel.piece.integrand, panel.piece.from, panel.piece.to, higher), panel.depth);
+                again.raised = true;
+                heap.add(again);
+                add(again, 1, value, error, magnitude);
+                continue;
+            }
             Panel low = work(half(panel, true), panel.depth + 1);
             Panel high = work(half(panel, false), panel.depth + 1);
+            int stalled = low.worst + high.worst > 0.9 * panel.worst ? panel.stalled + 1 : 0;
+            low.stalled = stalled;
+            high.stalled = stalled;
             heap.add(low);
             heap.add(high);
             add(low, 1, value, error, magnitude);
@@ -142,6 +163,38 @@ public final class Cubature {
             }
         }
         return new Result(value, error, magnitude, evaluations, status);
+    }
+
+    /** What the whole may be wrong by. */
+    private double allowed(double[] value, double[] magnitude) {
+        if (grouped) {
+            return allowed(norm(value), norm(magnitude));
+        }
+        double least = Double.POSITIVE_INFINITY;
+        for (int c = 0; c < components; c++) {
+            least = Math.min(least, allowed(Math.abs(value[c]), magnitude[c]));
+        }
+        return least;
+    }
+
+    /** Orders that bring every direction below {@code target} if coefficients go on to decay as they do; null when halving is better. */
+    private static int[] higher(Panel panel, double target) {
+        int[] orders = panel.piece.orders.clone();
+        double before = 1;
+        double after = 1;
+        for (int d = 0; d < orders.length; d++) {
+            before *= orders[d];
+            double e = panel.byDirection[d];
+            if (e > target) {
+                double more = Math.log(e / target) / (-0.9 * Math.log(panel.decay[d]));
+                if (!(panel.decay[d] < 0.7) || orders[d] + more > MOST) {
+                    return null;
+                }
+                orders[d] = (int) Math.ceil(orders[d] + more) + 1;
+            }
+            after *= orders[d];
+        }
+        return after > before ? orders : null;
     }
 
     private void sum(Iterable<Panel> heap, Iterable<Panel> done, double[] value, double[] error, double[] magnitude) {
@@ -164,6 +217,14 @@ public final class Cubature {
             error[c] += sign * panel.error[c];
             magnitude[c] += sign * panel.magnitude[c];
         }
+    }
+
+    private static Piece start(Piece piece) {
+        int[] orders = piece.orders.clone();
+        for (int d = 0; d < orders.length; d++) {
+            orders[d] = Math.max(piece.integrand.leastOrder(d), Math.min(orders[d], START[orders.length]));
+        }
+        return new Piece(piece.integrand, piece.from, piece.to, orders);
     }
 
     private static boolean finite(double[] value) {
@@ -209,7 +270,7 @@ public final class Cubature {
         } else {
             from[panel.direction] = middle;
         }
-        return new Piece(p.integrand, from, to, p.orders);
+        return start(new Piece(p.integrand, from, to, p.orders));
     }
 
     /** Value, error and worst direction of one box. */
@@ -275,6 +336,8 @@ public final class Cubature {
             total += panel.magnitude[c];
         }
         double[] byDirection = new double[dimension];
+        panel.byDirection = byDirection;
+        panel.decay = new double[dimension];
         double[] rounding = new double[components];
         double[] error = new double[components];
         for (int c = 0; c < components; c++) {
@@ -283,7 +346,7 @@ public final class Cubature {
             panel.floor = Math.max(panel.floor, 30 * rounding[c]);
         }
         for (int d = 0; d < dimension; d++) {
-            rule.rules[d].errors(marginal[d], components, rounding, error);
+            panel.decay[d] = rule.rules[d].errors(marginal[d], components, rounding, error);
             for (int c = 0; c < components; c++) {
                 byDirection[d] = Math.max(byDirection[d], error[c]);
                 panel.error[c] += error[c];

@@ -87,8 +87,9 @@ public final class GaussLegendre {
      * to {@code error}. Pairs of coefficients are taken together because one of each pair vanishes for even or odd functions; the
      * decay is that of all components together. The rule's error is the function's coefficient near degree 2·order, so a geometric
      * decay is carried on over part of that distance; without decay the last coefficients themselves are the estimate.
+     * Returns the decay per two degrees, 1 when there is none: errors go about as decay^(0.9·order).
      */
-    void errors(double[][] weighted, int components, double[] noise, double[] error) {
+    double errors(double[][] weighted, int components, double[] noise, double[] error) {
         double[] last = new double[components];
         double top = 0;
         double before = 0;
@@ -106,13 +107,15 @@ public final class GaussLegendre {
             }
         }
         double factor = 20;
+        double ratio = 1;
         if (order >= 6 && Math.sqrt(top) > allNoise) {
-            double ratio = Math.max(Math.sqrt(Math.sqrt(top / first)), 0.25 * Math.sqrt(top / before));
+            ratio = Math.max(Math.sqrt(Math.sqrt(top / first)), 0.25 * Math.sqrt(top / before));
             factor = ratio < 0.9 ? 20 * Math.pow(ratio, 0.4 * order) : 20;
         }
         for (int c = 0; c < components; c++) {
             error[c] = (last[c] <= noise[c] ? 0 : factor * last[c]) + noise[c];
         }
+        return Math.min(1, ratio);
     }
 
     private double pair(double[] weighted, int degree) {

@@ -16,5 +16,10 @@ public interface Integrand {
      */
     void evaluate(double[][] u, int n, double[][] out, double[] noise);
 
+    /** Gauss order below which the integrand must not be taken in a direction of its unit box. */
+    default int leastOrder(int direction) {
+        return 0;
+    }
+
     int BLOCK = 256;
 }

@@ -39,7 +39,7 @@ final class HonestyLook {
                     }
                     continue;
                 }
-                Vector v = e.isSided() ? e.mean() : e;
+                Vector v = closest(e, c, k);
                 if (!v.standing().isConverged()) {
                     s[2]++;
                     System.out.println("NOT CONVERGED " + v.standing().reason() + " " + p.text());
@@ -78,6 +78,24 @@ final class HonestyLook {
                 System.out.printf("stated/true 1e%+d: %d%n", b - 5, histogram[b]);
             }
         }
+    }
+
+    /** A place that cannot be told from the surface has a pair; the closed form may have taken it for one side. */
+    static Vector closest(Vector e, Closed c, double k) {
+        if (!e.isSided()) {
+            return e;
+        }
+        Vector best = e.mean();
+        if (c.status() == Closed.Status.REGULAR) {
+            for (Vector v : new Vector[] {e.plusSide(), e.minusSide()}) {
+                best = off(v, c, k) < off(best, c, k) ? v : best;
+            }
+        }
+        return best;
+    }
+
+    private static double off(Vector v, Closed c, double k) {
+        return norm(k * v.x().si() - c.ex(), k * v.y().si() - c.ey(), k * v.z().si() - c.ez());
     }
 
     static double norm(double x, double y, double z) {

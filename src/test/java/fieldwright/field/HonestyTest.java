@@ -44,7 +44,7 @@ class HonestyTest {
                 broken.add("a number where there is none: " + p.text());
                 continue;
             }
-            Vector v = e.isSided() ? e.mean() : e;
+            Vector v = HonestyLook.closest(e, c, k);
             double off = norm(k * v.x().si() - c.ex(), k * v.y().si() - c.ey(), k * v.z().si() - c.ez());
             double stated = k * norm(v.x().error(), v.y().error(), v.z().error());
             if (off > stated + c.errE()) {
