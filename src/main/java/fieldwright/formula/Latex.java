@@ -37,6 +37,10 @@ public final class Latex {
         if (special != null) {
             return special;
         }
+        int library = name.lastIndexOf('.');
+        if (library >= 0) {
+            return name(name.substring(library + 1));   // whose it is stands in the text of the sheet
+        }
         if (name.endsWith("'")) {
             return name(name.substring(0, name.length() - 1)) + "'";
         }

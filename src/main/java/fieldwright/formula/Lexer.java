@@ -75,13 +75,22 @@ final class Lexer {
         return c >= '0' && c <= '9';
     }
 
+    /** {@code R_s}, and {@code closedForms.E_ring}: a name of a library sheet with that of the sheet before it. */
     private void name() {
         int from = at;
-        while (at < s.length() && Names.continuesName(s.charAt(at))) {
+        word();
+        while (at + 1 < s.length() && s.charAt(at) == '.' && Names.startsName(s.charAt(at + 1))) {
             at++;
+            word();
         }
         String written = s.substring(from, at);
         tokens.add(new Token(Kind.NAME, Names.fold(written), written, from));
+    }
+
+    private void word() {
+        while (at < s.length() && Names.continuesName(s.charAt(at))) {
+            at++;
+        }
     }
 
     private void superscript() {

@@ -122,6 +122,9 @@ final class Draft implements Scope {
             throw new AuthorException(reserved);
         }
         SheetName taken = above.get(name);
+        if (taken != null && taken.cell() == 0) {
+            throw new AuthorException("'" + name + "' is the name of a library sheet that this sheet uses. Choose another name here.");
+        }
         if (taken != null) {
             throw new AuthorException("'" + name + "' is written by cell " + taken.cell() + " and again by cell " + number
                     + ": a name is written by one cell. Choose another name here.");

@@ -72,6 +72,7 @@ final class Pass {
      */
     void work(Set<Integer> forced, boolean fresh) {
         workspace.clear();
+        setting.libraries().forEach(library -> library.names().forEach(names::put));
         for (int number = 1; number <= cells.size(); number++) {
             CellRun run = work(number, forced.contains(number), fresh);
             runs.add(run);

@@ -84,16 +84,23 @@ public final class SheetRunner implements AutoCloseable {
 
     private static Setting setting(Header header, List<Output.Problem> problems) {
         Accuracy accuracy = Accuracy.DEFAULT;
+        List<Library> libraries = new ArrayList<>();
         for (Header.Field field : header.fields()) {
-            if (field.name().equals("accuracy") && !field.value().isEmpty()) {
-                try {
+            try {
+                if (field.name().equals("accuracy") && !field.value().isEmpty()) {
                     accuracy = accuracy(field.value());
-                } catch (AuthorException e) {
-                    problems.add(new Output.Problem(field.line(), 0, e.getMessage()));
+                } else if (field.name().equals("use")) {
+                    for (String name : field.value().split("\\s*,\\s*")) {
+                        if (!name.isBlank()) {
+                            libraries.add(Library.named(name.strip()));
+                        }
+                    }
                 }
+            } catch (AuthorException e) {
+                problems.add(new Output.Problem(field.line(), 0, e.getMessage()));
             }
         }
-        return new Setting(accuracy, Desk.Mode.WORKING, Map.of());
+        return new Setting(accuracy, Desk.Mode.WORKING, libraries, Map.of());
     }
 
     private static Accuracy accuracy(String text) {
@@ -143,7 +150,7 @@ public final class SheetRunner implements AutoCloseable {
         Set<Integer> forced = new HashSet<>();
         while (true) {
             List<CellRun> earlier = engine.earlier(cells);
-            Pass pass = new Pass(cells, setting, engine.workspace(), new CompiledNow(cells, engine.maker()), number -> earlier.get(number - 1), authorCode, printing, (number, run) -> tell(listener, number, run));
+            Pass pass = new Pass(cells, setting, engine.workspace(), new CompiledNow(cells, engine.maker(), Library.javaSources(setting.libraries())), number -> earlier.get(number - 1), authorCode, printing, (number, run) -> tell(listener, number, run));
             boolean fresh = engine.isFresh();
             engine.used();
             try {
@@ -161,10 +168,10 @@ public final class SheetRunner implements AutoCloseable {
     }
 
     /** The text in front of us, compiled where it stands. */
-    private record CompiledNow(List<Cell> cells, WorkingCode.Maker maker) implements Pass.Code {
+    private record CompiledNow(List<Cell> cells, WorkingCode.Maker maker, Map<String, String> libraries) implements Pass.Code {
         @Override
         public WorkingCode of(int cell, Draft draft) {
-            return maker.make(draft);
+            return maker.make(draft, libraries);
         }
 
         @Override

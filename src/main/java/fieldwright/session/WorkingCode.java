@@ -53,7 +53,8 @@ record WorkingCode(List<Step> steps, List<Fault> faults, List<String> lost) {
             return splits.computeIfAbsent(source, compiler::split);
         }
 
-        WorkingCode make(Draft cell) {
+        /** @param libraries Java text of a class for each library sheet, by its name; compiled where it is used */
+        WorkingCode make(Draft cell, Map<String, String> libraries) {
             String source = cell.cell().source();
             Map<String, Declaration> visible = new LinkedHashMap<>(cell.above().declarations());
             Set<String> own = new LinkedHashSet<>();
@@ -67,6 +68,7 @@ record WorkingCode(List<Step> steps, List<Fault> faults, List<String> lost) {
                         requireNew(cell, own, declared, piece);
                         own.add(declared);
                     }
+                    addLibraries(piece, libraries, visible);
                     CompiledSnippet snippet = compiler.compile(piece.source(), visible);
                     if (snippet.declares() != null) {
                         requireFit(snippet.declares(), piece);
@@ -78,6 +80,17 @@ record WorkingCode(List<Step> steps, List<Fault> faults, List<String> lost) {
                 }
             }
             return new WorkingCode(steps, List.of(), List.of());
+        }
+
+        private void addLibraries(SnippetCompiler.Piece piece, Map<String, String> libraries, Map<String, Declaration> visible)
+                throws SnippetException {
+            for (Map.Entry<String, String> library : libraries.entrySet()) {
+                if (!visible.containsKey(library.getKey()) && SnippetCompiler.names(piece.source()).contains(library.getKey())) {
+                    Map<String, Declaration> imports = new LinkedHashMap<>(visible);
+                    imports.values().removeIf(declaration -> !(declaration instanceof Declaration.Import));
+                    visible.put(library.getKey(), compiler.compile(library.getValue(), imports).declares());
+                }
+            }
         }
 
         private static List<String> declaredFrom(List<SnippetCompiler.Piece> pieces, int first) {

@@ -71,11 +71,13 @@ final class JavaText {
         return PART_BEFORE.matcher(masked.substring(Math.max(0, start - 40), start)).find();
     }
 
-    /** True when the name stands anywhere else than at one offset. */
+    /** True when the name of a variable stands anywhere else than at one offset; a call of a method of that name is another thing. */
     boolean usesElsewhere(String name, int except) {
         Matcher word = WORD.matcher(masked);
         while (word.find()) {
-            if (word.start() != except && word.group().equals(name) && !isPart(word.start())) {
+            int next = skipSpace(word.end());
+            boolean isCall = next < masked.length() && masked.charAt(next) == '(';
+            if (word.start() != except && word.group().equals(name) && !isPart(word.start()) && !isCall) {
                 return true;
             }
         }

@@ -109,6 +109,11 @@ public final class SnippetCompiler implements AutoCloseable {
         return pieces;
     }
 
+    /** The identifiers in a piece that stand by themselves. */
+    public static Set<String> names(String source) {
+        return new JavaText(source).free();
+    }
+
     /** The variable, method or type a piece declares by its text, whether it compiles or not; null when it declares none. */
     public static String declaredName(String source) {
         JavaText text = new JavaText(source);

@@ -64,5 +64,6 @@ class JavaTextTest {
         String text = "var Q = a.Q + \"Q\";";
         assertFalse(new JavaText(text).usesElsewhere("Q", 4));
         assertTrue(new JavaText("var Q = a + Q;").usesElsewhere("Q", 4));
+        assertFalse(new JavaText("var ring = charge(ring (1));").usesElsewhere("ring", 4));
     }
 }
