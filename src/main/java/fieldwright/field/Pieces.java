@@ -37,6 +37,11 @@ final class Pieces {
         }
 
         @Override
+        public boolean isSmooth() {
+            return sampler.isSmooth();
+        }
+
+        @Override
         public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
             double[][] du = sampler.space.du;
             map(u, n, du);

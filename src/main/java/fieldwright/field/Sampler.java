@@ -103,6 +103,11 @@ abstract class Sampler {
      */
     abstract void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise);
 
+    /** Whether the density is known to be smooth in the chart's parameters. */
+    boolean isSmooth() {
+        return patch.weight().isSmooth();
+    }
+
     private double reach = -1;
 
     /** Distance from the frame's origin to the furthest corner: the size its coordinates are rounded at. */
@@ -272,6 +277,11 @@ abstract class Sampler {
             super(patch, probe, potential, space, chart, others(depth), held(depth, upper));
             this.raySteps = raySteps;
             sign = (upper ? 1 : -1) * handedness;
+        }
+
+        @Override
+        boolean isSmooth() {
+            return true;   // SpaceFunction admits no other
         }
 
         /** The two other depths, in cyclic order, so that their cross product points out of the upper face. */

@@ -37,7 +37,7 @@ final class SpaceFunction {
     /** The function, or null when the formula does not qualify. */
     static SpaceFunction of(Formula f) {
         List<String> used = f.variables().stream().sorted().toList();
-        if (!ALLOWED.containsAll(used) || !f.kinks().isEmpty()) {
+        if (!ALLOWED.containsAll(used) || !NodeFunction.isSmooth(f)) {
             return null;
         }
         BlockFunction function = f.compile(used);

@@ -4,6 +4,7 @@ import java.util.List;
 
 import fieldwright.formula.BlockFunction;
 import fieldwright.formula.Formula;
+import fieldwright.formula.Node;
 import fieldwright.quantity.AuthorException;
 
 /**
@@ -49,7 +50,96 @@ public final class NodeFunction {
                     + String.join(", ", chart.coordinates()) + ". Give it a value or write it with coordinates.");
             }
         }
-        return new NodeFunction(formula, formula.compile(used), used, own);
+        NodeFunction f = new NodeFunction(formula, formula.compile(used), used, own);
+        f.kinksAreCut = kinksAreCut(formula, chart);
+        return f;
+    }
+
+    /**
+     * Whether the formula is known to be smooth along the chart: over its own coordinates or x, y, z only, a polynomial or without roots,
+     * powers, quotients, logarithms and anything with a kink. A false answer means not known.
+     */
+    public boolean isSmooth() {
+        if (constant || smooth != null) {
+            return constant || smooth;
+        }
+        boolean found = isSmooth(formula, kinksAreCut);
+        for (int k = 0; k < own.length; k++) {
+            found &= own[k] >= 0 || List.of("x", "y", "z").contains(used.get(k));
+        }
+        smooth = found;
+        return found;
+    }
+
+    /** Whether a formula is known to be smooth in its variables: a polynomial, or without roots, powers, quotients, logarithms and kinks. */
+    public static boolean isSmooth(Formula formula) {
+        return isSmooth(formula, false);
+    }
+
+    private static boolean isSmooth(Formula formula, boolean cut) {
+        if (!cut && !formula.kinks().isEmpty()) {
+            return false;
+        }
+        boolean polynomial = true;
+        for (String name : formula.variables()) {
+            polynomial &= formula.degree(name).isPresent();
+        }
+        if (polynomial) {
+            return true;
+        }
+        return isSmooth(formula.tree(), cut);
+    }
+
+    private static final java.util.Set<String> ENTIRE = java.util.Set.of("SIN", "COS", "EXP", "SINH", "COSH", "ERF");
+
+    private static final java.util.Set<String> CUT = java.util.Set.of("ABS", "SIGN", "MIN", "MAX", "FLOOR", "CEIL");
+
+    private static boolean isSmooth(Node n, boolean cut) {
+        if (!hasName(n)) {
+            return true;
+        }
+        if (n instanceof Node.Binary b) {
+            boolean quotient = b.operator() == Node.Operator.OVER && hasName(b.right());
+            boolean power = b.operator() == Node.Operator.POWER && !isWholePower(b);
+            return !quotient && !power && isSmooth(b.left(), cut) && isSmooth(b.right(), cut);
+        }
+        if (n instanceof Node.Inlined inlined) {
+            return isSmooth(inlined.body(), cut);
+        }
+        if (n instanceof Node.When w) {
+            return cut && isSmooth(w.yes(), cut) && isSmooth(w.no(), cut);
+        }
+        if (n instanceof Node.Call c && !ENTIRE.contains(c.function().name()) && !(cut && CUT.contains(c.function().name()))) {
+            return false;
+        }
+        return (n instanceof Node.Call || n instanceof Node.Negate || n instanceof Node.Name)
+            && n.children().stream().allMatch(c -> isSmooth(c, cut));
+    }
+
+    private static boolean isWholePower(Node.Binary b) {
+        return b.right() instanceof Node.Literal p && p.value() >= 0 && p.value() == Math.rint(p.value());
+    }
+
+    private static boolean hasName(Node n) {
+        return n instanceof Node.Name || n.children().stream().anyMatch(NodeFunction::hasName);
+    }
+
+    private Boolean smooth;
+    /** Every kink is a value of one coordinate with constant limits, where integrals over the chart are cut. */
+    private boolean kinksAreCut;
+
+    private static boolean kinksAreCut(Formula formula, Chart chart) {
+        for (Formula kink : formula.kinks()) {
+            boolean cut = false;
+            for (int k = 0; k < chart.dimension(); k++) {
+                String name = chart.coordinates().get(chart.coordinateOf(k));
+                cut |= kink.variables().equals(java.util.Set.of(name)) && chart.hasConstantLimits(k) && !chart.isEndless(k);
+            }
+            if (!cut) {
+                return false;
+            }
+        }
+        return true;
     }
 
     public Formula formula() {

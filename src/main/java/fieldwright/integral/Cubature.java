@@ -346,7 +346,7 @@ public final class Cubature {
             panel.floor = Math.max(panel.floor, 30 * rounding[c]);
         }
         for (int d = 0; d < dimension; d++) {
-            panel.decay[d] = rule.rules[d].errors(marginal[d], components, rounding, error);
+            panel.decay[d] = rule.rules[d].errors(marginal[d], components, piece.integrand.isSmooth(), rounding, error);
             for (int c = 0; c < components; c++) {
                 byDirection[d] = Math.max(byDirection[d], error[c]);
                 panel.error[c] += error[c];

@@ -89,7 +89,7 @@ public final class GaussLegendre {
      * decay is carried on over part of that distance; without decay the last coefficients themselves are the estimate.
      * Returns the decay per two degrees, 1 when there is none: errors go about as decay^(0.9·order).
      */
-    double errors(double[][] weighted, int components, double[] noise, double[] error) {
+    double errors(double[][] weighted, int components, boolean smooth, double[] noise, double[] error) {
         double[] last = new double[components];
         double top = 0;
         double before = 0;
@@ -110,12 +110,12 @@ public final class GaussLegendre {
         double ratio = 1;
         if (order >= 6 && Math.sqrt(top) > allNoise) {
             ratio = Math.max(Math.sqrt(Math.sqrt(top / first)), 0.25 * Math.sqrt(top / before));
-            factor = ratio < 0.9 ? 20 * Math.pow(ratio, 0.4 * order) : 20;
+            factor = smooth && ratio < 0.9 ? 20 * Math.pow(ratio, 0.4 * order) : 20;
         }
         for (int c = 0; c < components; c++) {
             error[c] = (last[c] <= noise[c] ? 0 : factor * last[c]) + noise[c];
         }
-        return Math.min(1, ratio);
+        return smooth ? Math.min(1, ratio) : 1;
     }
 
     private double pair(double[] weighted, int degree) {

@@ -21,5 +21,13 @@ public interface Integrand {
         return 0;
     }
 
+    /**
+     * False when the function may have kinks or singular points inside its box: the decay of coefficients, which are those of partial
+     * integrals, then promises nothing, and the last coefficients themselves are taken as the error.
+     */
+    default boolean isSmooth() {
+        return true;
+    }
+
     int BLOCK = 256;
 }
