@@ -2,6 +2,7 @@ package fieldwright.words;
 
 import fieldwright.charge.Source;
 import fieldwright.charge.Surroundings;
+import fieldwright.field.Accuracy;
 import fieldwright.field.FieldSolver;
 import fieldwright.output.Output;
 import fieldwright.quantity.Amount;
@@ -152,15 +153,15 @@ public final class Distribution {
     }
 
     List<Vector> electricFields(List<Place> places) {
-        return ask(solver -> places.stream().map(solver::electricField).toList());
+        return askMany(solver -> places.stream().map(solver::electricField).toList());
     }
 
     List<Vector> fluxDensities(List<Place> places) {
-        return ask(solver -> places.stream().map(solver::fluxDensity).toList());
+        return askMany(solver -> places.stream().map(solver::fluxDensity).toList());
     }
 
     List<Amount> potentials(List<Place> places) {
-        return ask(solver -> places.stream().map(place -> potential(solver, place)).toList());
+        return askMany(solver -> places.stream().map(place -> potential(solver, place)).toList());
     }
 
     private Amount potential(FieldSolver solver, Place place) {
@@ -168,13 +169,22 @@ public final class Distribution {
     }
 
     private <T> T ask(Function<FieldSolver, T> question) {
+        return ask(question, Desk.current().accuracy());
+    }
+
+    /** For pictures, which show six digits at most. */
+    private <T> T askMany(Function<FieldSolver, T> question) {
+        Accuracy asked = Desk.current().accuracy();
+        return ask(question, new Accuracy(Math.max(asked.relative(), 1e-6), asked.absoluteFloor(), asked.maxEvaluations()));
+    }
+
+    private <T> T ask(Function<FieldSolver, T> question, Accuracy accuracy) {
         if (assumption == null) {
             throw new AuthorException(kind + ": its surroundings are not stated, so it answers nothing. Write .inFreeSpace(), .inMedium(eps_r),"
                     + " or .under(groundPlane(\"z\", \"H\")) (.above, .beside) after it. Leaving out an earthed wall errs to the unsafe side.");
         }
-        Desk desk = Desk.current();
-        desk.sayOnce(new Output.Assumption(assumption));
-        return question.apply(FieldSolver.of(source, desk.accuracy()));
+        Desk.current().sayOnce(new Output.Assumption(assumption));
+        return question.apply(FieldSolver.of(source, accuracy));
     }
 
     /** The charge as the engine takes it. */

@@ -15,7 +15,7 @@ import java.util.stream.Collectors;
 
 /** Curves along a path as a plot. A point in doubt is a gap, and a remark says why. */
 final class Profile {
-    private static final int POINTS = 121;
+    private static final int POINTS = 61;
 
     private Profile() { }
 

@@ -17,6 +17,7 @@ import fieldwright.quantity.Vector;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.Function;
 import javax.measure.Dimension;
 
 /**
@@ -433,6 +434,11 @@ public final class Words {
             }
         }
         return new Column(quantity, unit, all);
+    }
+
+    /** One column worked from the numbers of another; not worked in a replay, whose tables nobody sees. */
+    public static Column column(String quantity, String unit, List<Amount> from, Function<Amount, Amount> value) {
+        return new Column(quantity, unit, Desk.current().mode() == Desk.Mode.REPLAY ? List.of() : from.stream().map(value).toList());
     }
 
     /** Numbers as a list: {@code amounts("0.5 m", "1 m", "H")}. */
