@@ -53,7 +53,7 @@ public final class Vector {
         Standing standing = Standing.unbounded(reason);
         Amount[] c = new Amount[3];
         for (int i = 0; i < 3; i++) {
-            double value = direction == null ? Double.NaN : direction[i] == 0 ? 0 : Math.copySign(Double.POSITIVE_INFINITY, direction[i]);
+            double value = direction == null ? Double.NaN : Math.abs(direction[i]) < 1e-9 ? 0 : Math.copySign(Double.POSITIVE_INFINITY, direction[i]);
             c[i] = new Amount(value, Double.POSITIVE_INFINITY, dimension, null, standing);
         }
         return new Vector(at, c[0], c[1], c[2], null, null, null);

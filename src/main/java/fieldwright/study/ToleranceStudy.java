@@ -91,6 +91,10 @@ public final class ToleranceStudy {
             bend += Math.abs(even) <= noise ? 0 : square(even * input.meanSquarePart());
         }
         double variance = variance(contributions);
+        double squares = contributions.values().stream().mapToDouble(ToleranceStudy::square).sum();
+        if (variance < -1e-9 * squares) {
+            return Combined.absent("the correlations stated between inputs contradict each other");
+        }
         double standard = Math.sqrt(Math.max(0, variance));
         if (Math.sqrt(bend) > BEND_LIMIT * standard) {
             return Combined.absent("the result bends over the tolerances more than it slopes: no linear combination");

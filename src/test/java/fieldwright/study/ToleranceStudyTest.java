@@ -95,6 +95,15 @@ class ToleranceStudyTest {
     }
 
     @Test
+    void contradictingCorrelationsGiveNoTolerance() {
+        var inputs = List.of(InputTolerance.limits("a", 3, 0.5), InputTolerance.limits("b", 2, 0.5), InputTolerance.limits("c", -1, 0.5));
+        Correlations impossible = Correlations.NONE.with("a", "b", -1).with("b", "c", -1).with("a", "c", -1);
+        Combined none = only(new ToleranceStudy(inputs, impossible, sheet(x -> x.get("a") + x.get("b") + x.get("c"))));
+        assertNull(none.expanded());
+        assertTrue(none.reason().contains("contradict"), none.reason());
+    }
+
+    @Test
     void absentWhenARerunDoesNotConvergeOrFails() {
         var input = List.of(InputTolerance.limits("a", 3, 0.5));
         Replay fails = changed -> changed.getOrDefault("a", 3.0) > 3.2
