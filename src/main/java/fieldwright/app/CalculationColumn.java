@@ -206,7 +206,7 @@ final class CalculationColumn {
     }
 
     private static Label tableCell(String text, String style) {
-        Label label = new Label(text.replaceAll("(?<![\\w)])-(?=\\d)", "−"));
+        Label label = new Label(Figures.prose(text).replaceAll("(?<![\\w)])-(?=\\d)", "−"));
         label.setMaxWidth(Double.MAX_VALUE);
         label.getStyleClass().add(style);
         return label;

@@ -48,7 +48,7 @@ final class ChecksLedger extends VBox {
     private static Row row(Step step, Output output) {
         boolean doubtful = step.stale() || step.isRecorded();
         if (output instanceof Output.Check check) {
-            return new Row(step.id(), check.passed(), check.passed() ? check.label() : OutputColumn.checkText(check), doubtful);
+            return new Row(step.id(), check.passed(), check.label(), doubtful);
         }
         if (output instanceof Output.Assessment a) {
             String margin = Double.isNaN(a.marginFound()) ? "no margin"
@@ -64,6 +64,7 @@ final class ChecksLedger extends VBox {
         mark.getStyleClass().add(row.passed ? "tick" : "cross");
         mark.setMinWidth(USE_PREF_SIZE);
         Button line = new Button(row.text, mark);
+        line.setMnemonicParsing(false);
         line.setWrapText(true);
         line.setMinHeight(USE_PREF_SIZE);
         line.getStyleClass().add(row.passed ? "line-holds" : "line-fails");

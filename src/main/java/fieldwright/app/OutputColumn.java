@@ -45,7 +45,7 @@ final class OutputColumn {
         if (output instanceof Output.Result result) {
             nodes.add(result(result));
         } else if (output instanceof Output.Check check) {
-            nodes.add(verdict(check.passed(), checkText(check)));
+            nodes.add(check(check));
         } else if (output instanceof Output.Assessment assessment) {
             nodes.add(assessment(assessment));
         } else if (output instanceof Output.Caution caution) {
@@ -103,8 +103,13 @@ final class OutputColumn {
         }
     }
 
-    static String checkText(Output.Check check) {
-        return check.label() + (check.detail().isEmpty() ? "" : ": " + check.detail());
+    private static Node check(Output.Check check) {
+        VBox box = new VBox(verdict(check.passed(), check.label()));
+        box.getStyleClass().add("check");
+        if (!check.detail().isEmpty()) {
+            box.getChildren().add(line(check.detail(), check.passed() ? "doubt" : "unreliable"));
+        }
+        return box;
     }
 
     private Node assessment(Output.Assessment a) {
@@ -150,7 +155,8 @@ final class OutputColumn {
     }
 
     static Label line(String text, String style) {
-        Label label = new Label(text);
+        // An error's text is left as it is: its remedy may be meant for copying.
+        Label label = new Label(style.equals("problem") ? text : Figures.prose(text));
         label.setWrapText(true);
         label.setMinHeight(Region.USE_PREF_SIZE);
         label.setMaxWidth(Double.MAX_VALUE);

@@ -10,6 +10,9 @@ class ThreeColumns extends Region {
     private final Region reference;
     private final Region calculation;
     private final Region output;
+    private double keptHeight = -1;
+    private double keptFor;
+    private double keptAt;
 
     ThreeColumns(Zoom zoom, Region reference, Region calculation, Region output) {
         this.zoom = zoom;
@@ -37,8 +40,24 @@ class ThreeColumns extends Region {
         return zoom.em(28);
     }
 
+    /** Measuring text costs most of laying out a page, and most rows do not change: the height last found is kept. */
     @Override
     protected double computePrefHeight(double width) {
+        if (keptHeight < 0 || keptFor != width || keptAt != zoom.factor()) {
+            keptHeight = measured(width);
+            keptFor = width;
+            keptAt = zoom.factor();
+        }
+        return keptHeight;
+    }
+
+    @Override
+    public void requestLayout() {
+        keptHeight = -1;
+        super.requestLayout();
+    }
+
+    private double measured(double width) {
         double w = (width < 0 ? computePrefWidth(-1) : width) - snappedLeftInset() - snappedRightInset();
         Columns c = Columns.of(w, zoom);
         double left = reference.prefHeight(c.reference());

@@ -3,6 +3,8 @@ package fieldwright.draw;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /**
  * Numbers as they stand on paper: rounded to what their doubt warrants, with real minus signs and superscripts.
@@ -163,6 +165,14 @@ public final class Figures {
     public static String written(String number) {
         int e = Math.max(number.indexOf('e'), number.indexOf('E'));
         return minus(e < 0 ? number : number.substring(0, e)) + (e < 0 ? "" : "·10" + superscript(number.substring(e + 1).replace("+", "")));
+    }
+
+    private static final Pattern POWER = Pattern.compile("(?<![\\w.])(-?\\d+(?:\\.\\d+)?)[eE]([-+]?\\d+)(?![\\w.])|(?<=[A-Za-z)])\\^(-?\\d)(?!\\d)");
+
+    /** Numbers and units within a sentence in print: {@code 1.9e-15} as 1.9·10⁻¹⁵, {@code C/m^3} as C/m³. */
+    public static String prose(String text) {
+        return POWER.matcher(text).replaceAll(m -> Matcher.quoteReplacement(m.group(3) != null ? superscript(m.group(3))
+                : written(m.group(1) + "e" + m.group(2))));
     }
 
     /** Digits and minus sign raised: "-20" as ⁻²⁰. */

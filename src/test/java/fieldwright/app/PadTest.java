@@ -218,7 +218,7 @@ class PadTest {
         Fx.run(() -> pad.workOut());
         untilIdle();
         String page = page();
-        for (String shown : List.of("59.9 µC", "277 kV/m", "all steps agree with a clean run", "endless slab within 5 %: 3.3 times",
+        for (String shown : List.of("59.9 µC", "277 kV/m", "all steps agree with a clean run", "endless slab within 5 %", "3.3 times",
                 "margin 8.6 ≥ 3", "3 MV/m holds for a plain gap", "taken: the roof is an earthed plane", "common practice, plain gap",
                 "Checks: 1 of 3 fails", "no source")) {
             assertTrue(page.contains(shown), () -> shown + " in " + page);

@@ -18,7 +18,7 @@ import java.util.List;
 import java.util.Set;
 import java.util.stream.IntStream;
 
-/** A sheet and what a run of it could give. The numbers come from a formula of one line, not from a calculation of fields. */
+/** A sheet, and what a run of it could give where a test needs no real one: numbers from a formula of one line. */
 final class Samples {
     static final String SILO = """
             fieldwright sheet 1
@@ -43,8 +43,7 @@ final class Samples {
             var headspace = cylindrical().rho("0", "R_s").phi("0", "2*pi").z("0", "H");
             var cloud = volumeCharge(headspace, "rho_0*(1 - k*(rho/R_s)^2)").under(groundPlane("z", "H"));
             var Q = cloud.totalCharge();
-            var E_roof = cloud.electricField(at("0", "0", "H")).onSide("-z").magnitude();
-            profile("height on the axis, z", "z", 0, 4, "|E|");
+            var E_roof = cloud.electricField(at("0 m", "0 m", "H")).onSide("-z").magnitude();
 
             :: derive
             Q_hand = pi*rho_0*R_s^2*H*(1 - k/2)     | the charge by hand
@@ -53,7 +52,7 @@ final class Samples {
             :: working judgement
             check("charge by hand", Q, Q_hand, 1e-9);
             check("endless slab within 5 %", E_roof, E_slab, 0.05);
-            assess(E_roof, breakdownInAir(), 3);
+            assess("breakdown of air", E_roof, airBreakdown(), 3);
             """;
 
     private Samples() { }
