@@ -72,13 +72,27 @@ final class OutputColumn {
         TextFlow name = new TextFlow(Typesetting.symbol(latex, result.name(), zoom));
         name.getStyleClass().add("letters");
         box.getChildren().add(name);
-        readings.forEach(reading -> {
+        for (Reading reading : readings) {
             TextFlow flow = new TextFlow(text(reading.part() + "  ", "soft"), text(reading.figure(), figureStyle(reading.status())));
             flow.getStyleClass().addAll("letters", "component");
             box.getChildren().add(flow);
-            addDoubt(box, reading);
-        });
+        }
+        String doubt = Reading.widestDoubt(result.value());
+        if (!doubt.isEmpty()) {
+            box.getChildren().add(line("each part " + doubt, "doubt"));
+        }
+        readings.stream().map(OutputColumn::reservation).filter(why -> !why.isEmpty()).distinct()
+                .forEach(why -> box.getChildren().add(line(why, "unreliable")));
         return box;
+    }
+
+    /** Why a number is not to be relied on; empty when it is. */
+    private static String reservation(Reading reading) {
+        return switch (reading.status()) {
+            case CONVERGED -> "";
+            case UNBOUNDED -> reading.reason();
+            case NOT_CONVERGED -> "did not converge" + (reading.reason().isEmpty() ? "" : ": " + reading.reason());
+        };
     }
 
     private TextFlow equation(String latex, String name, Reading reading) {
@@ -96,10 +110,8 @@ final class OutputColumn {
         if (!reading.doubt().isEmpty()) {
             box.getChildren().add(line(reading.doubt(), "doubt"));
         }
-        if (reading.status() != Status.CONVERGED) {
-            String why = reading.status() == Status.UNBOUNDED ? reading.reason()
-                    : "did not converge" + (reading.reason().isEmpty() ? "" : ": " + reading.reason());
-            box.getChildren().add(line(why, "unreliable"));
+        if (!reservation(reading).isEmpty()) {
+            box.getChildren().add(line(reservation(reading), "unreliable"));
         }
     }
 

@@ -32,7 +32,7 @@ final class Typesetting {
     }
 
     static PictureView plot(Output.Plot plot, Zoom zoom) {
-        double legend = plot.series().size() > 1 ? 24 : 0;
+        double legend = plot.series().size() > 1 ? 20 : 0;
         double title = plot.title().isEmpty() ? 0 : 22;
         PictureView view = new PictureView(width -> {
             double w = Math.min(PLOT_WIDTH, width);

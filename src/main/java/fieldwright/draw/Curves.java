@@ -7,6 +7,7 @@ import java.awt.BasicStroke;
 import java.awt.Color;
 import java.awt.Font;
 import java.awt.Graphics2D;
+import java.awt.font.FontRenderContext;
 import java.awt.geom.Line2D;
 import java.awt.geom.Path2D;
 import java.util.ArrayList;
@@ -19,7 +20,6 @@ import org.knowm.xchart.XYChart;
 import org.knowm.xchart.XYChartBuilder;
 import org.knowm.xchart.XYSeries;
 import org.knowm.xchart.style.AxesChartStyler;
-import org.knowm.xchart.style.Styler;
 import org.knowm.xchart.style.XYStyler;
 import org.knowm.xchart.style.markers.Marker;
 import org.knowm.xchart.style.markers.SeriesMarkers;
@@ -168,31 +168,63 @@ public final class Curves implements Picture {
 
     @Override
     public void paint(Graphics2D g) {
-        XYChart chart = new XYChartBuilder().width((int) width).height((int) height)
+        double chartHeight = height - legendHeight();
+        XYChart chart = new XYChartBuilder().width((int) width).height((int) chartHeight)
                 .xAxisTitle(x.heading()).yAxisTitle(y.heading()).title(plot.title()).build();
         style(chart.getStyler());
         List<Series> drawn = drawn();
-        for (int i = 0; i < drawn.size(); i++) {
-            addToLegend(chart, i);
-        }
         addUnseen(chart);
-        chart.paint(g, (int) width, (int) height);
+        chart.paint(g, (int) width, (int) chartHeight);
         for (int i = 0; i < drawn.size(); i++) {
             new Pen(g, chart, i).draw(drawn.get(i));
         }
+        for (Entry entry : legend()) {
+            entry.paint(g, chartHeight);
+        }
     }
 
-    /**
-     * The chart library sets out axes, headings and legend; it would start the dashes anew at every point, so the
-     * curves are drawn by {@link Pen}. A series of one point that lies outside gives the legend its line and marker.
-     */
-    private void addToLegend(XYChart chart, int i) {
-        XYSeries shown = chart.addSeries(name(series.get(i), i), x.inside(-1), y.inside(-1));
-        shown.setLineColor(COLOURS[i % COLOURS.length]);
-        shown.setLineStyle(stroke(i));
-        shown.setMarker(MARKERS[i % MARKERS.length]);
-        shown.setMarkerColor(COLOURS[i % COLOURS.length]);
+    /** A sample of a curve's line and its name, at a place below the chart. */
+    private record Entry(int curve, String label, double x, double y) {
+        void paint(Graphics2D g, double top) {
+            double middle = top + y + LEGEND_LINE / 2;
+            g.setColor(COLOURS[curve % COLOURS.length]);
+            g.setStroke(stroke(curve));
+            g.draw(new Line2D.Double(x, middle, x + SAMPLE, middle));
+            MARKERS[curve % MARKERS.length].paint(g, x + SAMPLE / 2, middle, MARKER);
+            g.setColor(Ink.INK);
+            g.setFont(FONT);
+            g.drawString(label, (float) (x + SAMPLE + 6), (float) (middle + 4));
+        }
     }
+
+    private static final Font FONT = new Font(Font.SANS_SERIF, Font.PLAIN, 11);
+    private static final double LEGEND_LINE = 18;
+    private static final double SAMPLE = 30;
+
+    /** Names of the curves below the chart, where there is more than one; on as many lines as they need. */
+    private List<Entry> legend() {
+        List<Entry> entries = new ArrayList<>();
+        double left = Math.min(44, width / 8);
+        double at = left;
+        double line = 0;
+        for (int i = 0; i < series.size() && series.size() > 1; i++) {
+            String label = name(series.get(i), i);
+            double room = SAMPLE + 6 + FONT.getStringBounds(label, CONTEXT).getWidth() + 18;
+            if (at > left && at + room > width) {
+                at = left;
+                line += LEGEND_LINE;
+            }
+            entries.add(new Entry(i, label, at, line));
+            at += room;
+        }
+        return entries;
+    }
+
+    private double legendHeight() {
+        return legend().stream().mapToDouble(e -> e.y + LEGEND_LINE + 2).max().orElse(0);
+    }
+
+    private static final FontRenderContext CONTEXT = new FontRenderContext(null, true, true);
 
     /**
      * Two points that are not seen, at uneven places. Without them the chart library takes evenly spaced data for its
@@ -201,7 +233,6 @@ public final class Curves implements Picture {
     private void addUnseen(XYChart chart) {
         double[] parts = {0.1357, 0.7283};
         XYSeries unseen = chart.addSeries(" ", x.inside(parts), y.inside(parts), null);
-        unseen.setShowInLegend(false);
         unseen.setLineColor(NOTHING);
         unseen.setMarker(SeriesMarkers.NONE);
     }
@@ -210,7 +241,10 @@ public final class Curves implements Picture {
         return new BasicStroke(1.7f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND, 4, DASHES[i % DASHES.length], 0);
     }
 
-    /** Draws one curve over the axes that the chart has laid out. */
+    /**
+     * Draws one curve over the axes that the chart library has laid out; left to itself it would start the dashes anew
+     * at every point.
+     */
     private final class Pen {
         private final Graphics2D g;
         private final XYChart chart;
@@ -279,7 +313,7 @@ public final class Curves implements Picture {
         }
     }
 
-    /** The chart library wants names that are there and differ. */
+    /** A name for every curve, even where two have the same label. */
     private String name(Series s, int i) {
         String label = s.label().isEmpty() ? plot.y().quantity() : s.label();
         boolean taken = series.subList(0, i).stream().anyMatch(o -> o.label().equals(s.label()));
@@ -287,7 +321,7 @@ public final class Curves implements Picture {
     }
 
     private void style(XYStyler style) {
-        Font font = new Font(Font.SANS_SERIF, Font.PLAIN, 11);
+        Font font = FONT;
         style.setBaseFont(font);
         style.setChartFontColor(Ink.INK);
         style.setChartBackgroundColor(NOTHING);
@@ -311,15 +345,7 @@ public final class Curves implements Picture {
         style.setChartTitleFont(font.deriveFont(Font.PLAIN, 11.5f));
         style.setChartTitleVisible(!plot.title().isEmpty());
         style.setChartTitleBoxVisible(false);
-        style.setLegendVisible(series.size() > 1);
-        style.setLegendPosition(Styler.LegendPosition.OutsideS);
-        style.setLegendLayout(Styler.LegendLayout.Horizontal);
-        style.setLegendBorderColor(NOTHING);
-        style.setLegendBackgroundColor(NOTHING);
-        style.setLegendFont(font.deriveFont(10.5f));
-        style.setLegendPadding(4);
-        style.setLegendSeriesLineLength(34);
-        style.setMarkerSize(MARKER);
+        style.setLegendVisible(false);
         style.setAntiAlias(true);
         style.setXAxisMin(x.inside(-EDGE)[0]);
         style.setXAxisMax(x.inside(1 + EDGE)[0]);

@@ -62,24 +62,18 @@ public final class Figures {
      * an unknown numerical error is said.
      */
     public static String doubt(Double tolerance, Double numericalError, Scale scale, String siUnit) {
-        String numerical = numerical(numericalError, scale, siUnit);
-        if (tolerance == null || tolerance.isNaN()) {
-            return numerical;
-        }
-        double shown = scale.shown(tolerance);
-        String spread = withUnit(roundedUp(shown, 2), scale.printed());
-        return "± " + spread + " (k = 2) · " + numerical;
+        String numerical = numericalError == null || numericalError.isNaN() ? "num. error not carried"
+                : "num. " + legible(numericalError, 1, scale, siUnit);
+        return tolerance == null || tolerance.isNaN() ? numerical
+                : "± " + legible(tolerance, 2, scale, siUnit) + " (k = 2) · " + numerical;
     }
 
-    private static String numerical(Double error, Scale scale, String siUnit) {
-        if (error == null || error.isNaN()) {
-            return "num. error not carried";
-        }
-        double shown = scale.shown(error);
-        boolean legible = shown == 0 || shown >= 1e-3 && shown < 1e4;
-        return "num. " + (legible
-                ? withUnit(roundedUp(shown, 1), scale.printed())
-                : withUnit(roundedUp(error, 1), Scale.print(siUnit)));
+    /** Rounded up, in the scale's unit where plain digits do, else in SI with a power of ten. */
+    private static String legible(double doubt, int digits, Scale scale, String siUnit) {
+        double shown = scale.shown(doubt);
+        return shown == 0 || shown >= 1e-3 && shown < 1e4
+                ? withUnit(roundedUp(shown, digits), scale.printed())
+                : withUnit(roundedUp(doubt, digits), Scale.print(siUnit));
     }
 
     private static Double shown(Double doubt, Scale scale) {
@@ -164,7 +158,7 @@ public final class Figures {
     /** A number as its author wrote it, in print: {@code 4e-3} as 4·10⁻³, a real minus sign, no digit added or lost. */
     public static String written(String number) {
         int e = Math.max(number.indexOf('e'), number.indexOf('E'));
-        return minus(e < 0 ? number : number.substring(0, e)) + (e < 0 ? "" : "·10" + superscript(number.substring(e + 1).replace("+", "")));
+        return minus(e < 0 ? number : number.substring(0, e)) + (e < 0 ? "" : "·10" + superscript(Integer.toString(Integer.parseInt(number.substring(e + 1)))));
     }
 
     private static final Pattern POWER = Pattern.compile("(?<![\\w.])(-?\\d+(?:\\.\\d+)?)[eE]([-+]?\\d+)(?![\\w.])|(?<=[A-Za-z)])\\^(-?\\d)(?!\\d)");

@@ -19,8 +19,14 @@ import java.util.stream.Stream;
  */
 public record Reading(String part, String figure, String doubt, Status status, String reason) {
 
-    /** All numbers of a value. The parts of a vector share one unit, and none shows more decimals than the largest. */
+    /**
+     * All numbers of a value. The parts of a vector share one unit, and none shows more decimals than the largest. Where
+     * no part has a number, and all for one reason, that is said once.
+     */
     public static List<Reading> of(Value value) {
+        if (value.status() == Status.UNBOUNDED && isAlike(value)) {
+            return List.of(new Reading("", "unbounded", "", Status.UNBOUNDED, value.reason()));
+        }
         Scale scale = scale(value);
         int decimals = numbers(value).filter(s -> Double.isFinite(s.value())).max(Comparator.comparingDouble(s -> Math.abs(s.value())))
                 .map(s -> Figures.decimals(s.value(), s.tolerance(), s.numericalError(), scale)).orElse(0);
@@ -29,12 +35,34 @@ public record Reading(String part, String figure, String doubt, Status status, S
         return List.copyOf(readings);
     }
 
+    /** True when all numbers have one status and one reason, and none a direction of its own to tell. */
+    private static boolean isAlike(Value value) {
+        return !(value instanceof Value.Scalar) && numbers(value).map(s -> List.of(s.status(), s.reason()))
+                .distinct().count() == 1 && numbers(value).noneMatch(s -> Double.isInfinite(s.value()));
+    }
+
     /** How the numbers of one value are shown: their unit, and the most decimals. */
     private record Rule(Scale scale, int decimals) { }
 
     /** One number in the unit chosen on the sheet, or in SI with a fitting prefix. */
     public static Reading of(Value.Scalar value) {
         return of((Value) value).get(0);
+    }
+
+    /**
+     * Bounds on the doubts of all numbers of a vector or a pair: no part has a larger tolerance or numerical error. Empty
+     * when no part has a number.
+     */
+    public static String widestDoubt(Value value) {
+        List<Value.Scalar> parts = numbers(value).filter(s -> Double.isFinite(s.value())).toList();
+        if (parts.isEmpty()) {
+            return "";
+        }
+        Double tolerance = parts.stream().allMatch(s -> s.tolerance() != null)
+                ? (Double) parts.stream().mapToDouble(Value.Scalar::tolerance).max().getAsDouble() : null;
+        Double error = parts.stream().allMatch(s -> s.numericalError() != null)
+                ? (Double) parts.stream().mapToDouble(Value.Scalar::numericalError).max().getAsDouble() : null;
+        return Figures.doubt(tolerance, error, scale(value), value.unit());
     }
 
     private static void collect(Value value, String part, Rule rule, List<Reading> readings) {

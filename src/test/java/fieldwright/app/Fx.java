@@ -14,7 +14,7 @@ import javafx.application.Platform;
 
 /** The window toolkit in tests: started once per JVM and never ended; every wait is timed. */
 final class Fx {
-    private static final long PATIENCE = 20;   // seconds
+    private static final long PATIENCE = 60;   // seconds
     private static boolean started;
 
     private Fx() { }
@@ -59,7 +59,11 @@ final class Fx {
 
     /** Waits until something holds in the window's thread. */
     static void until(String what, BooleanSupplier holds) {
-        long end = System.nanoTime() + TimeUnit.SECONDS.toNanos(PATIENCE);
+        until(what, holds, PATIENCE);
+    }
+
+    static void until(String what, BooleanSupplier holds, long seconds) {
+        long end = System.nanoTime() + TimeUnit.SECONDS.toNanos(seconds);
         while (!get(holds::getAsBoolean)) {
             if (System.nanoTime() > end) {
                 fail("waited in vain: " + what);

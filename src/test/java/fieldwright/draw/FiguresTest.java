@@ -66,6 +66,7 @@ class FiguresTest {
     void numbersWithinASentence() {
         assertEquals("agree to 1.9·10⁻¹⁵ of 2 kC/m³, name a1e5 and 3e-2x stay", Figures.prose("agree to 1.9e-15 of 2 kC/m^3, name a1e5 and 3e-2x stay"));
         assertEquals("−4·10⁻³", Figures.written("-4e-3"));
+        assertEquals("1.61·10⁶", Figures.written("1.61e+06"));
         assertEquals("1.80", Figures.written("1.80"));
     }
 

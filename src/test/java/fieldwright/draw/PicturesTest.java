@@ -90,12 +90,40 @@ class PicturesTest {
     }
 
     @Test
-    void curvesDifferInGreyToo() {
-        Series a = curve("a", 2, 1, z -> 1);
-        Series b = curve("b", 2, 1, z -> 1);
-        int solid = inked(new Curves(plot("V/m", a), 460, 230).image(1));
-        BufferedImage both = new Curves(plot("V/m", b, a), 460, 230).image(1);
-        assertTrue(inked(both) > solid, "the second curve has a dash of its own and a legend stands below");
+    void curvesDifferWithoutTheirColours() {
+        BufferedImage image = new Curves(plot("V/m", curve("a", 60, 1, z -> 1), curve("b", 60, 1, z -> 2)), 460, 230).image(1);
+        assertTrue(longestRun(image, Ink.ACCENT) > 300, "the first curve is drawn through");
+        assertTrue(longestRun(image, Ink.BAD) > 5 && longestRun(image, Ink.BAD) < 30, "the second is dashed");
+    }
+
+    /** Most pixels of a colour side by side in one row. */
+    private static int longestRun(BufferedImage image, java.awt.Color colour) {
+        int longest = 0;
+        for (int y = 0; y < image.getHeight(); y++) {
+            int run = 0;
+            for (int x = 0; x < image.getWidth(); x++) {
+                java.awt.Color c = new java.awt.Color(image.getRGB(x, y));
+                int off = Math.abs(c.getRed() - colour.getRed()) + Math.abs(c.getGreen() - colour.getGreen())
+                        + Math.abs(c.getBlue() - colour.getBlue());
+                run = off < 90 ? run + 1 : 0;
+                longest = Math.max(longest, run);
+            }
+        }
+        return longest;
+    }
+
+    @Test
+    void theLegendStandsWhereThereIsMoreThanOneCurve() {
+        Series a = curve("a", 5, 1, z -> z);
+        assertTrue(longestRun(lowest(new Curves(plot("V/m", a), 460, 230)), Ink.ACCENT) < 10);
+        assertTrue(longestRun(lowest(new Curves(plot("V/m", a, curve("b", 5, 1, z -> 2 * z)), 460, 230)), Ink.ACCENT) >= 25);
+        Series[] many = IntStream.range(0, 12).mapToObj(i -> curve("curve with a long name " + i, 5, 1, z -> i * z)).toArray(Series[]::new);
+        assertTrue(inked(new Curves(plot("V/m", many), 300, 260).image(1)) > 400, "a legend of many lines leaves room for the chart");
+    }
+
+    private static BufferedImage lowest(Curves curves) {
+        BufferedImage image = curves.image(1);
+        return image.getSubimage(0, image.getHeight() - 20, image.getWidth(), 20);
     }
 
     @ParameterizedTest

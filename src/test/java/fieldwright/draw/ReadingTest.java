@@ -36,6 +36,24 @@ class ReadingTest {
     }
 
     @Test
+    void whatNoPartHasIsSaidOnce() {
+        Value.Scalar none = new Value.Scalar(Double.NaN, null, null, "V/m", null, Status.UNBOUNDED, "on the rim");
+        assertEquals(List.of(new Reading("", "unbounded", "", Status.UNBOUNDED, "on the rim")),
+                Reading.of(new Value.Triple(none, none, none, null)));
+        Value.Scalar down = new Value.Scalar(Double.NEGATIVE_INFINITY, null, null, "V/m", null, Status.UNBOUNDED, "on the rim");
+        assertEquals("unbounded, towards −∞", Reading.of(new Value.Triple(none, none, down, null)).get(2).figure());
+    }
+
+    @Test
+    void theWidestDoubtCoversEveryPart() {
+        Value.Scalar a = new Value.Scalar(1000, 1e-6, 30.0, "V/m", null, Status.CONVERGED, "");
+        Value.Scalar b = new Value.Scalar(10, 2e-3, 1.0, "V/m", null, Status.CONVERGED, "");
+        assertEquals("± 0.030 kV/m (k = 2) · num. 0.002 V/m", Reading.widestDoubt(new Value.Triple(a, b, a, null)).replace('\u00a0', ' '));
+        Value.Scalar unknown = new Value.Scalar(10, null, null, "V/m", null, Status.CONVERGED, "");
+        assertEquals("num. error not carried", Reading.widestDoubt(new Value.Triple(a, unknown, a, null)));
+    }
+
+    @Test
     void aPairNamesItsSides() {
         Value.Triple up = new Value.Triple(scalar(0), scalar(0), scalar(1), null);
         List<Reading> parts = Reading.of(new Value.Sides("+z", up, "-z", up));
