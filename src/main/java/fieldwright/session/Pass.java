@@ -3,6 +3,7 @@ package fieldwright.session;
 import fieldwright.formula.Integrator;
 import fieldwright.integral.NestedIntegrator;
 import fieldwright.output.CellOutcome;
+import fieldwright.output.Output;
 import fieldwright.quantity.Stop;
 import fieldwright.session.snippet.CompiledSnippet;
 import fieldwright.session.snippet.Declaration;
@@ -118,7 +119,7 @@ final class Pass {
         WorkingCode compiled = cell.kind() == Cell.Kind.WORKING ? code.of(number, draft) : null;
         draft.setCode(compiled);
         CellRun before = earlier.of(number);
-        if (before != null && !forced && stands(before, compiled)) {
+        if (before != null && !forced && (stands(before, compiled) || setting.isReplay() && isForLooks(before))) {
             reused.add(number);
             return before;
         }
@@ -138,6 +139,18 @@ final class Pass {
         boolean untouched = before.kind() != Cell.Kind.INPUT
                 || before.writes().keySet().stream().noneMatch(setting.changed()::containsKey);
         return untouched && before.standsIn(names) && Objects.equals(before.code(), compiled);
+    }
+
+    /** A replay is asked for results and assessments: a cell that gives none and can change nothing is left as it was. */
+    private boolean isForLooks(CellRun before) {
+        boolean givesNumbers = before.outputs().stream().anyMatch(o -> o instanceof Output.Result || o instanceof Output.Assessment);
+        return before.kind() == Cell.Kind.WORKING && before.isComplete() && before.writes().isEmpty() && !givesNumbers
+                && before.code().snippets().stream().noneMatch(this::mayChangeSomething);
+    }
+
+    private boolean mayChangeSomething(CompiledSnippet snippet) {
+        return keepsState(snippet) || JavaReads.of(snippet).stream().map(names::get)
+                .anyMatch(used -> used != null && !Constancy.isConstant(used.value()));
     }
 
     private void requireUntouched(WorkingCode compiled, boolean fresh) {
