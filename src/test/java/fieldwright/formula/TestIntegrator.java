@@ -6,6 +6,8 @@ import org.apache.commons.math3.analysis.integration.gauss.GaussIntegratorFactor
 
 /** Nested Gauss-Legendre rules of 60 and 45 points; x = t/(1-t²) for endless limits. For tests of formulas only. */
 final class TestIntegrator implements Integrator {
+    private static final GaussIntegratorFactory RULES = new GaussIntegratorFactory();   // it keeps the rules it made
+
     @Override
     public Estimate integrate(Problem p) {
         double fine = nested(p, 60, new double[0]);
@@ -21,7 +23,7 @@ final class TestIntegrator implements Integrator {
         }
         double a = p.from().get(k).at(outer);
         double b = p.to().get(k).at(outer);
-        GaussIntegrator rule = new GaussIntegratorFactory().legendre(points, -1, 1);
+        GaussIntegrator rule = RULES.legendre(points, -1, 1);
         boolean endless = Double.isInfinite(a) || Double.isInfinite(b);
         double low = endless ? (Double.isInfinite(a) ? -1 : a / (1 + Math.sqrt(1 + a * a))) : a;
         double high = endless ? (Double.isInfinite(b) ? 1 : b / (1 + Math.sqrt(1 + b * b))) : b;
