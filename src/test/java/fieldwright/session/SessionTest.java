@@ -11,11 +11,14 @@ import fieldwright.output.CellOutcome;
 import fieldwright.output.CellOutcome.State;
 import fieldwright.output.Output;
 import fieldwright.output.RunOutcome;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.time.Duration;
 import java.util.List;
 import java.util.Queue;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.ConcurrentLinkedQueue;
+import java.util.regex.Matcher;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.TimeUnit;
 import java.util.function.Consumer;
@@ -44,17 +47,17 @@ class SessionTest {
         return session.work(sheet(cells), WorkOptions.FULL, progress -> { }).get();
     }
 
-    /** Works a sheet and stops it as soon as a cell is begun and a little time has passed. */
+    /** Works a sheet and stops it once a cell's Java runs: it leaves a mark first, since compiling takes its own time. */
     private static RunOutcome workAndStop(int cell, String... cells) throws Exception {
-        CompletableFuture<Void> begun = new CompletableFuture<>();
-        Consumer<Progress> listener = progress -> {
-            if (progress instanceof Progress.Started started && started.cell() == cell) {
-                begun.complete(null);
-            }
-        };
-        CompletableFuture<RunOutcome> run = session.work(sheet(cells), WorkOptions.FULL, listener);
-        begun.get();
-        Thread.sleep(500);
+        Path mark = Files.createTempFile("fieldwright", ".mark");
+        cells[cell - 1] = cells[cell - 1].replaceFirst("^working\n",
+                Matcher.quoteReplacement("working\njava.nio.file.Files.delete(java.nio.file.Path.of(\"" + mark.toString().replace("\\", "\\\\") + "\"));\n"));
+        CompletableFuture<RunOutcome> run = session.work(sheet(cells), WorkOptions.FULL, progress -> { });
+        while (Files.exists(mark) && !run.isDone()) {
+            Thread.sleep(10);
+        }
+        assertFalse(run.isDone(), "the cell runs until it is stopped");
+        Thread.sleep(100);
         session.stop();
         return run.get();
     }
