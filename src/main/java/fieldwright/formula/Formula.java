@@ -217,6 +217,11 @@ public final class Formula {
         return tree;
     }
 
+    /** A part of the tree, or another one over the same names, as a formula. */
+    public Formula part(Node node) {
+        return built(node, integrator);
+    }
+
     public Integrator integrator() {
         return integrator;
     }

@@ -42,9 +42,13 @@ public final class Chart {
 
         /** 1 − psi, without cancellation; for finite runs. */
         double rest(double u) {
-            double v = 1 - u;
+            return restOf(1 - u);
+        }
+
+        /** 1 − psi from v = 1 − u. */
+        double restOf(double v) {
             return switch (this) {
-                case ROOT_LOW -> v * (1 + u);
+                case ROOT_LOW -> v * (2 - v);
                 case ROOT_HIGH -> v * v;
                 case ROOT_BOTH -> v * v * (3 - 2 * v);
                 default -> v;
@@ -52,7 +56,10 @@ public final class Chart {
         }
 
         double slope(double u) {
-            double v = 1 - u;
+            return slope(u, 1 - u);
+        }
+
+        double slope(double u, double v) {
             return switch (this) {
                 case ROOT_LOW -> 2 * u;
                 case ROOT_HIGH -> 2 * v;
@@ -96,7 +103,7 @@ public final class Chart {
     }
 
     /** A base point in the unit box; offsets of nodes are taken from its position. */
-    public record Anchor(double[] u, double[] coordinates, double[] position) { }
+    public record Anchor(double[] u, double[] coordinates, double[] position, double[] slots) { }
 
     private final Nest nest;
     private final Embedding embedding;
@@ -113,6 +120,8 @@ public final class Chart {
     private final Run[] run;
     private final double[] centre;
     private final double[] scale;
+    /** The limits without cancellation; null when they are all numbers, or of another kind. */
+    private Algebraic algebraic;
 
     private Chart(Nest nest, Embedding embedding, CoordinateSystem system) {
         this.nest = nest;
@@ -166,6 +175,7 @@ public final class Chart {
         fixed = like.fixed;
         dFixed = like.dFixed;
         run = like.run;
+        algebraic = like.algebraic;
         this.centre = centre;
         this.scale = scale;
     }
@@ -179,7 +189,39 @@ public final class Chart {
         chart.checkConstants();
         chart.chooseRuns();
         chart.checkOrder();
+        chart.chooseAlgebra();
         return chart;
+    }
+
+    private void chooseAlgebra() {
+        boolean numbers = !hasFixedFormula();
+        for (int k = 0; k < dimension; k++) {
+            numbers &= hasConstantLimits(k);
+        }
+        if (numbers) {
+            return;
+        }
+        algebraic = Algebraic.of(nest, new Algebraic.Ends() {
+            @Override
+            public double[] coordinatesAt(double[] psi) {
+                double[] limits = Chart.this.limitsAt(psi);
+                double[] c = new double[names];
+                for (int k = 0; k < dimension; k++) {
+                    c[free[k]] = run[k].endless() ? centre[k] + scale[k] * (psi[k] - 0.5) : limits[2 * k] + (limits[2 * k + 1] - limits[2 * k]) * psi[k];
+                }
+                return c;
+            }
+
+            @Override
+            public double[] limitsAt(double[] psi) {
+                return Chart.this.limitsAt(psi);
+            }
+
+            @Override
+            public boolean isEndless(int depth) {
+                return run[depth].endless();
+            }
+        });
     }
 
     public int dimension() {
@@ -224,8 +266,11 @@ public final class Chart {
         return from[depth].isConstant() && to[depth].isConstant();
     }
 
-    /** True when offsets from an anchor carry no cancellation: all limits and fixed values are numbers. */
+    /** True when offsets from an anchor carry no cancellation: all limits and fixed values are numbers, or algebraic. */
     public boolean hasExactOffsets() {
+        if (algebraic != null) {
+            return embedding.isExact();
+        }
         for (int k = 0; k < dimension; k++) {
             if (!hasConstantLimits(k)) {
                 return false;
@@ -506,6 +551,9 @@ public final class Chart {
      * Errors: AuthorException when a limit is not a number there.
      */
     public Anchor anchor(double[] u) {
+        if (algebraic != null) {
+            return algebraicAnchor(u);
+        }
         double[] c = new double[names];
         double[][] block = new double[3][1];
         double[] low = new double[1];
@@ -528,7 +576,128 @@ public final class Chart {
                 c[m] = low[0];
             }
         }
-        return new Anchor(u.clone(), c, embedding.position(c));
+        return new Anchor(u.clone(), c, embedding.position(c), null);
+    }
+
+    private Anchor algebraicAnchor(double[] u) {
+        double[] c = new double[names];
+        double[] slots = new double[algebraic.slots()];
+        for (int k = 0; k < dimension; k++) {
+            algebraic.work(k, slots);
+            double low = slots[algebraic.from(k)];
+            double high = slots[algebraic.to(k)];
+            int own = Algebraic.PER_DEPTH * k;
+            if (run[k].endless()) {
+                slots[own] = centre[k] + scale[k] * run[k].psi(u[k]);
+            } else {
+                double psi = run[k].psi(Math.max(AT_END, u[k]));
+                double rest = run[k].restOf(Math.max(AT_END, 1 - u[k]));
+                slots[own + Algebraic.FROM_LOW] = (high - low) * psi;
+                slots[own + Algebraic.TO_HIGH] = (high - low) * rest;
+                slots[own] = psi <= 0.5 ? low + (high - low) * psi : high - (high - low) * rest;
+            }
+            c[free[k]] = slots[own];
+        }
+        algebraic.work(dimension, slots);
+        for (int m = 0; m < names; m++) {
+            if (fixed[m] != null) {
+                c[m] = slots[algebraic.held(m)];
+            }
+        }
+        return new Anchor(u.clone(), c, embedding.position(c), slots);
+    }
+
+    /** A parameter on an end of its range is taken this far inside, where a root and its slope are numbers. */
+    private static final double AT_END = 1e-60;
+
+    private void algebraicCoordinates(Anchor anchor, double[][] du, int n, Nodes nodes) {
+        Algebraic.Slot[] slots = nodes.slots(algebraic.slots());
+        double[] base = anchor.slots;
+        for (int k = 0; k < dimension; k++) {
+            algebraic.work(k, base, slots, n);
+            int own = Algebraic.PER_DEPTH * k;
+            int m = free[k];
+            if (run[k].endless()) {
+                coordinate(k, anchor, du[k], n, nodes);
+                System.arraycopy(nodes.c[m], 0, slots[own].value, 0, n);
+                System.arraycopy(nodes.delta[m], 0, slots[own].delta, 0, n);
+                System.arraycopy(nodes.dc[m][k], 0, slots[own].d[k], 0, n);
+                continue;
+            }
+            between(k, anchor, du[k], n, nodes, slots);
+            System.arraycopy(slots[own].value, 0, nodes.c[m], 0, n);
+            System.arraycopy(slots[own].delta, 0, nodes.delta[m], 0, n);
+            copyDerivatives(own, m, slots, n, nodes);
+        }
+        algebraic.work(dimension, base, slots, n);
+        for (int m = 0; m < names; m++) {
+            if (fixed[m] != null) {
+                Algebraic.Slot s = slots[algebraic.held(m)];
+                System.arraycopy(s.value, 0, nodes.c[m], 0, n);
+                System.arraycopy(s.delta, 0, nodes.delta[m], 0, n);
+                copyDerivatives(algebraic.held(m), m, slots, n, nodes);
+            }
+        }
+    }
+
+    private void copyDerivatives(int slot, int m, Algebraic.Slot[] slots, int n, Nodes nodes) {
+        for (int j = 0; j < dimension; j++) {
+            if (algebraic.depends(slot, j)) {
+                System.arraycopy(slots[slot].d[j], 0, nodes.dc[m][j], 0, n);
+            } else {
+                java.util.Arrays.fill(nodes.dc[m][j], 0, n, 0);
+            }
+        }
+    }
+
+    /** A coordinate between its limits, and its distances from them: c = from·(1 − psi) + to·psi. */
+    private void between(int k, Anchor anchor, double[] du, int n, Nodes nodes, Algebraic.Slot[] slots) {
+        int own = Algebraic.PER_DEPTH * k;
+        Algebraic.Slot low = slots[algebraic.from(k)];
+        Algebraic.Slot high = slots[algebraic.to(k)];
+        Algebraic.Slot c = slots[own];
+        Algebraic.Slot fromLow = slots[own + Algebraic.FROM_LOW];
+        Algebraic.Slot toHigh = slots[own + Algebraic.TO_HIGH];
+        Run r = run[k];
+        double u0 = anchor.u[k];
+        double v0 = 1 - u0;
+        double psi0 = r.psi(Math.max(AT_END, u0));
+        double rest0 = r.restOf(Math.max(AT_END, v0));
+        for (int i = 0; i < n; i++) {
+            double u = Math.max(AT_END, u0 + du[i]);
+            double v = Math.max(AT_END, v0 - du[i]);
+            double psi = r.psi(u);
+            double rest = r.restOf(v);
+            double step = r.difference(u0, du[i]);
+            double slope = r.slope(u, v);
+            double width = high.value[i] - low.value[i];
+            double grown = high.delta[i] - low.delta[i];
+            nodes.psi[i] = psi;
+            nodes.work[i] = rest;
+            c.value[i] = psi <= 0.5 ? low.value[i] + width * psi : high.value[i] - width * rest;
+            c.delta[i] = rest0 * low.delta[i] + psi0 * high.delta[i] + width * step;
+            c.d[k][i] = width * slope;
+            fromLow.value[i] = width * psi;
+            fromLow.delta[i] = width * step + psi0 * grown;
+            fromLow.d[k][i] = width * slope;
+            toHigh.value[i] = width * rest;
+            toHigh.delta[i] = rest0 * grown - width * step;
+            toHigh.d[k][i] = -width * slope;
+        }
+        for (int j = 0; j < k; j++) {
+            if (!algebraic.depends(own, j)) {
+                continue;
+            }
+            double[] lowD = algebraic.depends(algebraic.from(k), j) ? low.d[j] : null;
+            double[] highD = algebraic.depends(algebraic.to(k), j) ? high.d[j] : null;
+            for (int i = 0; i < n; i++) {
+                double a = lowD == null ? 0 : lowD[i];
+                double b = highD == null ? 0 : highD[i];
+                c.d[j][i] = nodes.work[i] * a + nodes.psi[i] * b;
+                fromLow.d[j][i] = nodes.psi[i] * (b - a);
+                toHigh.d[j][i] = nodes.work[i] * (b - a);
+            }
+        }
     }
 
     /** Limits at the nodes; where a square root has just become negative by rounding both become the finite one, or the last good value. */
@@ -611,6 +780,13 @@ public final class Chart {
     public void evaluate(Anchor anchor, double[][] du, int n, Nodes nodes) {
         java.util.Arrays.fill(nodes.rounding, 0, n, 0);
         java.util.Arrays.fill(nodes.relative, 0, n, 0);
+        if (algebraic != null) {
+            algebraicCoordinates(anchor, du, n, nodes);
+            embedding.embed(anchor.coordinates, anchor.position, nodes, n);
+            tangents(n, nodes);
+            measure(n, nodes);
+            return;
+        }
         for (int k = 0; k < dimension; k++) {
             coordinate(k, anchor, du[k], n, nodes);
         }

@@ -20,6 +20,19 @@ public final class Nodes {
     /** Times the unit roundoff: relative rounding of widths and slopes that follow from such limits. */
     public final double[] relative = new double[BLOCK];
 
+    private Algebraic.Slot[] slots = {};
+
+    Algebraic.Slot[] slots(int count) {
+        if (slots.length < count) {
+            int had = slots.length;
+            slots = java.util.Arrays.copyOf(slots, count);
+            for (int i = had; i < count; i++) {
+                slots[i] = new Algebraic.Slot();
+            }
+        }
+        return slots;
+    }
+
     private Nodes single;
 
     /** Scratch for one node beside this block. */
