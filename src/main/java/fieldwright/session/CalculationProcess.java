@@ -48,6 +48,9 @@ public final class CalculationProcess {
         Thread worker = new Thread(null, this::work, "worker", STACK_BYTES);
         worker.setDaemon(true);
         worker.start();
+        Thread warming = new Thread(WarmUp::run, "warming up");
+        warming.setDaemon(true);
+        warming.start();
         try {
             pipe.send(new Reply.Ready());
             while (true) {

@@ -6,6 +6,7 @@ import java.io.BufferedOutputStream;
 import java.io.IOException;
 import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.TimeUnit;
 
@@ -15,6 +16,12 @@ final class Child {
     private static final int OUT_OF_MEMORY = 3;
     private static final int KILLED = 128 + 9;
     private static final int LAST_WORDS = 2000;
+    /**
+     * The optimising compiler waits twenty times as long as it would by itself. Most sheets are worked before its code would
+     * pay, and it takes a core from the sheet; one that computes for long still gets it.
+     */
+    private static final List<String> LATE_OPTIMISING = List.of("-XX:Tier4InvocationThreshold=100000",
+            "-XX:Tier4MinInvocationThreshold=12000", "-XX:Tier4CompileThreshold=300000", "-XX:Tier4BackEdgeThreshold=800000");
 
     private final Process process;
     private final Pipe pipe;
@@ -34,11 +41,14 @@ final class Child {
     /** Starts one with the Java and the class path of this process, from a directory or a jar alike, and waits until it answers. */
     static Child start(SessionOptions options) throws IOException {
         String java = System.getProperty("java.home") + "/bin/java";
-        Process process = new ProcessBuilder(List.of(java, "-Xmx" + options.heapMegabytes() + "m", "-XX:+UseSerialGC",
-                "-XX:+ExitOnOutOfMemoryError", "-XX:+DisplayVMOutputToStderr", "-Djava.awt.headless=true", "-Dfile.encoding=UTF-8",
+        List<String> command = new ArrayList<>(List.of(java, "-Xmx" + options.heapMegabytes() + "m", "-XX:+UseSerialGC"));
+        command.addAll(LATE_OPTIMISING);
+        command.addAll(List.of("-XX:+ExitOnOutOfMemoryError", "-XX:+DisplayVMOutputToStderr", "-Djava.awt.headless=true",
+                "-Dfile.encoding=UTF-8",
                 // the compiler's messages are read and put into the author's terms: they must come in one language
                 "-Duser.language=en", "-Duser.country=", "-cp", SnippetCompiler.absoluteClassPath(),
-                CalculationProcess.class.getName())).start();
+                CalculationProcess.class.getName()));
+        Process process = new ProcessBuilder(command).start();
         Child child = new Child(process, options.heapMegabytes());
         try {
             child.pipe.receive(Reply.Ready.class);
