@@ -188,7 +188,7 @@ final class CalculationColumn {
         GridPane grid = new GridPane();
         grid.getStyleClass().add("table");
         for (int c = 0; c < table.headings().size(); c++) {
-            grid.add(tableCell(table.headings().get(c), "table-heading"), c, 0);
+            grid.add(tableCell(Figures.letters(table.headings().get(c)), "table-heading"), c, 0);
         }
         for (int r = 0; r < table.rows().size(); r++) {
             for (int c = 0; c < table.headings().size(); c++) {

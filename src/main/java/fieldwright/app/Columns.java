@@ -10,7 +10,7 @@ record Columns(double reference, double calculation, double output, boolean stac
         double letters = width / zoom.em(1);
         boolean wide = letters > 66;
         double reference = zoom.em(wide ? 11 : letters > 44 ? 8.5 : 7);
-        double output = zoom.em(wide ? 17 : 14.5);
+        double output = zoom.em(wide ? 18 : 14.5);
         double calculation = width - reference - output;
         boolean stacked = calculation < zoom.em(21);
         return stacked ? new Columns(reference, width - reference, width - reference, true)

@@ -103,7 +103,7 @@ final class InputsLedger extends VBox {
             }
             HBox value = new HBox(field, unit);
             value.getStyleClass().add("ledger-value");
-            Label tolerance = new Label(CalculationColumn.printedTolerance(row.tolerance));
+            Label tolerance = new Label(CalculationColumn.printedTolerance(row.tolerance.replaceFirst("\\s*\\(.*", "")));
             tolerance.getStyleClass().add("ledger-tolerance");
             tolerance.setMinWidth(USE_PREF_SIZE);
             table.addRow(i, Typesetting.symbol(Notation.name(row.name), row.name, zoom), value);
@@ -139,7 +139,7 @@ final class InputsLedger extends VBox {
             }
         });
         String source = entries.get(i).source();
-        Tooltip.install(field, new Tooltip(entries.get(i).description() + (source.isEmpty() ? " · no source" : " · " + source)));
+        Tooltip.install(field, new Tooltip(CalculationColumn.printed(entries.get(i).definition()) + " · " + entries.get(i).description() + (source.isEmpty() ? " · no source" : " · " + source)));
         return field;
     }
 

@@ -7,6 +7,7 @@ import fieldwright.output.Output;
 import fieldwright.output.Status;
 import fieldwright.output.Value;
 import java.util.List;
+import java.util.Map;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
 import javafx.scene.layout.Region;
@@ -17,9 +18,15 @@ import javafx.scene.text.TextFlow;
 /** Fills the Output column of a step: results, judgements, cautions, problems. Nothing here can be folded away. */
 final class OutputColumn {
     private final Zoom zoom;
+    private final Map<String, Double> expected;
 
-    OutputColumn(Zoom zoom) {
+    /**
+     * @param expected while tolerances are still being worked, those found last by the results' names: new results are
+     *                 shown to as many digits, so that nothing jumps twice; empty otherwise
+     */
+    OutputColumn(Zoom zoom, Map<String, Double> expected) {
         this.zoom = zoom;
+        this.expected = expected;
     }
 
     /** @param working true while this step is being worked out */
@@ -62,28 +69,51 @@ final class OutputColumn {
     private Node result(Output.Result result) {
         VBox box = new VBox();
         box.getStyleClass().add("result");
-        List<Reading> readings = Reading.of(result.value());
+        Value value = provisional(result);
+        List<Reading> readings = Reading.of(value);
         String latex = result.latexName().isEmpty() ? Notation.name(result.name()) : result.latexName();
+        boolean pending = value != result.value();
         if (readings.size() == 1) {
             box.getChildren().add(equation(latex, result.name(), readings.get(0)));
-            addDoubt(box, readings.get(0));
-            return box;
-        }
-        TextFlow name = new TextFlow(Typesetting.symbol(latex, result.name(), zoom));
-        name.getStyleClass().add("letters");
-        box.getChildren().add(name);
-        for (Reading reading : readings) {
-            TextFlow flow = new TextFlow(text(reading.part() + "  ", "soft"), text(reading.figure(), figureStyle(reading.status())));
-            flow.getStyleClass().addAll("letters", "component");
-            box.getChildren().add(flow);
-        }
-        String doubt = Reading.widestDoubt(result.value());
-        if (!doubt.isEmpty()) {
-            box.getChildren().add(line("each part " + doubt, "doubt"));
+            addDoubt(box, readings.get(0).doubt(), pending);
+        } else {
+            TextFlow name = new TextFlow(Typesetting.symbol(latex, result.name(), zoom));
+            name.getStyleClass().add("letters");
+            box.getChildren().add(name);
+            readings.forEach(reading -> box.getChildren().add(component(reading)));
+            String doubt = Reading.widestDoubt(value);
+            addDoubt(box, doubt.isEmpty() ? "" : "each part " + doubt, pending);
         }
         readings.stream().map(OutputColumn::reservation).filter(why -> !why.isEmpty()).distinct()
                 .forEach(why -> box.getChildren().add(line(why, "unreliable")));
         return box;
+    }
+
+    /** The value with the tolerance it had last, while the new one is being worked; the value itself otherwise. */
+    private Value provisional(Output.Result result) {
+        Double last = expected.get(result.name());
+        if (last == null) {
+            return result.value();
+        }
+        if (result.value() instanceof Value.Scalar s && s.tolerance() == null) {
+            return s.withTolerance(last);
+        }
+        if (result.value() instanceof Value.Triple t && t.x().tolerance() == null) {
+            return new Value.Triple(t.x().withTolerance(last), t.y().withTolerance(last), t.z().withTolerance(last), t.place());
+        }
+        return result.value();
+    }
+
+    private static Node component(Reading reading) {
+        TextFlow flow = new TextFlow(text(reading.part() + "  ", "soft"), text(reading.figure(), figureStyle(reading.status())));
+        flow.getStyleClass().addAll("letters", "component");
+        return flow;
+    }
+
+    private static void addDoubt(VBox box, String doubt, boolean pending) {
+        if (!doubt.isEmpty()) {
+            box.getChildren().add(line(pending ? doubt.replaceFirst("± .*? \\(k", "± … (k") : doubt, "doubt"));
+        }
     }
 
     /** Why a number is not to be relied on; empty when it is. */
@@ -106,15 +136,6 @@ final class OutputColumn {
         return status == Status.CONVERGED ? "figure" : "figure-doubtful";
     }
 
-    private static void addDoubt(VBox box, Reading reading) {
-        if (!reading.doubt().isEmpty()) {
-            box.getChildren().add(line(reading.doubt(), "doubt"));
-        }
-        if (!reservation(reading).isEmpty()) {
-            box.getChildren().add(line(reservation(reading), "unreliable"));
-        }
-    }
-
     private static Node check(Output.Check check) {
         VBox box = new VBox(verdict(check.passed(), check.label()));
         box.getStyleClass().add("check");
@@ -128,7 +149,7 @@ final class OutputColumn {
         VBox box = new VBox();
         box.getStyleClass().add("assessment");
         box.getChildren().add(verdict(a.passed(), a.label()));
-        box.getChildren().add(line(assessmentText(a), "judged"));
+        box.getChildren().add(line(assessmentText(a, !expected.isEmpty()), "judged"));
         if (a.status() != Status.CONVERGED) {
             Value.Scalar doubtful = a.worstCase() != null && a.value().status() == Status.CONVERGED ? a.worstCase() : a.value();
             box.getChildren().add(line(doubtful.status() == Status.UNBOUNDED ? "unbounded: " + doubtful.reason()
@@ -139,15 +160,15 @@ final class OutputColumn {
     }
 
     /** {@code worst case 350 kV/m of 3 MV/m: margin 8.6 ≥ 3}. */
-    static String assessmentText(Output.Assessment a) {
+    static String assessmentText(Output.Assessment a, boolean pending) {
         Value.Scalar judged = a.worstCase() == null ? a.value() : a.worstCase();
         String what = a.worstCase() == null ? "value " : "worst case ";
-        String of = what + Reading.of(judged.withTolerance(null)).figure() + " against " + brief(a.threshold());
+        String of = what + Reading.worst(judged) + " against " + brief(a.threshold());
         if (Double.isNaN(a.marginFound())) {
             return of + ": no margin can be given, " + Figures.brief(a.marginAsked(), 3) + " asked";
         }
         return of + ": margin " + Figures.significant(a.marginFound(), 2) + (a.passed() ? " ≥ " : ", asked ") + Figures.brief(a.marginAsked(), 3)
-                + (a.worstCase() == null ? " (worst case of the inputs not established)" : "");
+                + (a.worstCase() != null ? "" : pending ? " (worst case being worked)" : " (worst case of the inputs not established)");
     }
 
     private static String brief(Value.Scalar threshold) {

@@ -161,7 +161,7 @@ final class Pad extends BorderPane {
 
     private void show() {
         title.show(desk.sheet().header());
-        page.show(shown(), desk.sheetProblems(), folded, waiting ? bench.reached() : 0);
+        page.show(shown(), desk.sheetProblems(), folded, waiting ? bench.reached() : 0, bench.isBusy());
         inputs.show(desk.steps());
         checks.show(desk.steps());
         bar.show();

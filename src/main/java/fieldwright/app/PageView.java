@@ -44,8 +44,13 @@ final class PageView extends VBox {
         return new VBox(new Label(text));
     }
 
-    /** Shows the steps; rows of steps that did not change are left as they are. */
-    void show(List<Step> steps, List<Output.Problem> sheetProblems, boolean folded, int workingNow) {
+    /**
+     * Shows the steps; rows of steps that did not change are left as they are.
+     *
+     * @param workingNow number of the step that is marked as being worked; 0 for none
+     * @param pending    true while tolerances may still come
+     */
+    void show(List<Step> steps, List<Output.Problem> sheetProblems, boolean folded, int workingNow, boolean pending) {
         problems.getChildren().setAll(sheetProblems.stream().map(p -> (Node) OutputColumn.line(p.text(), "problem")).toList());
         problems.setManaged(!sheetProblems.isEmpty());
         Map<String, Value> quotable = quotable(steps);
@@ -53,7 +58,7 @@ final class PageView extends VBox {
         Set<Long> kept = new HashSet<>();
         for (Step step : steps) {
             StepView view = views.computeIfAbsent(step.id(), id -> new StepView(id, zoom, actions));
-            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? step.filled(name -> figures(quotable.get(name))) : "", folded, step.number() == workingNow);
+            view.show(step, step.cell().kind() == Cell.Kind.NOTE ? step.filled(name -> figures(quotable.get(name))) : "", folded, step.number() == workingNow, pending);
             view.setAtHand(step.id() == atHand);
             now.add(view);
             kept.add(step.id());

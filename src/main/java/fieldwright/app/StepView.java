@@ -1,9 +1,12 @@
 package fieldwright.app;
 
 import fieldwright.output.Output;
+import fieldwright.output.Value;
 import fieldwright.sheet.Cell;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Objects;
 import javafx.css.PseudoClass;
 import javafx.scene.AccessibleRole;
@@ -29,6 +32,8 @@ final class StepView extends ThreeColumns {
     private Step step;
     private boolean folded;
     private boolean working;
+    private boolean pending;
+    private final Map<String, Double> tolerances = new HashMap<>();
     private String note = "";
     private CellEditor editor;
     private TextField labelField;
@@ -80,8 +85,12 @@ final class StepView extends ThreeColumns {
         return editor;
     }
 
-    /** @param note the CommonMark of a note with its results filled in */
-    void show(Step now, String note, boolean folded, boolean working) {
+    /**
+     * @param note    the CommonMark of a note with its results filled in
+     * @param working true while this step is being worked
+     * @param pending true while tolerances may still come
+     */
+    void show(Step now, String note, boolean folded, boolean working, boolean pending) {
         Step before = step;
         boolean first = before == null;
         boolean text = first || before.cell().kind() != now.cell().kind() || !before.cell().source().equals(now.cell().source())
@@ -89,11 +98,15 @@ final class StepView extends ThreeColumns {
         boolean results = first || !before.outputs().equals(now.outputs());
         boolean head = first || before.number() != now.number() || !before.cell().label().equals(now.cell().label());
         boolean state = first || before.stale() != now.stale() || working != this.working || before.isRecorded() != now.isRecorded()
-                || !Objects.equals(state(before), state(now));
+                || !Objects.equals(state(before), state(now)) || pending != this.pending && !now.all(Output.Result.class).isEmpty();
         step = now;
         this.note = note;
         this.folded = folded;
         this.working = working;
+        this.pending = pending;
+        if (results && before != null) {
+            keepTolerances(before);
+        }
         if (text || head || results) {
             fillReference();
         }
@@ -101,11 +114,21 @@ final class StepView extends ThreeColumns {
             fillCalculation();
         }
         if (results || state || text) {
-            new OutputColumn(zoom).fill(output, now, working);
+            new OutputColumn(zoom, pending ? tolerances : Map.of()).fill(output, now, working);
         }
         pseudoClassStateChanged(STALE, now.stale());
         if (first || head || text) {
             setAccessibleText("step " + now.number() + ", " + now.cell().kind().word() + " " + now.cell().label());
+        }
+    }
+
+    private void keepTolerances(Step step) {
+        for (Output.Result result : step.all(Output.Result.class)) {
+            Value value = result.value();
+            List<Value.Scalar> numbers = value instanceof Value.Scalar s ? List.of(s)
+                    : value instanceof Value.Triple t ? List.of(t.x(), t.y(), t.z()) : List.of();
+            numbers.stream().map(Value.Scalar::tolerance).filter(Objects::nonNull).max(Double::compare)
+                    .ifPresent(widest -> tolerances.put(result.name(), widest));
         }
     }
 

@@ -315,7 +315,7 @@ public final class Curves implements Picture {
 
     /** A name for every curve, even where two have the same label. */
     private String name(Series s, int i) {
-        String label = s.label().isEmpty() ? plot.y().quantity() : s.label();
+        String label = Figures.letters(s.label().isEmpty() ? plot.y().quantity() : s.label());
         boolean taken = series.subList(0, i).stream().anyMatch(o -> o.label().equals(s.label()));
         return taken ? label + " (" + (i + 1) + ")" : label.isEmpty() ? "curve " + (i + 1) : label;
     }
@@ -374,9 +374,10 @@ public final class Curves implements Picture {
             Scale whole = scale(largest, axis.unit());
             double offset = narrow ? offset(least, spread, whole) : 0;
             Scale scale = narrow ? scale(Math.max(Math.abs(least - offset), Math.abs(most - offset)), axis.unit()) : whole;
+            String name = Figures.letters(axis.quantity());
             String quantity = narrow
-                    ? "(" + axis.quantity() + " − " + Figures.withUnit(Figures.brief(whole.shown(offset), 16), whole.printed()) + ")"
-                    : axis.quantity();
+                    ? "(" + name + " − " + Figures.withUnit(Figures.brief(whole.shown(offset), 16), whole.printed()) + ")"
+                    : name;
             double from = scale.shown(least - offset);
             double to = scale.shown(most - offset);
             return fromZero ? round(scale.heading(quantity), offset, scale.factor(), from, to)
@@ -409,7 +410,7 @@ public final class Curves implements Picture {
                 low -= half;
                 high += half;
             }
-            double step = step((high - low) / 4);
+            double step = step((high - low) / 6);
             return new Ruler(heading, offset, factor, Math.floor(low / step + 1e-9) * step, Math.ceil(high / step - 1e-9) * step);
         }
 

@@ -3,6 +3,7 @@ package fieldwright.draw;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
+import java.util.Map;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
@@ -63,9 +64,9 @@ public final class Figures {
      */
     public static String doubt(Double tolerance, Double numericalError, Scale scale, String siUnit) {
         String numerical = numericalError == null || numericalError.isNaN() ? "num. error not carried"
-                : "num. " + legible(numericalError, 1, scale, siUnit);
+                : "num.\u00a0" + legible(numericalError, 1, scale, siUnit);
         return tolerance == null || tolerance.isNaN() ? numerical
-                : "± " + legible(tolerance, 2, scale, siUnit) + " (k = 2) · " + numerical;
+                : "± " + legible(tolerance, 2, scale, siUnit) + " (k\u00a0=\u00a02) · " + numerical;
     }
 
     /** Rounded up, in the scale's unit where plain digits do, else in SI with a power of ten. */
@@ -129,7 +130,18 @@ public final class Figures {
         return fixed(d.doubleValue(), Math.max(0, d.scale()));
     }
 
-    /** A doubt rounded away from zero to so many digits. */
+    private static final Pattern GREEK = Pattern.compile("\\b(alpha|beta|gamma|delta|epsilon|eta|theta|lambda|mu|nu|rho|sigma|tau|phi|psi|omega)(?=\\b|_)");
+    private static final Map<String, String> LETTERS = Map.ofEntries(Map.entry("alpha", "α"), Map.entry("beta", "β"),
+            Map.entry("gamma", "γ"), Map.entry("delta", "δ"), Map.entry("epsilon", "ε"), Map.entry("eta", "η"), Map.entry("theta", "θ"),
+            Map.entry("lambda", "λ"), Map.entry("mu", "μ"), Map.entry("nu", "ν"), Map.entry("rho", "ρ"), Map.entry("sigma", "σ"),
+            Map.entry("tau", "τ"), Map.entry("phi", "φ"), Map.entry("psi", "ψ"), Map.entry("omega", "ω"));
+
+    /** Names in plain print, where nothing can be typeset: {@code rho_0} as ρ_0. */
+    public static String letters(String text) {
+        return GREEK.matcher(text).replaceAll(m -> LETTERS.get(m.group(1)));
+    }
+
+    /** A doubt, or a value at its worst, rounded away from zero to so many digits. */
     public static String roundedUp(double doubt, int digits) {
         if (doubt == 0 || !Double.isFinite(doubt)) {
             return fixed(doubt, 0);

@@ -50,6 +50,18 @@ public record Reading(String part, String figure, String doubt, Status status, S
     }
 
     /**
+     * A number at its worst: three digits, rounded away from zero, so that what is shown is never milder than what was
+     * found. Without its doubt.
+     */
+    public static String worst(Value.Scalar value) {
+        if (!Double.isFinite(value.value())) {
+            return of(value).figure();
+        }
+        Scale scale = scale(value);
+        return Figures.withUnit(Figures.roundedUp(scale.shown(value.value()), 3), scale.printed());
+    }
+
+    /**
      * Bounds on the doubts of all numbers of a vector or a pair: no part has a larger tolerance or numerical error. Empty
      * when no part has a number.
      */

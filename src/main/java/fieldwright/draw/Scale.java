@@ -33,7 +33,8 @@ public record Scale(String unit, double factor) {
 
     /**
      * The SI unit with the prefix that brings the largest magnitude between 1 and 1000, where the unit's first symbol
-     * takes a prefix (V/m, C/m^3, not m^2, kg, 1/m); the unit itself otherwise. Lengths stop at km.
+     * takes a prefix (V/m, C/m^3, not m^2, kg, 1/m); the unit itself otherwise. Lengths and times keep m and s from a
+     * hundredth to ten thousand, as drawings do.
      *
      * @param largest largest magnitude to show, in the SI unit; 0 or not finite leaves the unit as it is
      */
@@ -45,8 +46,11 @@ public record Scale(String unit, double factor) {
         }
         // The small excess keeps 0.9999999999 kV/m, a rounded 1, out of the 999.9999 V/m bracket.
         int step = (int) Math.floor((Math.log10(magnitude) + 1e-9) / 3) * 3;
-        int highest = plain.unit.equals("m") || plain.unit.equals("s") ? (plain.unit.equals("s") ? 0 : 3) : 12;
-        int power = Math.max(-18, Math.min(highest, step));
+        boolean everyday = plain.unit.equals("m") || plain.unit.equals("s");
+        if (everyday && magnitude >= 0.01 && magnitude < 1e4) {
+            return plain;
+        }
+        int power = Math.max(-18, Math.min(plain.unit.equals("s") ? 0 : plain.unit.equals("m") ? 3 : 12, step));
         return new Scale(PREFIXES.get(power) + plain.unit, Double.parseDouble("1e" + power));
     }
 

@@ -87,6 +87,8 @@ class FiguresTest {
         assertEquals(new Scale("kV/m", 1e3), Scale.fitting(277e3, "V/m"));
         assertEquals(new Scale("pC", 1e-12), Scale.fitting(3e-12, "C"));
         assertEquals(new Scale("km", 1e3), Scale.fitting(5e9, "m"));
+        assertEquals(Scale.plain("m"), Scale.fitting(0.957, "m"));
+        assertEquals(new Scale("mm", 1e-3), Scale.fitting(0.004, "m"));
         assertEquals(Scale.plain("m^2"), Scale.fitting(1e-9, "m^2"));
         assertEquals(Scale.plain("kV/m"), Scale.fitting(1e-9, "kV/m"));
         assertEquals(Scale.plain("kg"), Scale.fitting(1e-9, "kg"));

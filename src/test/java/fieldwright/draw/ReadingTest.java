@@ -45,6 +45,13 @@ class ReadingTest {
     }
 
     @Test
+    void theWorstIsNeverShownMilder() {
+        assertEquals("350\u00a0kV/m", Reading.worst(scalar(349451)));
+        assertEquals("−350\u00a0kV/m", Reading.worst(scalar(-349451)));
+        assertEquals("3.00\u00a0MV/m", Reading.worst(scalar(3e6)));
+    }
+
+    @Test
     void theWidestDoubtCoversEveryPart() {
         Value.Scalar a = new Value.Scalar(1000, 1e-6, 30.0, "V/m", null, Status.CONVERGED, "");
         Value.Scalar b = new Value.Scalar(10, 2e-3, 1.0, "V/m", null, Status.CONVERGED, "");
