@@ -67,6 +67,14 @@ final class Compiled {
                 Reduction r = Reduction.of(c, density);
                 kernel = r.kernel;
                 reduced = r.region;
+                List<Kinked> parts = kernel == Kernel.POINT ? Kinked.parts(c, density) : List.of();
+                if (parts.size() > 1) {
+                    checkUnit(c.charts().get(0).chart(), density, dimension);
+                    for (Kinked part : parts) {
+                        patches.add(patch(part.region().charts().get(0).chart(), frame, part.density(), dimension, kernel, false));
+                    }
+                    return;
+                }
             }
             for (Region.PlacedChart part : region instanceof TriangleRegion t ? t.parallelogram() : reduced.charts()) {
                 Frame all = frame.isOwn() ? part.frame() : part.frame().then(frame);
@@ -75,13 +83,28 @@ final class Compiled {
         }
     }
 
-    private static Patch patch(Chart chart, Frame frame, Formula stated, int dimension, Kernel kernel, boolean triangle) {
-        checkUnit(chart, stated, dimension);
-        Formula density = stated.isGuarded() ? holdingEverywhere(stated, chart, triangle) : stated;
+    private static Patch patch(Chart plain, Frame frame, Formula stated, int dimension, Kernel kernel, boolean triangle) {
+        checkUnit(plain, stated, dimension);
+        Formula density = stated.isGuarded() ? holdingEverywhere(stated, plain, triangle) : stated;
+        Chart chart = plain.dimension() == 3 ? suited(plain, density) : plain;
         NodeFunction weight = NodeFunction.of(density, chart);
         SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
         double[][] breaks = RegionIntegral.breaks(chart, density);
         return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks, triangle);
+    }
+
+    /** The chart itself, or with rho or r run as a square where only then a density of it alone is resolved: sqrt(rho). */
+    private static Chart suited(Chart chart, Formula density) {
+        if (NodeFunction.isSmooth(density)) {
+            return chart;
+        }
+        for (int k = 0; k < chart.dimension(); k++) {
+            Chart squared = chart.squared(k);
+            if (squared != null && chart.resolvingCuts(density, k) == null && squared.resolvingCuts(density, k) != null) {
+                return squared;
+            }
+        }
+        return chart;
     }
 
     /**

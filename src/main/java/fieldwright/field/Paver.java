@@ -1105,6 +1105,10 @@ final class Paver {
         for (int k = 0; k < 3; k++) {
             speed[k] = Math.sqrt(size2(s.tangent(k), 0));
         }
+        for (int k = 0; k < 3; k++) {
+            double mean = meanSpeed(s, foot, from, to, k);
+            speed[k] = speed[k] < 0.01 * mean ? mean : speed[k];
+        }
         for (int depth = 0; depth < 3; depth++) {
             for (int side = 0; side < 2; side++) {
                 double reach = (side == 1 ? to[depth] : from[depth]) - at[depth];
@@ -1128,6 +1132,20 @@ final class Paver {
                 }
             }
         }
+    }
+
+    /** Way per parameter towards the further end: what counts at an end where a coordinate starts as a square. */
+    private double meanSpeed(Sampler s, Chart.Anchor foot, double[] from, double[] to, int k) {
+        double down = from[k] - foot.u()[s.axes[k]];
+        double up = to[k] - foot.u()[s.axes[k]];
+        double step = up > -down ? up : down;
+        for (double[] du : space.du) {
+            du[0] = 0;
+        }
+        space.du[k][0] = step;
+        Nodes nodes = s.place(foot, space.du, 1);
+        double[][] o = nodes.offset;
+        return Math.sqrt(o[0][0] * o[0][0] + o[1][0] * o[1][0] + o[2][0] * o[2][0]) / Math.abs(step);
     }
 
     private double[] footInVolume(Sampler s, double[] from, double[] to, double[] guess) {

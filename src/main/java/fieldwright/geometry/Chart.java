@@ -174,7 +174,7 @@ public final class Chart {
         dTo = like.dTo;
         fixed = like.fixed;
         dFixed = like.dFixed;
-        run = like.run;
+        run = like.run.clone();
         algebraic = like.algebraic;
         this.centre = centre;
         this.scale = scale;
@@ -286,6 +286,39 @@ public final class Chart {
         }
         double a = from[depth].constant();
         return run[depth].inverse((coordinate - a) / (to[depth].constant() - a));
+    }
+
+    /** The coordinate at a parameter in [0, 1]; finite constant limits only. */
+    double coordinateAt(int depth, double u) {
+        double a = from[depth].constant();
+        double b = to[depth].constant();
+        double psi = run[depth].psi(u);
+        return psi <= 0.5 ? a + (b - a) * psi : b - (b - a) * run[depth].rest(u);
+    }
+
+    /**
+     * Interior parameters at which a function of the coordinate of this depth alone is to be cut so that it is as good as a polynomial
+     * between; null when it is not, or when it is no such function.
+     */
+    public double[] resolvingCuts(Formula f, int depth) {
+        String name = coordinates().get(free[depth]);
+        boolean alone = f.variables().size() == 1 && f.variables().contains(name);
+        return alone && hasConstantLimits(depth) && !run[depth].endless() && lower(depth) < upper(depth) ? Resolved.cuts(f, this, depth) : null;
+    }
+
+    /**
+     * This chart with a coordinate that starts at an axis or origin running as the square of its parameter, for functions of its
+     * square root; null when it does not start there plainly.
+     */
+    public Chart squared(int depth) {
+        String name = coordinates().get(free[depth]);
+        boolean axis = system != null && (name.equals("rho") || name.equals("r"));
+        if (!axis || run[depth] != Run.PLAIN || !hasConstantLimits(depth) || lower(depth) != 0) {
+            return null;
+        }
+        Chart chart = new Chart(this, centre, scale);
+        chart.run[depth] = Run.ROOT_LOW;
+        return chart;
     }
 
     public double lower(int depth) {

@@ -52,12 +52,16 @@ public final class NodeFunction {
         }
         NodeFunction f = new NodeFunction(formula, formula.compile(used), used, own);
         f.kinksAreCut = kinksAreCut(formula, chart);
+        for (int k = 0; k < chart.dimension(); k++) {
+            f.resolved |= !isSmooth(formula) && chart.resolvingCuts(formula, k) != null;
+        }
         return f;
     }
 
     /**
      * Whether the formula is known to be smooth along the chart: over its own coordinates or x, y, z only, a polynomial or without roots,
-     * powers, quotients, logarithms and anything with a kink. A false answer means not known.
+     * powers, quotients, logarithms and anything with a kink; or of one own coordinate and resolved between cuts. A false answer means
+     * not known.
      */
     public boolean isSmooth() {
         if (constant || smooth != null) {
@@ -67,8 +71,8 @@ public final class NodeFunction {
         for (int k = 0; k < own.length; k++) {
             found &= own[k] >= 0 || List.of("x", "y", "z").contains(used.get(k));
         }
-        smooth = found;
-        return found;
+        smooth = found || resolved;
+        return smooth;
     }
 
     /** Whether a formula is known to be smooth in its variables: a polynomial, or without roots, powers, quotients, logarithms and kinks. */
@@ -125,6 +129,8 @@ public final class NodeFunction {
     }
 
     private Boolean smooth;
+    /** A function of one coordinate that is as good as a polynomial between the cuts of the chart. */
+    private boolean resolved;
     /** Every kink is a value of one coordinate with constant limits, where integrals over the chart are cut. */
     private boolean kinksAreCut;
 

@@ -87,7 +87,8 @@ public final class GaussLegendre {
      * to {@code error}. Pairs of coefficients are taken together because one of each pair vanishes for even or odd functions; the
      * decay is that of all components together. The rule's error is the function's coefficient near degree 2·order, so a geometric
      * decay is carried on over part of that distance; without decay the last coefficients themselves are the estimate.
-     * Returns the decay per two degrees, 1 when there is none: errors go about as decay^(0.9·order).
+     * Returns the decay per two degrees, 1 when there is none: errors go about as decay^(0.9·order). Where smoothness is not known
+     * the last coefficients are the estimate and go as their own decay^(0.5·order), which is put in these terms.
      */
     double errors(double[][] weighted, int components, boolean smooth, double[] noise, double[] error) {
         double[] last = new double[components];
@@ -115,7 +116,7 @@ public final class GaussLegendre {
         for (int c = 0; c < components; c++) {
             error[c] = (last[c] <= noise[c] ? 0 : factor * last[c]) + noise[c];
         }
-        return smooth ? Math.min(1, ratio) : 1;
+        return Math.min(1, smooth ? ratio : Math.pow(ratio, 0.5 / 0.9));
     }
 
     private double pair(double[] weighted, int degree) {

@@ -92,6 +92,12 @@ public final class RegionIntegral {
                     }
                 }
             }
+            double[] resolving = NodeFunction.isSmooth(f) ? null : chart.resolvingCuts(f, k);
+            if (resolving != null) {
+                for (double u : resolving) {
+                    found.add(u);
+                }
+            }
             cuts[k] = found.stream().mapToDouble(Double::doubleValue).toArray();
         }
         return cuts;
