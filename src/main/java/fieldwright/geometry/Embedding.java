@@ -51,21 +51,38 @@ abstract class Embedding {
         }
     }
 
+    /** π less the double next to it, over π. */
+    private static final double SHORT_OF_PI = 1.2246467991473532e-16 / Math.PI;
+
+    /**
+     * Sine of an angle of a limit or a coordinate, in which the double next to π stands for π itself. Else a full turn ends
+     * short of where it began, and a place over that seam sees a slit as wide as the rounding over its distance.
+     */
+    private static double sine(double angle) {
+        return Math.sin(angle) + SHORT_OF_PI * angle * Math.cos(angle);
+    }
+
+    private static double cosine(double angle) {
+        return Math.cos(angle) - SHORT_OF_PI * angle * Math.sin(angle);
+    }
+
     private static final class Cylindrical extends Embedding {
         @Override
         double[] position(double[] c) {
-            return new double[] {c[0] * Math.cos(c[1]), c[0] * Math.sin(c[1]), c[2]};
+            return new double[] {c[0] * cosine(c[1]), c[0] * sine(c[1]), c[2]};
         }
 
         @Override
         void embed(double[] c0, double[] position0, Nodes nodes, int n) {
-            double sin0 = Math.sin(c0[1]);
-            double cos0 = Math.cos(c0[1]);
+            double sin0 = sine(c0[1]);
+            double cos0 = cosine(c0[1]);
             double[] rho = nodes.c[0];
             for (int i = 0; i < n; i++) {
                 double half = nodes.delta[1][i] / 2;
-                double s = Math.sin(half);
-                double q = Math.cos(half);
+                double s0 = Math.sin(half);
+                double q0 = Math.cos(half);
+                double s = s0 + SHORT_OF_PI * half * q0;
+                double q = q0 - SHORT_OF_PI * half * s0;
                 double sinMiddle = sin0 * q + cos0 * s;
                 double cosMiddle = cos0 * q - sin0 * s;
                 double dRho = nodes.delta[0][i];
@@ -91,22 +108,24 @@ abstract class Embedding {
     private static final class Spherical extends Embedding {
         @Override
         double[] position(double[] c) {
-            double rho = c[0] * Math.sin(c[1]);
-            return new double[] {rho * Math.cos(c[2]), rho * Math.sin(c[2]), c[0] * Math.cos(c[1])};
+            double rho = c[0] * sine(c[1]);
+            return new double[] {rho * cosine(c[2]), rho * sine(c[2]), c[0] * cosine(c[1])};
         }
 
         @Override
         void embed(double[] c0, double[] position0, Nodes nodes, int n) {
-            double sinT0 = Math.sin(c0[1]);
-            double cosT0 = Math.cos(c0[1]);
-            double sinP0 = Math.sin(c0[2]);
-            double cosP0 = Math.cos(c0[2]);
+            double sinT0 = sine(c0[1]);
+            double cosT0 = cosine(c0[1]);
+            double sinP0 = sine(c0[2]);
+            double cosP0 = cosine(c0[2]);
             for (int i = 0; i < n; i++) {
                 double r = nodes.c[0][i];
                 double dr = nodes.delta[0][i];
                 double half = nodes.delta[1][i] / 2;
-                double s = Math.sin(half);
-                double q = Math.cos(half);
+                double s0 = Math.sin(half);
+                double q0 = Math.cos(half);
+                double s = s0 + SHORT_OF_PI * half * q0;
+                double q = q0 - SHORT_OF_PI * half * s0;
                 double sinMiddle = sinT0 * q + cosT0 * s;
                 double cosMiddle = cosT0 * q - sinT0 * s;
                 double dRho = dr * sinT0 + 2 * r * cosMiddle * s;
@@ -115,8 +134,10 @@ abstract class Embedding {
                 double cosT = cosMiddle * q - sinMiddle * s;
                 double rho = r * sinT;
                 half = nodes.delta[2][i] / 2;
-                s = Math.sin(half);
-                q = Math.cos(half);
+                s0 = Math.sin(half);
+                q0 = Math.cos(half);
+                s = s0 + SHORT_OF_PI * half * q0;
+                q = q0 - SHORT_OF_PI * half * s0;
                 sinMiddle = sinP0 * q + cosP0 * s;
                 cosMiddle = cosP0 * q - sinP0 * s;
                 nodes.offset[0][i] = dRho * cosP0 - 2 * rho * sinMiddle * s;
