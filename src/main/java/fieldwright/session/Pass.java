@@ -14,7 +14,6 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Objects;
 import java.util.Set;
-import java.util.function.BiConsumer;
 
 /**
  * One working of a sheet from top to bottom. A cell that would take what it took in an earlier working is not worked
@@ -40,6 +39,14 @@ final class Pass {
         CellRun of(int cell);
     }
 
+    /** Told how the pass goes on; cells from 1. */
+    interface Listener {
+        void begun(int cell);
+
+        /** @param reused true when what it gave before stands */
+        void finished(int cell, CellRun run, boolean reused);
+    }
+
     private final List<Cell> cells;
     private final Setting setting;
     private final Workspace workspace;
@@ -47,14 +54,13 @@ final class Pass {
     private final Earlier earlier;
     private final AuthorCode authorCode;
     private final Printing printing;
-    private final BiConsumer<Integer, CellRun> listener;
+    private final Listener listener;
     private final NameTable names = new NameTable();
     private final List<CellRun> runs = new ArrayList<>();
     private final Set<Integer> reused = new HashSet<>();
 
-    /** @param listener told of a cell that is begun (with null) and finished (with its run); cells from 1 */
     Pass(List<Cell> cells, Setting setting, Workspace workspace, Code code, Earlier earlier, AuthorCode authorCode, Printing printing,
-         BiConsumer<Integer, CellRun> listener) {
+         Listener listener) {
         this.cells = cells;
         this.setting = setting;
         this.workspace = workspace;
@@ -77,7 +83,7 @@ final class Pass {
         for (int number = 1; number <= cells.size(); number++) {
             CellRun run = work(number, forced.contains(number), fresh);
             runs.add(run);
-            listener.accept(number, run);
+            listener.finished(number, run, reused.contains(number));
             names.touch(run);
             for (SheetName name : run.writes().values()) {
                 put(name.inCell(number));
@@ -115,7 +121,7 @@ final class Pass {
             draft.stop();
             return draft.finished();
         }
-        listener.accept(number, null);
+        listener.begun(number);
         WorkingCode compiled = cell.kind() == Cell.Kind.WORKING ? code.of(number, draft) : null;
         draft.setCode(compiled);
         CellRun before = earlier.of(number);

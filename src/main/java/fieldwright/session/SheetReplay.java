@@ -22,6 +22,14 @@ import java.util.Set;
  * others are worked again with the code already compiled, over classes of their own.
  */
 final class SheetReplay implements Replay {
+    private static final Pass.Listener UNHEARD = new Pass.Listener() {
+        @Override
+        public void begun(int cell) { }
+
+        @Override
+        public void finished(int cell, CellRun run, boolean reused) { }
+    };
+
     private final List<Cell> cells;
     private final Setting setting;
     private final List<CellRun> base;
@@ -83,7 +91,7 @@ final class SheetReplay implements Replay {
         };
         return new Pass(cells, setting.replay(changed), workspace, compiled,
                 cell -> keepWorking || cells.get(cell - 1).kind() != Cell.Kind.WORKING ? base.get(cell - 1) : null,
-                authorCode, printing, (cell, run) -> { });
+                authorCode, printing, UNHEARD);
     }
 
     private static Outcome read(List<CellRun> runs) {

@@ -2,6 +2,7 @@ package fieldwright.session;
 
 import fieldwright.field.Accuracy;
 import fieldwright.formula.Names;
+import fieldwright.output.CellOutcome;
 import fieldwright.output.Output;
 import fieldwright.output.RunOutcome;
 import fieldwright.quantity.AuthorException;
@@ -150,7 +151,7 @@ public final class SheetRunner implements AutoCloseable {
         Set<Integer> forced = new HashSet<>();
         while (true) {
             List<CellRun> earlier = engine.earlier(cells);
-            Pass pass = new Pass(cells, setting, engine.workspace(), new CompiledNow(cells, engine.maker(), Library.javaSources(setting.libraries())), number -> earlier.get(number - 1), authorCode, printing, (number, run) -> tell(listener, number, run));
+            Pass pass = new Pass(cells, setting, engine.workspace(), new CompiledNow(cells, engine.maker(), Library.javaSources(setting.libraries())), number -> earlier.get(number - 1), authorCode, printing, new Telling(listener));
             boolean fresh = engine.isFresh();
             engine.used();
             try {
@@ -195,11 +196,18 @@ public final class SheetRunner implements AutoCloseable {
         }
     }
 
-    private static void tell(Consumer<Progress> listener, int number, CellRun run) {
-        if (run == null) {
-            listener.accept(new Progress.Started(number));
-        } else if (run.kind() != Cell.Kind.NOTE) {
-            listener.accept(new Progress.Finished(run.outcome(number, run.state())));
+    /** Passes on what happens, as outcomes. Notes are told of when all results stand. */
+    private record Telling(Consumer<Progress> listener) implements Pass.Listener {
+        @Override
+        public void begun(int cell) {
+            listener.accept(new Progress.Started(cell));
+        }
+
+        @Override
+        public void finished(int cell, CellRun run, boolean reused) {
+            if (run.kind() != Cell.Kind.NOTE) {
+                listener.accept(new Progress.Finished(run.outcome(cell, reused ? CellOutcome.State.REUSED : run.state())));
+            }
         }
     }
 

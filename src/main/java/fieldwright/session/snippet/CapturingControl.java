@@ -19,6 +19,7 @@ final class CapturingControl extends DirectExecutionControl {
     private final ClassStore store;
     private final Set<String> classes = new HashSet<>();
     private final List<String> invoked = new ArrayList<>();
+    private int redefinitions;
 
     CapturingControl(ClassStore store) {
         this.store = store;
@@ -59,6 +60,18 @@ final class CapturingControl extends DirectExecutionControl {
             store.add(one.name(), one.bytecodes());
             classes.add(one.name());
         }
+    }
+
+    /** Class files cannot be exchanged; JShell then takes another name for the class and compiles again. */
+    @Override
+    public void redefine(ClassBytecodes[] changed) throws NotImplementedException {
+        redefinitions++;
+        throw new NotImplementedException("redefine");
+    }
+
+    /** How often JShell had to compile again because of {@link #redefine}; for tests. */
+    int redefinitions() {
+        return redefinitions;
     }
 
     @Override

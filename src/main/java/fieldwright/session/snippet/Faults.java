@@ -25,19 +25,22 @@ final class Faults {
     private final JShell shell;
     private final String source;
     private final JavaText.Declared variable;
+    private final String field;
     private final Collection<String> above;
     private final Collection<String> words;
 
     /**
-     * @param variable the declared variable, which was compiled under a name with a {@code $} behind; or null
+     * @param variable the declared variable, or null
+     * @param field    the name it was compiled under
      * @param above    names declared above
      * @param words    names that can be used anywhere, to suggest one
      */
-    Faults(JShell shell, String source, JavaText.Declared variable, Collection<String> above,
+    Faults(JShell shell, String source, JavaText.Declared variable, String field, Collection<String> above,
            Collection<String> words) {
         this.shell = shell;
         this.source = source;
         this.variable = variable;
+        this.field = field;
         this.above = above;
         this.words = words;
     }
@@ -58,7 +61,7 @@ final class Faults {
     private int offset(Diag error) {
         int offset = (int) Math.max(0, error.getPosition());
         boolean shifted = variable != null && offset >= variable.end();
-        return Math.min(shifted ? offset - 1 : offset, Math.max(0, source.length() - 1));
+        return Math.min(shifted ? Math.max(variable.start(), offset - (field.length() - variable.name().length())) : offset, Math.max(0, source.length() - 1));
     }
 
     private SnippetException.Fault fault(Diag error) {
@@ -113,7 +116,7 @@ final class Faults {
     private String clean(String text) {
         String cleaned = INNER.matcher(text).replaceAll("");
         if (variable != null) {
-            cleaned = cleaned.replaceAll("\\b" + Pattern.quote(variable.name()) + "\\$_?", Matcher.quoteReplacement(variable.name()));
+            cleaned = cleaned.replaceAll("\\b" + Pattern.quote(field) + "_?", Matcher.quoteReplacement(variable.name()));
         }
         return PACKAGES.matcher(cleaned).replaceAll("").replaceAll("\\s*\\n\\s*", "; ").strip();
     }

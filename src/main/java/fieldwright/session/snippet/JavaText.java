@@ -101,10 +101,15 @@ final class JavaText {
         return declares ? Optional.of(new Declared(name.group(), start, declaresMore(next))) : Optional.empty();
     }
 
+    /** What stands before the first brace, without comments and superfluous space. */
+    String head() {
+        int brace = masked.indexOf('{');
+        return brace < 0 ? "" : masked.substring(0, brace).strip().replaceAll("\\s+", " ");
+    }
+
     /** The name of the method or type declared; null when the text declares none. */
     String code() {
-        int brace = masked.indexOf('{');
-        String head = brace < 0 ? "" : masked.substring(0, brace);
+        String head = head();
         Matcher type = TYPE_HEAD.matcher(head);
         if (type.find()) {
             return type.group(1);

@@ -26,7 +26,8 @@ import jdk.jshell.VarSnippet;
  * same text among the same declarations costs nothing. For that, JShell's own state is kept as small as it can be:
  * <ul>
  * <li>A statement is dropped as soon as it is compiled; its classes stay with us.
- * <li>A variable {@code Q} is compiled under the name {@code Q$} and dropped too. Only when something below uses
+ * <li>A variable {@code Q} is compiled under a name used once, {@code Q$17}, and dropped too; a name used again would
+ *     make JShell compile once for every earlier use. Only when something below uses
  *     {@code Q} is a variable of that name and type declared to JShell, its <em>slot</em>: a static field in a class of
  *     its own. {@link Workspace} moves the value there. So a change of how {@code Q} is worked out compiles one snippet,
  *     not all those that use it.
@@ -77,6 +78,10 @@ public final class SnippetCompiler implements AutoCloseable {
     /** How often JShell was asked to compile something; for tests that count instead of timing. */
     public int evaluations() {
         return evaluations;
+    }
+
+    int redefinitions() {
+        return control.redefinitions();
     }
 
     /** True when a fresh compiler should take over at the next occasion. */
@@ -154,23 +159,28 @@ public final class SnippetCompiler implements AutoCloseable {
         if (variable != null) {
             names.remove(variable.name());
         }
+        Active overwritten = overwritten(text);
         hideOthers(names, key.environment());
         for (Declaration declaration : key.environment().values()) {
             activate(declaration, key.source());
         }
+        String field = variable == null ? null : variable.name() + "$" + evaluations;
         String source = variable == null ? key.source()
-                : key.source().substring(0, variable.end()) + "$" + key.source().substring(variable.end());
+                : key.source().substring(0, variable.start()) + field + key.source().substring(variable.end());
         SnippetEvent event = evaluate(source);
         Snippet snippet = event.snippet();
+        if (overwritten != null) {
+            drop(overwritten.snippet());
+        }
         if (snippet.kind() == Snippet.Kind.IMPORT && event.status() == Snippet.Status.VALID) {
             return imported(key, snippet);
         }
         if (event.status() != Snippet.Status.VALID) {
-            List<SnippetException.Fault> faults = new Faults(shell, key.source(), variable, visible.keySet(), words).of(snippet);
+            List<SnippetException.Fault> faults = new Faults(shell, key.source(), variable, field, visible.keySet(), words).of(snippet);
             drop(snippet);
             throw new SnippetException(faults);
         }
-        return finished(text, key, variable, snippet);
+        return finished(text, key, variable, field, snippet);
     }
 
     private static void refuse(JavaText text, String source, JavaText.Declared variable) throws SnippetException {
@@ -228,16 +238,16 @@ public final class SnippetCompiler implements AutoCloseable {
         return compiled;
     }
 
-    private CompiledSnippet finished(JavaText text, Key key, JavaText.Declared variable, Snippet snippet)
+    private CompiledSnippet finished(JavaText text, Key key, JavaText.Declared variable, String field, Snippet snippet)
             throws SnippetException {
         boolean runs = !control.invoked().isEmpty();
         SourceCodeAnalysis.SnippetWrapper wrapped = shell.sourceCodeAnalysis().wrapper(snippet);
         String wrapper = wrapped.fullClassName();
         requireNothingElse(wrapper, snippet instanceof DeclarationSnippet declared ? declared.name() : "", 0);
         CompiledSnippet compiled = new CompiledSnippet(key.source(), text.free(), key.environment(), key.imports(),
-                store.within(wrapper), wrapper, runs, variable == null ? null : variable.name() + "$", wrapped);
+                store.within(wrapper), wrapper, runs, field, wrapped);
         if (variable != null) {
-            compiled.declare(new Declaration.Variable(variable.name(), typeOf(wrapper, variable.name() + "$")));
+            compiled.declare(new Declaration.Variable(variable.name(), typeOf(wrapper, field)));
         }
         if (snippet instanceof MethodSnippet || snippet instanceof TypeDeclSnippet) {
             Declaration.Code code = new Declaration.Code(((DeclarationSnippet) snippet).name(), compiled,
@@ -278,15 +288,38 @@ public final class SnippetCompiler implements AutoCloseable {
         if (gone == null) {
             return;
         }
+        hideUsers(gone.declaration());
+        forget(gone.declaration());
+        control.forget();
+        drop(gone.snippet());
+        requireUnchanged(name);
+    }
+
+    private void hideUsers(Declaration used) {
         List.copyOf(active.values()).stream().map(Active::declaration)
-                .filter(other -> other instanceof Declaration.Code code && code.snippet().dependsOn(gone.declaration()))
+                .filter(other -> other instanceof Declaration.Code code && code.snippet().dependsOn(used))
                 .forEach(other -> hide(other.name()));
-        if (gone.declaration() instanceof Declaration.Code code) {
+    }
+
+    private void forget(Declaration declaration) {
+        if (declaration instanceof Declaration.Code code) {
             known.values().remove(code.snippet());
         }
-        control.forget();
-        shell.drop(gone.snippet());
-        requireUnchanged(name);
+    }
+
+    /**
+     * The method or type that stands and of which this text is another body; null when there is none. JShell replaces it
+     * with the new one; to drop it first would make JShell compile once for every body it ever had.
+     */
+    private Active overwritten(JavaText text) {
+        Active standing = active.get(text.code());
+        if (standing == null || !(standing.declaration() instanceof Declaration.Code code)
+                || !new JavaText(code.snippet().source()).head().equals(text.head())) {
+            return null;
+        }
+        hideUsers(code);
+        forget(code);
+        return active.remove(code.name());
     }
 
     /** Makes a name of the environment known to JShell. */

@@ -160,6 +160,29 @@ class SnippetCompilerTest {
         assertSame(first, compiler.compile("double q = 1;", Map.of()));
     }
 
+    /** JShell compiles again for each earlier class of the same name; see that there is none. */
+    @Test
+    void editingOneLineAgainAndAgainCostsTheSame() throws Throwable {
+        for (int i = 0; i < 12; i++) {
+            Map<String, Object> values = work("double a = " + i + ";", "double f(double x) { return " + i + " * x; }",
+                    "record P(double u) { double v() { return u + " + i + "; } }", "double b = f(a) + new P(1).v();");
+            assertEquals((double) i * i + 1 + i, values.get("b"));
+            assertTrue(compiler.redefinitions() <= 2 * i + 2, "redefined " + compiler.redefinitions() + " times after " + i + " edits");
+        }
+    }
+
+    @Test
+    void aMethodThatFailsAndIsMended() throws Throwable {
+        String[] pieces = {"double f(double x) { return x; }", "double b = f(1);"};
+        assertEquals(1.0, work(pieces).get("b"));
+        refused("double f(double x) { return y; }", pieces[1]);
+        refused("double f(double x) { return ; }", pieces[1]);
+        refused(pieces[1]);
+        assertEquals(1.0, work(pieces).get("b"));
+        assertEquals(3.0, work("double f(int x) { return 3 * x; }", pieces[1]).get("b"));
+        assertEquals(1.0, work(pieces).get("b"));
+    }
+
     @Test
     void imports() throws Throwable {
         assertEquals(3, work("import static java.lang.Math.*;", "int m = max(2, 3);").get("m"));
