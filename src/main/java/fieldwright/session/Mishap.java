@@ -1,5 +1,6 @@
 package fieldwright.session;
 
+import fieldwright.formula.FormulaException;
 import fieldwright.quantity.AuthorException;
 import fieldwright.quantity.StoppedException;
 
@@ -18,6 +19,9 @@ final class Mishap {
 
     /** Thing, value, remedy; without the place. */
     static String describe(Throwable thrown) {
+        if (thrown instanceof FormulaException wrong) {
+            return wrong.getMessage() + place(wrong);
+        }
         if (thrown instanceof AuthorException) {
             return thrown.getMessage();
         }
@@ -34,6 +38,20 @@ final class Mishap {
         String ours = ourPlace(thrown);
         return ours == null ? what : "internal: " + what + " (" + ours
                 + "). This is an error of the program, not of the sheet. Please report it with the sheet.";
+    }
+
+    /** The formula and what stands in it where it is wrong, unless the message tells. */
+    private static String place(FormulaException wrong) {
+        String text = wrong.text().strip();
+        if (text.isEmpty() || wrong.getMessage().contains(text)) {
+            return "";
+        }
+        boolean within = wrong.position() > 0 && wrong.position() < wrong.text().length();
+        return " In '" + shortened(text) + "'" + (within ? ", at '" + shortened(wrong.text().substring(wrong.position())) + "'." : ".");
+    }
+
+    private static String shortened(String text) {
+        return text.length() <= 60 ? text : text.substring(0, text.offsetByCodePoints(0, text.codePointCount(0, 57))) + "…";
     }
 
     private static String readable(String message) {

@@ -77,6 +77,11 @@ public final class SheetRunner implements AutoCloseable {
         authorCode.stop();
     }
 
+    /** How often something was compiled since the compiler was last made anew; for tests that count instead of timing. */
+    int compilations() {
+        return engine.compiler().evaluations();
+    }
+
     private void renew() {
         engine.close();
         engine = new Engine();

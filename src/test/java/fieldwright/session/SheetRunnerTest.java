@@ -287,6 +287,28 @@ class SheetRunnerTest {
     }
 
     @Test
+    void onlyTheChangedLineIsCompiled() {
+        String[] cells = {"input\na = 2 m", "working\nvar b = a.times(2);\nint k = 3;\nvar c = b.times(k);", "derive\nd = 2*c",
+            "working\nvar e = d.plus(c).plus(a);\ndouble half(double y) { return y / 2; }", "working\nvar g = e.times(half(k));"};
+        work(cells);
+        int before = runner.compilations();
+        assertEquals(28.5, number(work(cells[0].replace("2 m", "2.25 m"), cells[1], cells[2], cells[3], cells[4]), "g") / 2.25, 1e-12, "inputs compile nothing");
+        assertEquals(before, runner.compilations());
+        cells[1] = cells[1].replace("a.times(2)", "a.times(4)");
+        assertEquals(55.5, number(work(cells), "g") / 2, 1e-12);
+        assertEquals(before + 1, runner.compilations(), "nothing that uses b is compiled again");
+        cells[4] = cells[4].replace("half(k)", "half(2)");
+        work(cells);
+        assertEquals(before + 2, runner.compilations());
+    }
+
+    @Test
+    void formulasThatAreWrongShowWhere() {
+        assertEquals(List.of("cell 1, line 4: a length (m) stands with a mass (kg): terms of a sum must have one unit. Check units and factors."
+                + " In '2*(3 m + 1 kg)', at '+ 1 kg)'."), problems(work("derive\na = 2*(3 m + 1 kg)")));
+    }
+
+    @Test
     void anEqualValueEndsTheChange() {
         work("input\na = 2 m", "derive\nb = a*0 + 1 m", "working\nvar c = b.times(2);");
         RunOutcome changed = work("input\na = 3 m", "derive\nb = a*0 + 1 m", "working\nvar c = b.times(2);");

@@ -85,6 +85,10 @@ final class Faults {
 
     private SnippetException.Fault missing(int offset, String kind, String symbol, String text) {
         String name = symbol.replaceAll("\\(.*", "");
+        if (variable != null && symbol.equals(variable.name())) {
+            return new SnippetException.Fault(offset, "'" + name + "' is used in its own declaration, where it has no value yet. "
+                    + "Declare it first, or choose another name within.");
+        }
         Matcher location = LOCATION.matcher(text);
         Matcher type = OF_TYPE.matcher(location.find() ? location.group(1) : "");
         if (type.find() && !clean(type.group(1)).isBlank()) {

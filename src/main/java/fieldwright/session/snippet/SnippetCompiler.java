@@ -156,7 +156,7 @@ public final class SnippetCompiler implements AutoCloseable {
         refuse(text, key.source(), variable);
         prepareImports(key.imports());
         Set<String> names = text.all();
-        if (variable != null) {
+        if (variable != null && !text.usesElsewhere(variable.name(), variable.start())) {
             names.remove(variable.name());
         }
         Active overwritten = overwritten(text);
@@ -187,11 +187,6 @@ public final class SnippetCompiler implements AutoCloseable {
         if (variable != null && variable.several()) {
             throw new SnippetException(variable.start(),
                     "'" + variable.name() + "' is declared together with others: write one declaration for each name.");
-        }
-        if (variable != null && text.usesElsewhere(variable.name(), variable.start())) {
-            throw new SnippetException(variable.start(),
-                    "'" + variable.name() + "' is used in its own declaration, where it has no value yet. Declare it first, "
-                            + "or choose another name within.");
         }
         for (String name : text.free()) {
             if (name.matches("\\$\\d+")) {

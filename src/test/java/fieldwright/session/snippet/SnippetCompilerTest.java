@@ -172,6 +172,18 @@ class SnippetCompilerTest {
     }
 
     @Test
+    void theOwnNameWithinIsAnotherOneOrAFault() throws Throwable {
+        assertEquals(3, work("IntUnaryOperator x = n -> { int x = n + 1; return x; };", "int k = x.applyAsInt(2);").get("k"));
+        assertEquals(3, work("IntUnaryOperator x = n -> { int x = n + 1; return x; };", "int k = x.applyAsInt(2);").get("k"));
+        for (int i = 0; i < 2; i++) {
+            assertTrue(refused("IntUnaryOperator f = n -> n < 1 ? 1 : n * f.applyAsInt(n - 1);", "int k = f.applyAsInt(2);").getMessage()
+                    .startsWith("'f' is used in its own declaration"));
+            work("IntUnaryOperator f = n -> n;", "int k = f.applyAsInt(2);");
+        }
+        assertEquals("';' expected.", refused("var a = 1\nvar b = a + 1;").getMessage());
+    }
+
+    @Test
     void aMethodThatFailsAndIsMended() throws Throwable {
         String[] pieces = {"double f(double x) { return x; }", "double b = f(1);"};
         assertEquals(1.0, work(pieces).get("b"));
@@ -201,7 +213,7 @@ class SnippetCompilerTest {
         "int f(int x) { ! 13 ! the statement does not end here: a ';', a bracket or a quote is missing.",
         "int a = 1, b = 2; ! 4 ! 'a' is declared together with others: write one declaration for each name.",
         "var q = $1 + 2; ! 8 ! '$1' is no name of the sheet: give the value a name of its own with 'var name = …'.",
-        "var q = q + 1; ! 4 ! 'q' is used in its own declaration, where it has no value yet. Declare it first, or choose another name within."
+        "var q = q + 1; ! 8 ! 'q' is used in its own declaration, where it has no value yet. Declare it first, or choose another name within."
     })
     void faultsSayWhereAndWhat(String text, int offset, String message) {
         SnippetException e = refused(text);
