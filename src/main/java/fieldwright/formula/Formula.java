@@ -176,7 +176,9 @@ public final class Formula {
         if (Double.isInfinite(value.value()) && value.standing().isConverged() && !fitsAnyUnit()) {
             return new Amount(value.value(), value.error(), d, unit, Standing.unbounded("the formula " + text + " has no bound here"));
         }
-        return new Amount(value.value(), value.error(), d, unit, value.standing());
+        Standing standing = Double.isInfinite(value.error()) && Double.isFinite(value.value()) ? value.standing().worse(Standing.NO_ERROR_BOUND)
+            : value.standing();
+        return new Amount(value.value(), value.error(), d, unit, standing);
     }
 
     /** The symbolic derivative with respect to a free name, simplified. At a kink it is that of one side. */

@@ -21,8 +21,8 @@ final class Kernels {
     private static final Kernel ABS = (r, s, o, n) -> abs(r[s[0]], o, n);
     private static final Kernel EXP = (r, s, o, n) -> exp(r[s[0]], o, n);
     private static final Kernel LN = (r, s, o, n) -> ln(r[s[0]], o, n);
-    private static final Kernel SIN = (r, s, o, n) -> sin(r[s[0]], o, n);
-    private static final Kernel COS = (r, s, o, n) -> cos(r[s[0]], o, n);
+    private static final Kernel SIN = (r, s, o, n) -> BlockTrig.sin(r[s[0]], o, n);
+    private static final Kernel COS = (r, s, o, n) -> BlockTrig.cos(r[s[0]], o, n);
     private static final Kernel MIN = (r, s, o, n) -> min(r[s[0]], r[s[1]], o, n);
     private static final Kernel MAX = (r, s, o, n) -> max(r[s[0]], r[s[1]], o, n);
 
@@ -201,18 +201,6 @@ final class Kernels {
     private static void ln(double[] a, double[] o, int n) {
         for (int i = 0; i < n; i++) {
             o[i] = Math.log(a[i]);
-        }
-    }
-
-    private static void sin(double[] a, double[] o, int n) {
-        for (int i = 0; i < n; i++) {
-            o[i] = Math.sin(a[i]);
-        }
-    }
-
-    private static void cos(double[] a, double[] o, int n) {
-        for (int i = 0; i < n; i++) {
-            o[i] = Math.cos(a[i]);
         }
     }
 

@@ -31,6 +31,9 @@ final class Kinks {
             found.add(Node.minus(c.left(), c.right()));
         } else if (n instanceof Node.Integral) {
             return;   // an integral is smooth in its parameters but for limits that jump
+        } else if (n instanceof Node.Inlined f) {
+            collect(f.body(), found);   // outside its condition there is an error, no jump
+            return;
         }
         n.children().forEach(c -> collect(c, found));
     }

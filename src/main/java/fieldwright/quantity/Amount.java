@@ -277,6 +277,9 @@ public record Amount(double si, double error, Dimension dimension, String shown,
         if (!Double.isFinite(value) && Double.isFinite(si) && Double.isFinite(other.si)) {
             throw new AuthorException("a value left the range of numbers (" + this + " with " + other + "). Check the units.");
         }
+        if (Double.isInfinite(bound) && Double.isFinite(value)) {
+            worst = worst.worse(Standing.NO_ERROR_BOUND);
+        }
         return new Amount(value, bound, d, unit, worst);
     }
 

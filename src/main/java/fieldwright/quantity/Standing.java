@@ -11,6 +11,9 @@ public record Standing(Kind kind, String reason) {
 
     public static final Standing CONVERGED = new Standing(Kind.CONVERGED, "");
 
+    /** Of a value whose numerical error came out infinite: nothing is known about it. */
+    public static final Standing NO_ERROR_BOUND = notConverged("a divisor, or the place of a jump, is zero within its numerical error");
+
     public Standing {
         Objects.requireNonNull(kind, "kind");
         reason = reason == null ? "" : reason;

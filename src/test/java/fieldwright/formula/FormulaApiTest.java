@@ -168,6 +168,9 @@ class FormulaApiTest {
         assertEquals(4, Formula.parse("when(a < b, 1, 5)").bind(scope).amount().error(), 1e-12);
         assertEquals(0, Formula.parse("when(a < 2*b, 1, 5)").bind(scope).amount().error());
         assertEquals(0, Formula.parse("when(a <= a, 1, 5)").bind(scope).amount().error());
+        Amount lost = Formula.parse("1/(a - b)").bind(scope).amount();
+        assertEquals(Standing.NO_ERROR_BOUND, lost.standing());
+        assertEquals(Standing.NO_ERROR_BOUND, Amount.of(1).dividedBy(Amount.si(1e-3, 1e-2, Units.NONE)).standing());
         assertTrue(Formula.parse("sqrt(a - a)").bind(scope).amount().error() >= Math.sqrt(2e-3));
     }
 
