@@ -1,6 +1,8 @@
 package fieldwright.app;
 
 import java.util.List;
+import java.util.logging.Level;
+import java.util.logging.Logger;
 import javafx.application.Application;
 
 /**
@@ -8,6 +10,9 @@ import javafx.application.Application;
  * class path.
  */
 public final class AppLauncher {
+    /** Held, since a logger that nobody holds may be collected with its level. */
+    private static final Logger JAVAFX_LOG = Logger.getLogger("javafx");
+
     private AppLauncher() { }
 
     /**
@@ -16,6 +21,7 @@ public final class AppLauncher {
      * @param files paths of sheets
      */
     public static void main(String[] files) {
+        JAVAFX_LOG.setLevel(Level.SEVERE);   // it would warn of lying on the class path, where a single jar must lie
         // Pictures are painted through Java2D, which must not start a window system of its own beside ours.
         System.setProperty("java.awt.headless", "true");
         Application.launch(PadApplication.class, List.of(files).toArray(String[]::new));

@@ -47,7 +47,7 @@ final class InPlace extends StackPane {
     void show(String text) {
         value = text;
         shown.setText(text.isEmpty() ? "—" : text);
-        if (!field.isFocused()) {
+        if (!field.isFocused() && !field.getText().equals(text)) {
             field.setText(text);
         }
     }

@@ -7,6 +7,7 @@ import fieldwright.sheet.Trust;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.concurrent.Executor;
 import java.util.function.Supplier;
@@ -14,7 +15,7 @@ import javafx.animation.PauseTransition;
 import javafx.application.Platform;
 import javafx.geometry.Bounds;
 import javafx.scene.Node;
-import javafx.scene.Scene;
+import javafx.scene.Parent;
 import javafx.scene.control.ScrollPane;
 import javafx.scene.layout.BorderPane;
 import javafx.scene.layout.StackPane;
@@ -90,9 +91,18 @@ final class Pad extends BorderPane {
     }
 
     private void applyZoom() {
-        setStyle(String.format(java.util.Locale.ROOT, "-fx-font-size: %.2fpx; -fx-font-family: \"%s\";", Zoom.LETTER * zoom.factor(),
-                Fonts.text()));
-        requestLayout();
+        setStyle(String.format(Locale.ROOT, "-fx-font-size: %.2fpx; -fx-font-family: \"%s\";", Zoom.LETTER * zoom.factor(), Fonts.text()));
+        measureAnew(this);
+    }
+
+    /** Sizes that come from the zoom and not from a font are remembered by the toolkit until they are asked to change. */
+    private static void measureAnew(Parent parent) {
+        parent.requestLayout();
+        for (Node child : parent.getChildrenUnmodifiable()) {
+            if (child instanceof Parent inner) {
+                measureAnew(inner);
+            }
+        }
     }
 
     private void setDesk(SheetDesk now) {
@@ -506,7 +516,7 @@ final class Pad extends BorderPane {
     private String suggestedName() {
         String number = desk.sheet().header().get("number");
         String title = number.isEmpty() ? desk.sheet().header().get("title") : number;
-        String plain = title.toLowerCase(java.util.Locale.ROOT).replaceAll("[^\\p{L}\\p{N}]+", "-").replaceAll("^-|-$", "");
+        String plain = title.toLowerCase(Locale.ROOT).replaceAll("[^\\p{L}\\p{N}]+", "-").replaceAll("^-|-$", "");
         return (plain.isEmpty() ? "sheet" : plain) + ".fws";
     }
 

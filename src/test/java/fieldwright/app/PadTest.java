@@ -450,6 +450,8 @@ class PadTest {
             assertTrue(Fx.get(() -> inked(picture)) > 8, () -> "ink of " + picture.getAccessibleText());
         }
         PictureView plot = pictures.stream().filter(p -> p.getStyleClass().contains("plot")).findFirst().orElseThrow();
+        PictureView symbol = pictures.stream().filter(p -> p.getStyleClass().contains("symbol")).findFirst().orElseThrow();
+        double narrow = Fx.get(symbol::getWidth);
         double before = Fx.get(plot::getHeight);
         Fx.run(() -> {
             pad.zoom().larger();
@@ -458,6 +460,7 @@ class PadTest {
         });
         // Not exactly 1.1: the columns share the width out anew.
         assertEquals(1.1, Fx.get(plot::getHeight) / before, 0.03);
+        assertEquals(1.1 * (narrow - 4), Fx.get(symbol::getWidth) - 4, 1.5);
         assertTrue(Fx.get(() -> inked(plot)) > 400);
     }
 
