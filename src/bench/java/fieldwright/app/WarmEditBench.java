@@ -179,6 +179,11 @@ public class WarmEditBench {
         }
 
         @Override
+        public boolean mayReplace(String name) {
+            return false;
+        }
+
+        @Override
         public Optional<Path> fileToOpen(Path near) {
             return Optional.empty();
         }

@@ -1,6 +1,7 @@
 package fieldwright.app;
 
 import fieldwright.sheet.Cell;
+import java.util.function.Consumer;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.control.MenuButton;
@@ -11,15 +12,11 @@ import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 
-/** The bar above the page. */
+/** The bar above the page: what is done most, two menus for the rest, and at the right how the sheet stands. */
 final class Bar extends HBox {
     private final Pad pad;
-    private final Button workOut = button("Work out", "Ctrl+Enter", p -> p.workOut());
-    private final Button stop = button("Stop", "Ctrl+.", p -> p.stop());
-    private final Button save = button("Save", "Ctrl+S", p -> p.save());
-    private final Button fold = button("Fold code", "Ctrl+K", p -> p.setFolded(!p.isFolded()));
-    private final MenuButton file = new MenuButton("File");
-    private final MenuButton step = new MenuButton("Step");
+    private final Button stop;
+    private final Button fold;
     private final Label status = new Label();
 
     Bar(Pad pad) {
@@ -28,49 +25,50 @@ final class Bar extends HBox {
         Label name = new Label("Fieldwright");
         name.getStyleClass().add("bar-name");
         name.setMinWidth(USE_PREF_SIZE);
+        Button workOut = button("Work out", "Ctrl+Enter", Pad::workOut);
         workOut.getStyleClass().add("main-button");
-        file.getItems().addAll(item("New", p -> p.newSheet()), item("Open…", p -> p.open()), item("Save", p -> p.save()),
-                item("Save as…", p -> p.saveAs()));
-        for (Cell.Kind kind : Cell.Kind.values()) {
-            step.getItems().add(item("Add " + kind.word() + " below", p -> p.addBelow(kind)));
-        }
-        step.getItems().addAll(new SeparatorMenuItem(), item("Move up", p -> p.moveAtHand(-1)), item("Move down", p -> p.moveAtHand(1)),
-                item("Remove", p -> p.removeAtHand()), new SeparatorMenuItem(), item("Undo", p -> p.undo()), item("Redo", p -> p.redo()));
-        Button keys = button("Keys", "F1", p -> p.showKeys());
+        stop = button("Stop", "Ctrl+.", Pad::stop);
+        fold = button("Fold code", "Ctrl+K", p -> p.setFolded(!p.isFolded()));
         Region gap = new Region();
         setHgrow(gap, Priority.ALWAYS);
         status.getStyleClass().add("status");
         status.setMinWidth(0);
-        getChildren().addAll(name, workOut, stop, file, save, step, fold, keys, gap, status);
+        getChildren().addAll(name, workOut, stop, fileMenu(), button("Save", "Ctrl+S", Pad::save), stepMenu(), fold,
+                button("Keys", "F1", Pad::showKeys), gap, status);
     }
 
-    private interface Deed {
-        void on(Pad pad);
+    private MenuButton fileMenu() {
+        return new MenuButton("File", null, item("New", Pad::newSheet), item("Open…", Pad::open), item("Save", Pad::save),
+                item("Save as…", Pad::saveAs));
     }
 
-    private Button button(String text, String key, Deed deed) {
+    private MenuButton stepMenu() {
+        MenuButton menu = new MenuButton("Step");
+        for (Cell.Kind kind : Cell.Kind.values()) {
+            menu.getItems().add(item("Add " + kind.word() + " below", p -> p.addBelow(kind)));
+        }
+        menu.getItems().addAll(new SeparatorMenuItem(), item("Move up", p -> p.moveAtHand(-1)), item("Move down", p -> p.moveAtHand(1)),
+                item("Remove", Pad::removeAtHand), new SeparatorMenuItem(), item("Undo", Pad::undo), item("Redo", Pad::redo));
+        return menu;
+    }
+
+    private Button button(String text, String key, Consumer<Pad> deed) {
         Button button = new Button(text);
         button.setMinWidth(USE_PREF_SIZE);
         button.setTooltip(new Tooltip(key));
-        button.setOnAction(e -> deed.on(pad()));
+        button.setOnAction(e -> deed.accept(pad));
         return button;
     }
 
-    /** The buttons are made before the constructor has set the field. */
-    private Pad pad() {
-        return pad;
-    }
-
-    private MenuItem item(String text, Deed deed) {
+    private MenuItem item(String text, Consumer<Pad> deed) {
         MenuItem item = new MenuItem(text);
-        item.setOnAction(e -> deed.on(pad));
+        item.setOnAction(e -> deed.accept(pad));
         return item;
     }
 
+    /** Shows how the sheet stands now. */
     void show() {
-        boolean busy = pad.bench() != null && pad.bench().isBusy();
-        stop.setDisable(!busy);
-        save.setDisable(false);
+        stop.setDisable(!pad.bench().isBusy());
         fold.setText(pad.isFolded() ? "Show code" : "Fold code");
         status.setText(pad.status());
     }

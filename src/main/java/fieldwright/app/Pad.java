@@ -1,5 +1,6 @@
 package fieldwright.app;
 
+import fieldwright.output.Output;
 import fieldwright.sheet.Cell;
 import fieldwright.sheet.InputEntry;
 import fieldwright.sheet.SheetException;
@@ -11,6 +12,7 @@ import java.util.Locale;
 import java.util.Optional;
 import java.util.concurrent.Executor;
 import java.util.function.Supplier;
+import javafx.animation.Animation;
 import javafx.animation.PauseTransition;
 import javafx.application.Platform;
 import javafx.geometry.Bounds;
@@ -159,7 +161,7 @@ final class Pad extends BorderPane {
 
     private void benchChanged() {
         if (bench.isBusy()) {
-            if (!waiting && patience.getStatus() != javafx.animation.Animation.Status.RUNNING) {
+            if (!waiting && patience.getStatus() != Animation.Status.RUNNING) {
                 patience.playFromStart();
             }
         } else {
@@ -208,7 +210,7 @@ final class Pad extends BorderPane {
                     : bench.reached() > 0 ? "working out step " + bench.reached() + " of " + desk.steps().size() + " …" : "working out …";
         }
         long problems = desk.sheetProblems().size() + desk.steps().stream().filter(s -> s.outcome() != null
-                && !s.all(fieldwright.output.Output.Problem.class).isEmpty()).count();
+                && !s.all(Output.Problem.class).isEmpty()).count();
         long stale = desk.steps().stream().filter(Step::stale).count();
         String state = problems > 0 ? (problems == 1 ? "1 step has an error" : problems + " steps have errors")
                 : !desk.wasWorked() ? (desk.steps().stream().anyMatch(Step::isRecorded) ? "results on record, nothing worked out here"
@@ -521,6 +523,9 @@ final class Pad extends BorderPane {
     }
 
     private boolean saveTo(Path file) {
+        if (desk.isChangedOutside(file) && !questions.mayReplace(name())) {
+            return false;
+        }
         try {
             String remark = desk.save(file);
             if (madeHere) {

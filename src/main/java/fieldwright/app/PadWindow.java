@@ -98,6 +98,14 @@ final class PadWindow implements Questions {
     }
 
     @Override
+    public boolean mayReplace(String name) {
+        ButtonType replace = new ButtonType("Replace it", ButtonBar.ButtonData.YES);
+        Alert alert = alert(name + " was changed by another program", "Saving replaces what stands in the file now. Save as keeps both.",
+                replace, new ButtonType("Stay", ButtonBar.ButtonData.CANCEL_CLOSE));
+        return alert.showAndWait().filter(replace::equals).isPresent();
+    }
+
+    @Override
     public Optional<Path> fileToOpen(Path near) {
         return Optional.ofNullable(chooser("Open a sheet", near).showOpenDialog(stage)).map(File::toPath);
     }

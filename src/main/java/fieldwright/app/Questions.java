@@ -12,6 +12,9 @@ interface Questions {
 
     Unsaved unsaved(String name);
 
+    /** Whether a file that was changed by another program meanwhile may be replaced. */
+    boolean mayReplace(String name);
+
     Optional<Path> fileToOpen(Path near);
 
     Optional<Path> fileToSave(Path near, String suggested);

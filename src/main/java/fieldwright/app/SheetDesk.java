@@ -8,6 +8,7 @@ import fieldwright.sheet.Sheet;
 import fieldwright.sheet.SheetException;
 import fieldwright.sheet.SheetFile;
 import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
@@ -330,6 +331,18 @@ final class SheetDesk {
     }
 
     // --- the file ---
+
+    /** True when the file holds another text than was opened or saved here last. */
+    boolean isChangedOutside(Path target) {
+        if (!target.equals(file) || !Files.exists(target)) {
+            return false;
+        }
+        try {
+            return !SheetFile.readText(target).equals(savedText);
+        } catch (IOException | SheetException unreadable) {
+            return true;
+        }
+    }
 
     /**
      * Saves the text; the results on the page become its record when all of them are current and the sheet is not

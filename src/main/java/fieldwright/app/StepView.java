@@ -215,10 +215,6 @@ final class StepView extends ThreeColumns {
         }
     }
 
-    boolean hasProblem() {
-        return !step.all(Output.Problem.class).isEmpty();
-    }
-
     // --- keys ---
 
     private void key(KeyEvent e) {

@@ -130,6 +130,11 @@ class PadSessionTest {
         }
 
         @Override
+        public boolean mayReplace(String name) {
+            return false;
+        }
+
+        @Override
         public Optional<Path> fileToOpen(Path near) {
             return Optional.empty();
         }

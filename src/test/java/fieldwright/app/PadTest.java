@@ -50,6 +50,7 @@ class PadTest {
     private static final class Answers implements Questions {
         final List<String> asked = new ArrayList<>();
         boolean run = true;
+        boolean replace;
         Unsaved unsaved = Unsaved.STAY;
         Path save;
 
@@ -63,6 +64,12 @@ class PadTest {
         public Unsaved unsaved(String name) {
             asked.add("unsaved " + name);
             return unsaved;
+        }
+
+        @Override
+        public boolean mayReplace(String name) {
+            asked.add("replace " + name);
+            return replace;
         }
 
         @Override
@@ -391,6 +398,20 @@ class PadTest {
         assertEquals(1, answers.asked.size());
         assertTrue(answers.asked.get(0).startsWith("tell list.txt cannot be opened: line 1: not a sheet"), answers.asked.get(0));
         assertEquals("silo.fws", Fx.get(() -> pad.name()));
+    }
+
+    @Test
+    void aFileChangedByAnotherProgramIsNotReplacedUnasked() throws Exception {
+        Fx.run(() -> pad.desk().setHeader("revision", "C"));
+        String theirs = Samples.SILO.replace("revision: B", "revision: X");
+        Files.writeString(file, theirs);
+        assertFalse(Fx.get(() -> pad.save()));
+        assertEquals(theirs, Files.readString(file));
+        answers.replace = true;
+        assertTrue(Fx.get(() -> pad.save()));
+        assertTrue(Files.readString(file).contains("revision: C"));
+        assertTrue(Fx.get(() -> pad.save()), "no question about one's own text");
+        assertEquals(List.of("replace silo.fws", "replace silo.fws"), answers.asked);
     }
 
     @Test
