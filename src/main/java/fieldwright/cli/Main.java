@@ -3,6 +3,7 @@ package fieldwright.cli;
 import fieldwright.app.AppLauncher;
 import fieldwright.output.RunOutcome;
 import fieldwright.session.Session;
+import fieldwright.session.SessionOptions;
 import fieldwright.session.WorkOptions;
 import fieldwright.sheet.Trust;
 import java.io.PrintWriter;
@@ -33,7 +34,7 @@ public final class Main {
 
     /** Works a sheet in a calculation process of its own, which ends with it. */
     static RunOutcome workInSession(String text) throws Exception {
-        try (Session session = Session.start()) {
+        try (Session session = Session.start(SessionOptions.BRIEF)) {
             return session.work(text, WorkOptions.FULL, progress -> { }).get();
         }
     }

@@ -7,6 +7,7 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.TimeUnit;
 
@@ -40,14 +41,15 @@ final class Child {
 
     /** Starts one with the Java and the class path of this process, from a directory or a jar alike, and waits until it answers. */
     static Child start(SessionOptions options) throws IOException {
-        String java = System.getProperty("java.home") + "/bin/java";
-        List<String> command = new ArrayList<>(List.of(java, "-Xmx" + options.heapMegabytes() + "m", "-XX:+UseSerialGC"));
-        command.addAll(LATE_OPTIMISING);
-        command.addAll(List.of("-XX:+ExitOnOutOfMemoryError", "-XX:+DisplayVMOutputToStderr", "-Djava.awt.headless=true",
-                "-Dfile.encoding=UTF-8",
+        List<String> command = new ArrayList<>(List.of(System.getProperty("java.home") + "/bin/java",
+                "-Xmx" + options.heapMegabytes() + "m", "-XX:+UseSerialGC", "-XX:+ExitOnOutOfMemoryError",
+                "-XX:+DisplayVMOutputToStderr", "-Djava.awt.headless=true", "-Dfile.encoding=UTF-8",
                 // the compiler's messages are read and put into the author's terms: they must come in one language
-                "-Duser.language=en", "-Duser.country=", "-cp", SnippetCompiler.absoluteClassPath(),
-                CalculationProcess.class.getName()));
+                "-Duser.language=en", "-Duser.country="));
+        if (options.brief()) {
+            command.add("-XX:TieredStopAtLevel=1");
+        }
+        command.addAll(List.of("-cp", SnippetCompiler.absoluteClassPath(), CalculationProcess.class.getName()));
         Process process = new ProcessBuilder(command).start();
         Child child = new Child(process, options.heapMegabytes());
         try {

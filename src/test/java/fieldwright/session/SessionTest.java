@@ -35,7 +35,7 @@ class SessionTest {
 
     @BeforeAll
     static void start() {
-        session = Session.start(new SessionOptions(192, Duration.ofSeconds(1)));
+        session = Session.start(new SessionOptions(192, Duration.ofSeconds(1), false));
     }
 
     @AfterAll
@@ -188,7 +188,7 @@ class SessionTest {
 
     @Test
     void theProcessEndsWithItsParent() throws Exception {
-        Session other = Session.start(new SessionOptions(128, Duration.ofSeconds(1)));
+        Session other = Session.start(new SessionOptions(128, Duration.ofSeconds(1), true));
         other.work(sheet(AFTER), WorkOptions.FULL, progress -> { }).get();
         ProcessHandle child = ProcessHandle.of(other.childPid()).orElseThrow();
         assertTrue(child.isAlive());
