@@ -566,9 +566,46 @@ sealed interface Charged {
             return Math.min(high[0] - low[0], Math.min(high[1] - low[1], high[2] - low[2]));
         }
 
+        /** From afar the integrand is smooth: Clenshaw and Curtis along the three sides. */
+        private Answer product(SmoothDensity density, double[] place, DoubleExponential.Setting setting) {
+            double[][] rule = RayJudge.clenshawCurtis(32 + setting.extraRadialNodes());
+            int n = rule[0].length;
+            double[] value = new double[4];
+            double[] magnitude = new double[4];
+            double eighth = (high[0] - low[0]) * (high[1] - low[1]) * (high[2] - low[2]) / 8;
+            double[][] node = new double[3][n];
+            for (int c = 0; c < 3; c++) {
+                for (int i = 0; i < n; i++) {
+                    node[c][i] = (high[c] + low[c]) / 2 + (high[c] - low[c]) / 2 * rule[0][i];
+                }
+            }
+            for (int i = 0; i < n; i++) {
+                for (int j = 0; j < n; j++) {
+                    for (int k = 0; k < n; k++) {
+                        double q = eighth * rule[1][i] * rule[1][j] * rule[1][k] * density.at(node[0][i], node[1][j], node[2][k]);
+                        double dx = place[0] - node[0][i];
+                        double dy = place[1] - node[1][j];
+                        double dz = place[2] - node[2][k];
+                        double square = dx * dx + dy * dy + dz * dz;
+                        double r = Math.sqrt(square);
+                        double[] each = {q * dx / (square * r), q * dy / (square * r), q * dz / (square * r), q / r};
+                        for (int c = 0; c < 4; c++) {
+                            value[c] += each[c];
+                            magnitude[c] += Math.abs(each[c]);
+                        }
+                    }
+                }
+            }
+            return new Answer(value, magnitude, (long) n * n * n);
+        }
+
         @Override
         public Answer judge(SmoothDensity density, boolean polynomial, Exact.Position place, double[] push,
                 DoubleExponential.Setting setting) {
+            double[] middle = {(low[0] + high[0]) / 2, (low[1] + high[1]) / 2, (low[2] + high[2]) / 2};
+            if (Charged.distance(middle, place.doubles()) > 1.5 * size()) {
+                return product(density, place.doubles(), setting);
+            }
             return RayJudge.judge(RayBody.box(place.doubles(), low, high), density, radial(polynomial), setting);
         }
     }
@@ -584,7 +621,17 @@ sealed interface Charged {
         @Override
         public Answer judge(SmoothDensity density, boolean polynomial, Exact.Position place, double[] push,
                 DoubleExponential.Setting setting) {
+            if (Charged.distance(middle(), place.doubles()) > 1.5 * size) {
+                return RayJudge.fromAfar(RayBody.revolution(middle(), faces, rims, central), density, place.doubles(), setting);
+            }
             return RayJudge.judge(RayBody.revolution(place.doubles(), faces, rims, central), density, radial(polynomial), setting);
+        }
+
+        /** On the axis, half-way between the lowest and highest rim; the origin for bodies without rims. */
+        private double[] middle() {
+            double low = rims.stream().mapToDouble(RayBody.Rim::z).min().orElse(0);
+            double high = rims.stream().mapToDouble(RayBody.Rim::z).max().orElse(0);
+            return new double[] {0, 0, low == high ? low / 2 : (low + high) / 2};
         }
 
         static Round drum(double inner, double outer, double z1, double z2) {

@@ -13,6 +13,10 @@ final class DoubleExponential {
     private static final int LEVELS = 5;
     private static final int DEEPEST = 45;
     private static final double SMALLEST = 1e-19;
+    /** Angles and logarithms of order one have no digits beyond this. */
+    private static final double RESOLUTION = 1e-14;
+    /** Beyond this nothing is bisected any more; the two settings then differ, which shows. */
+    private static final long BUDGET = 1_500_000;
 
     /** f at x in [a, b]; both distances from the ends are exact to the last digits, x itself only to eps·|x|. */
     interface Integrand {
@@ -31,13 +35,14 @@ final class DoubleExponential {
     private final double[] node = new double[SIZE];
     private final double[] sum = new double[SIZE];
     private final double[] magnitude = new double[SIZE];
-    private final double[] last = new double[SIZE];
+    private final double[] before = new double[SIZE];
     private double[] total;
     private double[] totalMagnitude;
     private Integrand integrand;
     private double a;
     private double b;
     private final double[] peak = new double[SIZE];
+    private int deepest = DEEPEST;
     private long evaluations;
 
     DoubleExponential(Setting setting) {
@@ -66,6 +71,11 @@ final class DoubleExponential {
         return evaluations;
     }
 
+    /** While rough, pieces are not bisected: a first look that tells how large the calls to come will be. */
+    void setRough(boolean rough) {
+        deepest = rough ? 0 : DEEPEST;
+    }
+
     /** Adds the integral over [a, b] to sums and that of the absolute value to magnitudes. */
     void add(Integrand f, double from, double to, double[] sums, double[] magnitudes) {
         if (!(to > from)) {
@@ -83,48 +93,49 @@ final class DoubleExponential {
     }
 
     /** A piece of [a, b]: its distance from a, its length, its distance from b. */
-    private void piece(double before, double length, double after, int depth) {
+    private void piece(double start, double length, double after, int depth) {
         Arrays.fill(sum, 0);
         Arrays.fill(magnitude, 0);
         double h = setting.step;
-        nodes(0, before, length, after);
+        nodes(0, start, length, after);
         double former = Double.POSITIVE_INFINITY;
         for (int level = 1; level < LEVELS; level++) {
             for (int c = 0; c < SIZE; c++) {
-                last[c] = sum[c] * h;
+                before[c] = sum[c] * h;
             }
             h /= 2;
-            nodes(level, before, length, after);
+            nodes(level, start, length, after);
             double change = change(h);
             boolean done = error(change, h, length) <= setting.tolerance && (level > 1 || change == 0);
-            if (done || depth >= DEEPEST && level == LEVELS - 1) {
+            boolean last = depth >= deepest || length < RESOLUTION || evaluations > BUDGET;
+            if (done || last && level == LEVELS - 1) {
                 for (int c = 0; c < SIZE; c++) {
                     total[c] += sum[c] * h * length;
                     totalMagnitude[c] += magnitude[c] * h * length;
                 }
                 return;
             }
-            if (level >= 2 && depth < DEEPEST && change > 3e-3 || level == 3 && change > 1e-5 && depth < DEEPEST
-                    || level == LEVELS - 2 && change > 0.3 * former && depth < DEEPEST) {
+            if (!last && (level >= 2 && change > 3e-3 || level == 3 && change > 1e-5
+                    || level == LEVELS - 2 && change > 0.3 * former)) {
                 break;
             }
             former = change;
         }
         double left = length * setting.cut;
         double right = length - left;
-        piece(before, left, after + right, depth + 1);
-        piece(before + left, right, after, depth + 1);
+        piece(start, left, after + right, depth + 1);
+        piece(start + left, right, after, depth + 1);
     }
 
-    private void nodes(int level, double before, double length, double after) {
+    private void nodes(int level, double start, double length, double after) {
         double[] q = fraction[level];
         double[] w = weight[level];
         for (int k = 0; k < q.length; k++) {
             double near = length * q[k];
             double far = length * (1 - q[k]);
-            one(before + near, after + far, w[k]);
+            one(start + near, after + far, w[k]);
             if (level > 0 || k > 0) {
-                one(before + far, after + near, w[k]);
+                one(start + far, after + near, w[k]);
             }
         }
     }
@@ -142,10 +153,10 @@ final class DoubleExponential {
     private double change(double h) {
         double field = 0;
         for (int c = 0; c < 3; c++) {
-            field = Math.max(field, Math.abs(sum[c] * h - last[c]));
+            field = Math.max(field, Math.abs(sum[c] * h - before[c]));
         }
         double size = largest(magnitude) * h;
-        double potential = Math.abs(sum[3] * h - last[3]);
+        double potential = Math.abs(sum[3] * h - before[3]);
         return Math.max(field == 0 ? 0 : field / size, potential == 0 ? 0 : potential / (magnitude[3] * h));
     }
 

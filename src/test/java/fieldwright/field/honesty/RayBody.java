@@ -234,14 +234,13 @@ abstract class RayBody {
             double along = rho0 * cosA;
             for (Rim rim : rims) {
                 double square = (rim.radius - off) * (rim.radius + off);
-                if (square >= 0) {
-                    double half = Math.sqrt(square);
-                    if (half - along >= 0) {
-                        out[n++] = Math.atan2(half - along, rim.z - z0);
-                    }
-                    if (-half - along >= 0) {
-                        out[n++] = Math.atan2(-half - along, rim.z - z0);
-                    }
+                double half = square > 0 ? Math.sqrt(square) : 0;
+                if (half - along > 0) {
+                    out[n++] = Math.atan2(half - along, rim.z - z0);
+                }
+                // A rim that is just missed still bends the outline sharply where it is nearest.
+                if (half > 0 && -half - along > 0) {
+                    out[n++] = Math.atan2(-half - along, rim.z - z0);
                 }
             }
             for (int i = 0; i < faces.length; i++) {
@@ -267,7 +266,7 @@ abstract class RayBody {
             double radius = Math.sqrt(Math.max(0, -w / q.a));
             p[i] = w < 0 && q.a > 0 ? q.a * q.a * (radius - off) * (radius + off) : -q.a * (q.a * off * off + w);
             m[i] = q.a * along * slope[i];
-            s[i] = slope[i] * slope[i] - q.b * value[i];
+            s[i] = q.c * q.c / 4 - q.b * q.d - q.a * q.b * rho0 * rho0;
             if (q.isSphere()) {
                 double whole = Math.sqrt(-q.d);
                 double square = (whole - off) * (whole + off);

@@ -13,6 +13,7 @@ final class RayJudge {
 
     private final RayBody body;
     private final SmoothDensity density;
+    private final double[] from;
     private final DoubleExponential azimuth;
     private final DoubleExponential polar;
     private final double[] ray;
@@ -26,9 +27,10 @@ final class RayJudge {
     private final double[] direction = new double[3];
     private long evaluations;
 
-    private RayJudge(RayBody body, SmoothDensity density, int radialNodes, DoubleExponential.Setting setting) {
+    private RayJudge(RayBody body, SmoothDensity density, double[] from, int radialNodes, DoubleExponential.Setting setting) {
         this.body = body;
         this.density = density;
+        this.from = from;
         azimuth = new DoubleExponential(setting);
         polar = new DoubleExponential(setting);
         double[][] rule = clenshawCurtis(radialNodes + setting.extraRadialNodes());
@@ -37,18 +39,31 @@ final class RayJudge {
     }
 
     static Answer judge(RayBody body, SmoothDensity density, int radialNodes, DoubleExponential.Setting setting) {
-        return new RayJudge(body, density, radialNodes, setting).work();
+        return new RayJudge(body, density, null, radialNodes, setting).work();
+    }
+
+    /**
+     * For a place well outside: rays from {@code body.place}, some point about the middle, and Coulomb's law to the place
+     * {@code from} there. Seen from afar a thin body spans so small an angle that doubles of the direction lose it.
+     */
+    static Answer fromAfar(RayBody body, SmoothDensity density, double[] from, DoubleExponential.Setting setting) {
+        return new RayJudge(body, density, from, 28, setting).work();
     }
 
     private Answer work() {
         double[] value = new double[4];
         double[] magnitude = new double[4];
         double[] breaks = breaks(body.azimuths());
+        polar.setRough(true);
+        for (int k = 0; k + 1 < breaks.length; k++) {
+            halfPlane((breaks[k] + breaks[k + 1]) / 2, 0, 0, new double[4]);
+        }
+        polar.setRough(false);
         for (int k = 0; k + 1 < breaks.length; k++) {
             azimuth.add(this::halfPlane, breaks[k], breaks[k + 1], value, magnitude);
         }
-        double[] turned = new double[4];
-        for (int c = 0; c < 3; c++) {
+        double[] turned = from == null ? new double[4] : value.clone();
+        for (int c = 0; c < 3 && from == null; c++) {
             for (int axis = 0; axis < 3; axis++) {
                 turned[c] += value[axis] * body.axes[axis][c];
             }
@@ -97,6 +112,9 @@ final class RayJudge {
                 direction[c] = u * body.axes[0][c] + v * body.axes[1][c] + cosT * body.axes[2][c];
             }
         }
+        if (from != null) {
+            Arrays.fill(out, 0);
+        }
         for (int k = 0; k < n; k += 2) {
             double half = (crossings[k + 1] - crossings[k]) / 2;
             double middle = (crossings[k + 1] + crossings[k]) / 2;
@@ -106,13 +124,31 @@ final class RayJudge {
                         body.place[1] + r * direction[1], body.place[2] + r * direction[2]);
                 charge += q;
                 moment += q * r;
+                if (from != null) {
+                    coulomb(q * r * r * sinT, r, out);
+                }
             }
             evaluations += ray.length;
+        }
+        if (from != null) {
+            return;
         }
         out[0] = -charge * sinT * sinT * cosA;
         out[1] = -charge * sinT * sinT * sinA;
         out[2] = -charge * sinT * cosT;
         out[3] = moment * sinT;
+    }
+
+    private void coulomb(double q, double r, double[] out) {
+        double dx = from[0] - (body.place[0] + r * direction[0]);
+        double dy = from[1] - (body.place[1] + r * direction[1]);
+        double dz = from[2] - (body.place[2] + r * direction[2]);
+        double square = dx * dx + dy * dy + dz * dz;
+        double distance = Math.sqrt(square);
+        out[0] += q * dx / (square * distance);
+        out[1] += q * dy / (square * distance);
+        out[2] += q * dz / (square * distance);
+        out[3] += q / distance;
     }
 
     /** Nodes and weights on [-1, 1]; Clenshaw and Curtis 1960, weights as in Trefethen, SIAM Review 50 (2008) 67. */

@@ -1,0 +1,78 @@
+package fieldwright.field.honesty;
+
+import fieldwright.charge.Charge;
+import fieldwright.charge.Surroundings;
+import fieldwright.formula.Formula;
+import fieldwright.formula.Scope;
+import fieldwright.geometry.CoordinateRegion;
+import fieldwright.geometry.CoordinateSystem;
+import fieldwright.geometry.ParametricRegion;
+import fieldwright.geometry.Region;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+
+/** A region as an author would type it: a system with limits, or three formulas with one parameter. */
+record RegionSpec(String system, List<String[]> entries) {
+    /** Coordinates between limits {name, from, to} or held fixed {name, at}. */
+    static RegionSpec of(String system, String[]... entries) {
+        return new RegionSpec(system, List.of(entries));
+    }
+
+    static String[] between(String name, String from, String to) {
+        return new String[] {name, from, to};
+    }
+
+    static String[] fixed(String name, String at) {
+        return new String[] {name, at};
+    }
+
+    /** A length that reads back as the same double. */
+    static String m(double value) {
+        return value < 0 ? "(" + value + " m)" : value + " m";
+    }
+
+    static String number(double value) {
+        return value < 0 ? "(" + value + ")" : Double.toString(value);
+    }
+
+    static Formula formula(String text) {
+        return Formula.parse(text).bind(Scope.EMPTY);
+    }
+
+    Region region() {
+        if (system.equals("parametric")) {
+            ParametricRegion r = ParametricRegion.of(formula(entries.get(0)[1]), formula(entries.get(1)[1]), formula(entries.get(2)[1]));
+            for (String[] e : entries.subList(3, entries.size())) {
+                r = r.over(e[0], formula(e[1]), formula(e[2]));
+            }
+            return r;
+        }
+        CoordinateRegion r = CoordinateRegion.in(CoordinateSystem.valueOf(system.toUpperCase(Locale.ROOT)));
+        for (String[] e : entries) {
+            r = e.length == 2 ? r.fixed(e[0], formula(e[1])) : r.limits(e[0], formula(e[1]), formula(e[2]));
+        }
+        return r;
+    }
+
+    Charge charge(String density, Exact.Placing placing) {
+        Region r = region();
+        if (placing.angle() != 0) {
+            r = r.turnedAbout(placing.axis() == 0 ? 1 : 0, placing.axis() == 1 ? 1 : 0, placing.axis() == 2 ? 1 : 0, placing.angle());
+        }
+        double[] s = placing.shift();
+        if (s[0] != 0 || s[1] != 0 || s[2] != 0) {
+            r = r.movedBy(s[0], s[1], s[2]);
+        }
+        return new Charge(r, formula(density), Surroundings.FREE_SPACE);
+    }
+
+    @Override
+    public String toString() {
+        List<String> parts = new ArrayList<>();
+        for (String[] e : entries) {
+            parts.add(e.length == 2 ? "." + e[0] + "(\"" + e[1] + "\")" : "." + e[0] + "(\"" + e[1] + "\", \"" + e[2] + "\")");
+        }
+        return system + "()" + String.join("", parts);
+    }
+}
