@@ -154,6 +154,11 @@ sealed interface Charged {
         }
     }
 
+    /** Above a plane; on it exactly, to the side pushed to, when there is a push. */
+    private static double height(Exact.Position place, double[] push) {
+        return push[2] != 0 ? push[2] : place.z().doubleValue();
+    }
+
     private static double distance(double[] a, double[] b) {
         double dx = a[0] - b[0];
         double dy = a[1] - b[1];
@@ -185,7 +190,7 @@ sealed interface Charged {
             double right = Exact.of(x2).subtract(place.x()).doubleValue();
             double low = Exact.of(y1).subtract(place.y()).doubleValue();
             double high = Exact.of(y2).subtract(place.y()).doubleValue();
-            double height = place.z().doubleValue() + push[2];
+            double height = height(place, push);
             double dx = Math.max(0, Math.max(left, -right));
             double dy = Math.max(0, Math.max(low, -high));
             double[] breaks = left < 0 && right > 0 ? new double[] {left, 0, right} : new double[] {left, right};
@@ -229,7 +234,7 @@ sealed interface Charged {
             double left = -p[0];
             double right = Exact.of(a).subtract(place.x()).doubleValue();
             double low = -p[1];
-            double height = p[2] + push[2];
+            double height = height(place, push);
             double outward = (b * p[0] + a * p[1] - a * b) / Math.sqrt(a * a + b * b);
             double outside = Math.max(0, Math.max(left, Math.max(low, outward)));
             double[] breaks = left < 0 && right > 0 ? new double[] {left, 0, right} : new double[] {left, right};
@@ -274,7 +279,7 @@ sealed interface Charged {
             double rho0 = exactRho.doubleValue();
             double cos = rho0 == 0 ? 1 : place.x().doubleValue() / rho0;
             double sin = rho0 == 0 ? 0 : place.y().doubleValue() / rho0;
-            double height = place.z().doubleValue() + push[2];
+            double height = height(place, push);
             double outerGap = Exact.of(outer).subtract(exactRho).doubleValue();
             double innerGap = Exact.of(inner).subtract(exactRho).doubleValue();
             double[] breaks = inner > 0 ? new double[] {-outer, -inner, 0, inner, outer} : new double[] {-outer, 0, outer};
@@ -543,10 +548,11 @@ sealed interface Charged {
         BigDecimal rho0 = Exact.hypot(place.x(), place.y());
         double azimuth = Math.atan2(place.y().doubleValue(), place.x().doubleValue());
         double pushRho = push[0] * Math.cos(azimuth) + push[1] * Math.sin(azimuth);
-        double offRho = rho0.subtract(profile.exactRho(nearest)).doubleValue() + pushRho;
-        double offZ = place.z().subtract(profile.exactZ(nearest)).doubleValue() + push[2];
+        boolean on = pushRho != 0 || push[2] != 0;
+        double offRho = on ? pushRho : rho0.subtract(profile.exactRho(nearest)).doubleValue();
+        double offZ = on ? push[2] : place.z().subtract(profile.exactZ(nearest)).doubleValue();
         double distance = Math.sqrt(offRho * offRho + offZ * offZ);
-        return RevolutionJudge.judge(profile, density, arc, place, new double[] {pushRho, push[2]}, nearest, distance, setting);
+        return RevolutionJudge.judge(profile, density, arc, place, new double[] {offRho, offZ}, nearest, distance, setting);
     }
 
     /** Sides along the axes. */

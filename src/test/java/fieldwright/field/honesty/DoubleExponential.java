@@ -16,7 +16,7 @@ final class DoubleExponential {
     /** Angles and logarithms of order one have no digits beyond this. */
     private static final double RESOLUTION = 1e-14;
     /** Beyond this nothing is bisected any more; the two settings then differ, which shows. */
-    private static final long BUDGET = 1_500_000;
+    private static final long BUDGET = 400_000;
 
     /** f at x in [a, b]; both distances from the ends are exact to the last digits, x itself only to eps·|x|. */
     interface Integrand {

@@ -30,6 +30,10 @@ record Judged(int number, int side, double[] value, double fieldError, double po
                 value[c] = b.value()[c] * COULOMB;
             }
             double field = COULOMB * (2 * a.fieldDifference(b) + 16 * Answer.EPS * b.fieldMagnitude());
+            if (p.gap() == 0) {
+                // The place lies on the charge to rounding only, and the field changes over the thickness.
+                field += 8 * Answer.EPS * p.size() / p.thickness() * COULOMB * b.fieldMagnitude();
+            }
             double potential = COULOMB * (2 * Math.abs(a.value()[3] - b.value()[3]) + 16 * Answer.EPS * b.magnitude()[3]);
             both.add(new Judged(p.number(), side, value, field, potential, COULOMB * b.fieldMagnitude(), COULOMB * b.magnitude()[3],
                     p.toString().hashCode()));

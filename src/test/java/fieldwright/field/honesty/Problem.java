@@ -11,7 +11,10 @@ import java.util.Random;
  * {@code normal} leads away from the charge at the nearest place (sheet frame); gap is in m, 0 on the charge.
  */
 record Problem(int number, String kind, Where where, RegionSpec spec, String density, List<Part> parts, Exact.Placing placing, double[] at,
-        double[] normal, double gap, double size) {
+        double[] normal, double gap, double size, double thickness) {
+    /** How far a place on a surface is moved to either side, in sizes: beyond all digits of the answer. */
+    private static final double PUSH = 1e-20;
+
     enum Where { FAR, MID, NEAR, NEAR_RIM, ON, RIM, INSIDE, AXIS }
 
     /** A part whose density has no kink. */
@@ -52,7 +55,8 @@ record Problem(int number, String kind, Where where, RegionSpec spec, String den
             local = new double[] {0, 0, random.nextBoolean() ? size * (random.nextDouble() * 2 - 1) : gap};
         }
         double[] at = placing.isNone() ? local : placing.sheet(local);
-        return new Problem(number, shape.kind(), where, shape.spec(), drawn.text, drawn.parts, placing, at, placing.turned(spot[1]), gap, size);
+        return new Problem(number, shape.kind(), where, shape.spec(), drawn.text, drawn.parts, placing, at, placing.turned(spot[1]), gap, size,
+                shape.charged().thickness());
     }
 
     private static Where where(Shape shape, Random random) {
@@ -103,7 +107,7 @@ record Problem(int number, String kind, Where where, RegionSpec spec, String den
         }
         if (random.nextBoolean()) {
             Smooth g = smooth(shape, random);
-            drawn.text = "1 " + unit + "*when(" + cut.text() + " < " + quantity(cut.at(), cut.unit()) + ", " + f.text + ", otherwise " + g.text + ")";
+            drawn.text = "1 " + unit + "*when(" + cut.text() + " < " + quantity(cut.at(), cut.unit()) + ", " + f.text + ", " + g.text + ")";
             drawn.parts.add(new Part(cut.below(), (x, y, z) -> nano * f.value.at(x, y, z), f.polynomial));
             drawn.parts.add(new Part(cut.above(), (x, y, z) -> nano * g.value.at(x, y, z), g.polynomial));
             return drawn;
@@ -180,7 +184,7 @@ record Problem(int number, String kind, Where where, RegionSpec spec, String den
         if (side != 0) {
             double[] n = new Exact.Placing(placing.axis(), -placing.angle(), new double[3]).turned(normal);
             for (int c = 0; c < 3; c++) {
-                push[c] = side * n[c] * 1e-14 * size;
+                push[c] = side * n[c] * PUSH * size;
             }
         }
         Answer sum = Answer.zero();

@@ -102,6 +102,10 @@ abstract class RayBody {
             return a == 1 && b == 1 && c == 0;
         }
 
+        boolean isCylinder() {
+            return a == 1 && b == 0 && c == 0;
+        }
+
         static Quadric sphere(double radius, boolean outside) {
             return new Quadric(1, 1, 0, -radius * radius, outside);
         }
@@ -167,14 +171,17 @@ abstract class RayBody {
             section = new double[this.faces.length];
             for (int i = 0; i < value.length; i++) {
                 Quadric q = this.faces[i];
-                value[i] = valueAt(q);
+                double v = valueAt(q);
+                double size = Math.abs(q.a) * rho0 * rho0 + Math.abs(q.b) * z0 * z0 + Math.abs(q.c * z0) + Math.abs(q.d);
+                // On a curved face to rounding: exactly on it.
+                value[i] = q.a != 0 && Math.abs(v) < 4 * Math.ulp(1.0) * size ? 0 : v;
                 slope[i] = q.b * z0 + q.c / 2;
             }
         }
 
         /** Value of the quadric at the place; the common forms factored so that a small gap keeps its digits. */
         private double valueAt(Quadric q) {
-            if (q.a == 1 && q.b == 0 && q.c == 0) {
+            if (q.isCylinder()) {
                 double radius = Math.sqrt(-q.d);
                 return (rho0 - radius) * (rho0 + radius);
             }
@@ -182,6 +189,10 @@ abstract class RayBody {
                 double radius = Math.sqrt(-q.d);
                 double r = rho0 == 0 ? Math.abs(z0) : Math.sqrt(rho0 * rho0 + z0 * z0);
                 return (r - radius) * (r + radius);
+            }
+            if (q.a == 1 && q.b < 0 && q.c == 0 && q.d == 0) {
+                double slope = Math.sqrt(-q.b);
+                return (rho0 - slope * Math.abs(z0)) * (rho0 + slope * Math.abs(z0));
             }
             return q.a * rho0 * rho0 + q.b * z0 * z0 + q.c * z0 + q.d;
         }
@@ -225,6 +236,10 @@ abstract class RayBody {
                 found.add(Math.PI + Math.asin(sine));
                 found.add(Math.PI - Math.asin(sine));
             }
+            if (Math.abs(sine - 1) < 0.1) {
+                found.add(Math.PI / 2);
+                found.add(-Math.PI / 2);
+            }
         }
 
         @Override
@@ -249,8 +264,11 @@ abstract class RayBody {
                     continue;
                 }
                 discriminant(i, off, along);
-                double square = q.isSphere() ? section[i] * Math.abs(section[i]) * value[i] : m[i] * m[i] - p[i] * s[i];
-                if (square > 0) {
+                // m² − p s without its cancellation
+                double square = q.a * value[i] * (q.isSphere() ? section[i] * Math.abs(section[i]) : q.a * q.b * along * along + s[i]);
+                if (value[i] == 0) {
+                    n = direction(-slope[i], q.a * along, out, n);
+                } else if (square > 0) {
                     double root = -(m[i] + Math.copySign(Math.sqrt(square), m[i]));
                     n = direction(root, p[i], out, n);
                     n = direction(s[i], root, out, n);
@@ -275,8 +293,8 @@ abstract class RayBody {
         }
 
         private static int direction(double sine, double cosine, double[] out, int n) {
-            double theta = sine >= 0 ? Math.atan2(sine, cosine) : Math.atan2(-sine, -cosine);
-            out[n] = theta;
+            // a negative zero would be read as the other half-plane
+            out[n] = Math.atan2(Math.abs(sine), sine < 0 ? -cosine : cosine);
             return n + 1;
         }
 
@@ -309,10 +327,9 @@ abstract class RayBody {
                 high = half > 0 ? r : Double.POSITIVE_INFINITY;
                 between = true;
             } else {
-                double square = p[i] * sinT * sinT + 2 * m[i] * sinT * cosT + s[i] * cosT * cosT;
-                if (q.isSphere()) {
-                    double off = Math.abs(z0 * sinT - rho0 * cosA * cosT);
-                    square = section[i] < 0 ? -1 : (section[i] - off) * (section[i] + off);
+                double square = half * half - a * c;
+                if (q.isCylinder() && c != 0) {
+                    square = sinT * sinT * p[i];
                 }
                 if (square <= 0) {
                     return a < 0 != q.outside ? n : 0;

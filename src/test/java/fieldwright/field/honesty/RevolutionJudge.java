@@ -49,16 +49,15 @@ final class RevolutionJudge {
     private double gapZ;
     private double grade;
 
-    private RevolutionJudge(Profile profile, SmoothDensity density, double[] arc, Exact.Position place, double[] push,
+    private RevolutionJudge(Profile profile, SmoothDensity density, double[] arc, Exact.Position place, double[] off,
             double nearest, double distance, DoubleExponential.Setting setting) {
         this.profile = profile;
         this.density = density;
         this.nearest = nearest;
-        BigDecimal exactRho0 = Exact.hypot(place.x(), place.y());
-        rho0 = exactRho0.doubleValue() + push[0];
+        rho0 = Exact.hypot(place.x(), place.y()).doubleValue();
         azimuth0 = Math.atan2(place.y().doubleValue(), place.x().doubleValue());
-        offRho = exactRho0.subtract(profile.exactRho(nearest)).doubleValue() + push[0];
-        offZ = place.z().subtract(profile.exactZ(nearest)).doubleValue() + push[1];
+        offRho = off[0];
+        offZ = off[1];
         nearestRho = profile.exactRho(nearest).doubleValue();
         nearestZ = profile.exactZ(nearest).doubleValue();
         scale = distance / profile.speed(nearest);
@@ -68,12 +67,12 @@ final class RevolutionJudge {
     }
 
     /**
-     * Arc: limits of phi, null for the full circle. Push: a small displacement of the place in rho and z, to stand on one
-     * side of the surface. Nearest: parameter of the nearest point, rough; distance to it, rough.
+     * Arc: limits of phi, null for the full circle. Off: the place's rho and z less those of the profile at {@code nearest}, a
+     * point about nearest, with all digits. Distance: rough.
      */
-    static Answer judge(Profile profile, SmoothDensity density, double[] arc, Exact.Position place, double[] push,
+    static Answer judge(Profile profile, SmoothDensity density, double[] arc, Exact.Position place, double[] off,
             double nearest, double distance, DoubleExponential.Setting setting) {
-        return new RevolutionJudge(profile, density, arc, place, push, nearest, distance, setting).work();
+        return new RevolutionJudge(profile, density, arc, place, off, nearest, distance, setting).work();
     }
 
     /** An arc as pairs of angles from the place's azimuth within (−π, π], cut at 0. */

@@ -152,7 +152,7 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
         double edge = Math.sqrt(c);
         return new Shape(inner == 0 ? "disc" : "annulus", RegionSpec.of("cylindrical", between("rho", m(inner), m(outer)),
                 between("phi", "0", TURN), fixed("z", "0 m")), new Charged.Annulus(inner, outer), new double[] {outer, outer, outer},
-                new Cut("rho^2", " m^2", c, (x, y, z) -> x * x + y * y, new Charged.Annulus(inner, edge),
+                new Cut("rho^2", " (m^2)", c, (x, y, z) -> x * x + y * y, new Charged.Annulus(inner, edge),
                         new Charged.Annulus(edge, outer)),
                 r -> new double[][] {about(uniform(r, inner, outer), angle(r), 0), {0, 0, r.nextBoolean() ? 1 : -1}},
                 r -> {
@@ -208,7 +208,7 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
         double edge = Math.sqrt(c);
         return new Shape("bowl", RegionSpec.of("cylindrical", between("rho", "0 m", m(radius)), between("phi", "0", TURN),
                 fixed("z", RegionSpec.number(k) + " (1/m)*rho^2")), new Charged.Bowl(k, 0, radius), new double[] {radius, radius, height},
-                new Cut("rho^2", " m^2", c, (x, y, z) -> x * x + y * y, new Charged.Bowl(k, 0, edge),
+                new Cut("rho^2", " (m^2)", c, (x, y, z) -> x * x + y * y, new Charged.Bowl(k, 0, edge),
                         new Charged.Bowl(k, edge, radius)),
                 r -> {
                     double rho = uniform(r, 0, radius);
@@ -288,7 +288,7 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
         double edge = Math.sqrt(c);
         Cut cut = random.nextBoolean()
                 ? new Cut("z", " m", cz, (x, y, z) -> z, Charged.Round.drum(inner, outer, z1, cz), Charged.Round.drum(inner, outer, cz, z2))
-                : new Cut("rho^2", " m^2", c, (x, y, z) -> x * x + y * y, Charged.Round.drum(inner, edge, z1, z2),
+                : new Cut("rho^2", " (m^2)", c, (x, y, z) -> x * x + y * y, Charged.Round.drum(inner, edge, z1, z2),
                         Charged.Round.drum(edge, outer, z1, z2));
         return new Shape(inner == 0 ? "cylinder" : "hollow cylinder", RegionSpec.of("cylindrical", between("rho", m(inner), m(outer)),
                 between("phi", "0", TURN), between("z", m(z1), m(z2))), Charged.Round.drum(inner, outer, z1, z2),
@@ -326,7 +326,7 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
                         between("y", "-sqrt((" + m(radius) + "-x)*(" + m(radius) + "+x))", "sqrt((" + m(radius) + "-x)*(" + m(radius) + "+x))"),
                         between("z", "-sqrt(" + square + "-x^2-y^2)", "sqrt(" + square + "-x^2-y^2)"))
                 : RegionSpec.of("spherical", between("r", "0 m", m(radius)), between("theta", "0", "pi"), between("phi", "0", TURN));
-        Cut cut = cartesian ? null : new Cut("r^2", " m^2", c, (x, y, z) -> x * x + y * y + z * z,
+        Cut cut = cartesian ? null : new Cut("r^2", " (m^2)", c, (x, y, z) -> x * x + y * y + z * z,
                 Charged.Round.shell(0, edge, false), Charged.Round.shell(edge, radius, false));
         return new Shape(cartesian ? "ball in xyz" : "ball", spec, Charged.Round.shell(0, radius, false), new double[] {radius, radius, radius},
                 cut, r -> {
@@ -342,7 +342,7 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
         return new Shape(upper ? "half shell" : "thick shell", RegionSpec.of("spherical", between("r", m(inner), m(outer)),
                 between("theta", "0", upper ? "pi/2" : "pi"), between("phi", "0", TURN)), Charged.Round.shell(inner, outer, upper),
                 new double[] {outer, outer, outer},
-                new Cut("r^2", " m^2", c, (x, y, z) -> x * x + y * y + z * z, Charged.Round.shell(inner, edge, upper),
+                new Cut("r^2", " (m^2)", c, (x, y, z) -> x * x + y * y + z * z, Charged.Round.shell(inner, edge, upper),
                         Charged.Round.shell(edge, outer, upper)),
                 r -> {
                     double[] d = direction(r);
