@@ -22,7 +22,7 @@ sealed interface Charged {
 
     /** Nodes along a ray: polynomials of degree up to 5 exactly, others to rounding. */
     private static int radial(boolean polynomial) {
-        return polynomial ? 9 : 28;
+        return polynomial ? 9 : 26;
     }
 
     /** Straight along z. */

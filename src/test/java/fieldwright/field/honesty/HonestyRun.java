@@ -5,6 +5,7 @@ import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HashMap;
@@ -42,11 +43,15 @@ public final class HonestyRun {
         if (table.getParent() != null) {
             Files.createDirectories(table.getParent());
         }
-        try (PrintWriter out = new PrintWriter(Files.newBufferedWriter(table, StandardCharsets.UTF_8))) {
-            out.println("# Values of the honesty suite's own judge (DoubleExponential and the judges beside it), not published ones; seed "
-                    + seed + ", worked by HonestyRun " + count + " " + seed + ".");
-            out.println("# number, side, Ex, Ey, Ez (V/m), V (V), error of E, error of V (from two settings of the judge), magnitude of E, of V "
-                    + "(integral of the absolute value), hash of the problem's text");
+        boolean fresh = !Files.exists(table);
+        try (PrintWriter out = new PrintWriter(Files.newBufferedWriter(table, StandardCharsets.UTF_8, StandardOpenOption.CREATE,
+                StandardOpenOption.APPEND))) {
+            if (fresh) {
+                out.println("# Values of the honesty suite's own judge (DoubleExponential and the judges beside it), not published ones; seed "
+                        + seed + ", worked by HonestyRun.");
+                out.println("# number, side, Ex, Ey, Ez (V/m), V (V), error of E, error of V (from two settings of the judge), magnitude of E, "
+                        + "of V (integral of the absolute value), hash of the problem's text");
+            }
             for (int number = 0; number < count; number++) {
                 Problem p = Problem.of(seed, number);
                 List<Judged> judged = null;
@@ -54,11 +59,9 @@ public final class HonestyRun {
                     judged = known.get(number);
                     if (judged == null || judged.get(0).textHash() != p.toString().hashCode()) {
                         judged = Judged.of(p);
+                        judged.forEach(j -> out.println(j.line()));
+                        out.flush();
                     }
-                    for (Judged j : judged) {
-                        out.println(j.line());
-                    }
-                    out.flush();
                 }
                 findings.addAll(Finding.of(p, judged));
             }

@@ -66,7 +66,9 @@ record Judged(int number, int side, double[] value, double fieldError, double po
         for (String line : lines) {
             if (!line.isBlank() && !line.startsWith("#")) {
                 Judged j = parse(line);
-                all.computeIfAbsent(j.number, n -> new ArrayList<>()).add(j);
+                List<Judged> sides = all.computeIfAbsent(j.number, n -> new ArrayList<>());
+                sides.removeIf(old -> old.side == j.side);
+                sides.add(j);
             }
         }
         return all;
