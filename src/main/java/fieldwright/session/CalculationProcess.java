@@ -80,7 +80,6 @@ public final class CalculationProcess {
                 if (outcome == null) {
                     runner.close();
                     runner = new SheetRunner(printing, authorCode);
-                    outcome = runner.stoppedOutcome(work.text());
                 }
                 send(new Reply.Done(work.run(), outcome));
             } catch (InterruptedException e) {

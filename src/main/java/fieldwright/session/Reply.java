@@ -11,6 +11,7 @@ sealed interface Reply extends Serializable {
 
     record News(long run, Progress progress) implements Reply { }
 
+    /** @param outcome null when the author's code had to be stopped hard: the parent knows what had been worked by then */
     record Done(long run, RunOutcome outcome) implements Reply { }
 
     /** The process ends of itself, for this reason. */

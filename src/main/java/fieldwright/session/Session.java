@@ -203,7 +203,7 @@ public final class Session implements AutoCloseable {
                 while (true) {
                     Reply reply = child.pipe().receive(Reply.class);
                     if (reply instanceof Reply.Done done && done.run() == number) {
-                        return done.outcome();
+                        return done.outcome() != null ? done.outcome() : unfinished("");
                     }
                     hear(reply);
                 }
@@ -240,7 +240,7 @@ public final class Session implements AutoCloseable {
             }
         }
 
-        /** What there is of a run whose process is gone. */
+        /** What there is of a run that was stopped hard or whose process is gone. */
         private RunOutcome unfinished(String cause) {
             List<Cell> cells;
             try {

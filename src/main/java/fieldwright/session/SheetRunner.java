@@ -6,7 +6,6 @@ import fieldwright.output.CellOutcome;
 import fieldwright.output.Output;
 import fieldwright.output.RunOutcome;
 import fieldwright.quantity.AuthorException;
-import fieldwright.quantity.Stop;
 import fieldwright.quantity.StoppedException;
 import fieldwright.session.snippet.SnippetCompiler;
 import fieldwright.session.snippet.StaleException;
@@ -213,16 +212,6 @@ public final class SheetRunner implements AutoCloseable {
             if (run.kind() != Cell.Kind.NOTE) {
                 listener.accept(new Progress.Finished(run.outcome(cell, reused ? CellOutcome.State.REUSED : run.state())));
             }
-        }
-    }
-
-    /** The outcome of a run that was stopped before it began. */
-    RunOutcome stoppedOutcome(String text) {
-        Stop.request();
-        try {
-            return work(text, WorkOptions.RESULTS, progress -> { });
-        } finally {
-            Stop.clear();
         }
     }
 
