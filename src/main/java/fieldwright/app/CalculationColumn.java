@@ -155,21 +155,20 @@ final class CalculationColumn {
         return box;
     }
 
-    /** What a run put under Calculation. Lines the step's own text already shows are not shown twice. */
+    /** What a run put under Calculation. Lines that a derive step's own text already shows are not shown twice. */
+    static List<Output> pictured(Step step) {
+        return step.outputs().stream().filter(output -> output instanceof Output.Typeset && step.cell().kind() != Cell.Kind.DERIVE
+                || output instanceof Output.Plot || output instanceof Output.Table
+                || output instanceof Output.Printed printed && !printed.text().isBlank()).toList();
+    }
+
+    /** The pictures and tables of a step. */
     List<Node> shown(Step step) {
-        List<Node> nodes = new ArrayList<>();
-        for (Output output : step.outputs()) {
-            if (output instanceof Output.Typeset line && step.cell().kind() != Cell.Kind.DERIVE) {
-                nodes.add(derived(line.latex(), line.plainText(), line.description()));
-            } else if (output instanceof Output.Plot plot) {
-                nodes.add(plot(plot));
-            } else if (output instanceof Output.Table table) {
-                nodes.add(table(table));
-            } else if (output instanceof Output.Printed printed && !printed.text().isBlank()) {
-                nodes.add(printed(printed));
-            }
-        }
-        return nodes;
+        return pictured(step).stream().map(output -> output instanceof Output.Typeset line
+                ? derived(line.latex(), line.plainText(), line.description())
+                : output instanceof Output.Plot plot ? plot(plot)
+                : output instanceof Output.Table table ? table(table)
+                : printed((Output.Printed) output)).toList();
     }
 
     private Node plot(Output.Plot plot) {

@@ -6,6 +6,7 @@ import fieldwright.output.CellOutcome;
 import fieldwright.output.Output;
 import fieldwright.output.Status;
 import fieldwright.output.Value;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import javafx.scene.Node;
@@ -15,7 +16,7 @@ import javafx.scene.layout.VBox;
 import javafx.scene.text.Text;
 import javafx.scene.text.TextFlow;
 
-/** Fills the Output column of a step: results, judgements, cautions, problems. Nothing here can be folded away. */
+/** Makes what stands under Output: results, judgements, cautions, problems. Nothing here can be folded away. */
 final class OutputColumn {
     private final Zoom zoom;
     private final Map<String, Double> expected;
@@ -30,9 +31,8 @@ final class OutputColumn {
     }
 
     /** @param working true while this step is being worked out */
-    void fill(VBox column, Step step, boolean working) {
-        List<Node> nodes = column.getChildren();
-        nodes.clear();
+    List<Node> of(Step step, boolean working) {
+        List<Node> nodes = new ArrayList<>();
         if (working) {
             nodes.add(pill("working out …", "pill-working"));
         } else if (step.stale()) {
@@ -46,6 +46,7 @@ final class OutputColumn {
         }
         step.cell().records().stream().filter(r -> step.isRecorded() && !r.isReadable())
                 .forEach(r -> nodes.add(line("a record line cannot be read: " + r.trouble(), "problem")));
+        return nodes;
     }
 
     private void add(List<Node> nodes, Step step, Output output) {

@@ -12,10 +12,9 @@ import java.util.Map;
 import java.util.Set;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
-import javafx.scene.layout.VBox;
 import javafx.scene.text.TextFlow;
 
-/** Fills the Reference column: number, label, where the inputs come from, which thresholds are cited. */
+/** Makes what stands under Reference: number, label, where the inputs come from, which thresholds are cited. */
 final class ReferenceColumn {
     private final Zoom zoom;
 
@@ -24,9 +23,8 @@ final class ReferenceColumn {
     }
 
     /** @param labelField stands in place of the label while the step is edited; null otherwise */
-    void fill(VBox column, Step step, Node labelField) {
-        List<Node> nodes = column.getChildren();
-        nodes.clear();
+    List<Node> of(Step step, Node labelField) {
+        List<Node> nodes = new ArrayList<>();
         Label number = new Label(Integer.toString(step.number()));
         number.getStyleClass().add("number");
         nodes.add(number);
@@ -36,10 +34,16 @@ final class ReferenceColumn {
             nodes.add(OutputColumn.line(step.cell().label(), "step-label"));
         }
         sources(step).forEach((source, names) -> nodes.add(source(source, names)));
+        cited(step).forEach(source -> nodes.add(OutputColumn.line(source, "source")));
+        return nodes;
+    }
+
+    /** Where thresholds and cautions come from, each source once. */
+    static Set<String> cited(Step step) {
         Set<String> cited = new LinkedHashSet<>();
         step.all(Output.Assessment.class).forEach(a -> cited.add(a.source()));
         step.all(Output.Caution.class).stream().filter(c -> !c.source().isEmpty()).forEach(c -> cited.add(c.source()));
-        cited.forEach(source -> nodes.add(OutputColumn.line(source, "source")));
+        return cited;
     }
 
     /** Source to the names it is given for, in the order of the text; only inputs owe a source. */

@@ -4,10 +4,12 @@ import fieldwright.output.Output;
 import fieldwright.output.Value;
 import fieldwright.sheet.Cell;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.function.Supplier;
 import javafx.css.PseudoClass;
 import javafx.scene.AccessibleRole;
 import javafx.scene.Node;
@@ -35,6 +37,10 @@ final class StepView extends ThreeColumns {
     private boolean pending;
     private final Map<String, Double> tolerances = new HashMap<>();
     private String note = "";
+    private final Part referencePart = new Part();
+    private final Part textPart = new Part();
+    private final Part shownPart = new Part();
+    private final Part outputPart = new Part();
     private CellEditor editor;
     private TextField labelField;
 
@@ -91,35 +97,76 @@ final class StepView extends ThreeColumns {
      * @param pending true while tolerances may still come
      */
     void show(Step now, String note, boolean folded, boolean working, boolean pending) {
-        Step before = step;
-        boolean first = before == null;
-        boolean text = first || before.cell().kind() != now.cell().kind() || !before.cell().source().equals(now.cell().source())
-                || !note.equals(this.note) || folded != this.folded;
-        boolean results = first || !before.outputs().equals(now.outputs());
-        boolean head = first || before.number() != now.number() || !before.cell().label().equals(now.cell().label());
-        boolean state = first || before.stale() != now.stale() || working != this.working || before.isRecorded() != now.isRecorded()
-                || !Objects.equals(state(before), state(now)) || pending != this.pending && !now.all(Output.Result.class).isEmpty();
+        if (step != null && !step.outputs().equals(now.outputs())) {
+            keepTolerances(step);
+        }
         step = now;
         this.note = note;
         this.folded = folded;
         this.working = working;
         this.pending = pending;
-        if (results && before != null) {
-            keepTolerances(before);
+        build();
+    }
+
+    /** Nodes made from something; made anew only when that is no longer the same. Typesetting and styling cost time. */
+    private static final class Part {
+        private List<?> madeFrom;
+        private List<Node> nodes = List.of();
+
+        List<Node> of(List<?> source, Supplier<List<Node>> make) {
+            if (!source.equals(madeFrom)) {
+                madeFrom = source;
+                nodes = make.get();
+            }
+            return nodes;
         }
-        if (text || head || results) {
-            fillReference();
+    }
+
+    private void build() {
+        Cell cell = step.cell();
+        set(reference, referencePart.of(Arrays.asList(step.number(), cell.kind(), cell.label(), cell.source(), ReferenceColumn.cited(step), labelField),
+                () -> new ReferenceColumn(zoom).of(step, labelField)));
+        List<Node> nodes = new ArrayList<>(editor == null
+                ? textPart.of(List.of(cell.kind(), cell.source(), note, folded, settled()), this::text)
+                : textPart.of(List.of(editor, editor.text()), this::edited));
+        nodes.addAll(shownPart.of(CalculationColumn.pictured(step), () -> calculationColumn.shown(step)));
+        set(calculation, nodes);
+        boolean waits = pending && !step.all(Output.Result.class).isEmpty();
+        set(output, outputPart.of(Arrays.asList(step.outputs(), step.stale(), step.isRecorded(), working, waits,
+                step.outcome() == null ? null : step.outcome().state(), step.worked()),
+                () -> new OutputColumn(zoom, waits ? tolerances : Map.of()).of(step, working)));
+        pseudoClassStateChanged(STALE, step.stale());
+        setAccessibleText("step " + step.number() + ", " + cell.kind().word() + " " + cell.label());
+    }
+
+    /** Leaves what stands first as it is: an editor that was taken out and put back would lose the keys. */
+    private static void set(VBox column, List<Node> nodes) {
+        List<Node> shown = column.getChildren();
+        int same = 0;
+        while (same < Math.min(shown.size(), nodes.size()) && shown.get(same) == nodes.get(same)) {
+            same++;
         }
-        if (text || results) {
-            fillCalculation();
+        shown.subList(same, shown.size()).clear();
+        shown.addAll(nodes.subList(same, nodes.size()));
+    }
+
+    /** Lines of a derive step as the last run set them; they carry what it says of each. */
+    private List<Output.Typeset> settled() {
+        return step.cell().kind() == Cell.Kind.DERIVE ? step.all(Output.Typeset.class) : List.of();
+    }
+
+    private List<Node> text() {
+        return calculationColumn.text(step.cell(), note, settled(), folded, caret -> actions.edit(id, caret));
+    }
+
+    /** The editor, and for formulas and inputs what they look like below. */
+    private List<Node> edited() {
+        List<Node> nodes = new ArrayList<>(List.of(editor));
+        Cell.Kind kind = step.cell().kind();
+        if (kind == Cell.Kind.DERIVE || kind == Cell.Kind.INPUT) {
+            nodes.addAll(calculationColumn.text(Cell.of(kind, "", editor.text()), "", List.of(), false, caret -> { }));
         }
-        if (results || state || text) {
-            new OutputColumn(zoom, pending ? tolerances : Map.of()).fill(output, now, working);
-        }
-        pseudoClassStateChanged(STALE, now.stale());
-        if (first || head || text) {
-            setAccessibleText("step " + now.number() + ", " + now.cell().kind().word() + " " + now.cell().label());
-        }
+        return nodes;
     }
 
     private void keepTolerances(Step step) {
@@ -132,35 +179,8 @@ final class StepView extends ThreeColumns {
         }
     }
 
-    private static Object state(Step s) {
-        return s.outcome() == null ? null : s.outcome().state();
-    }
-
     void setAtHand(boolean atHand) {
         pseudoClassStateChanged(AT_HAND, atHand);
-    }
-
-    private void fillReference() {
-        new ReferenceColumn(zoom).fill(reference, step, labelField);
-    }
-
-    private void fillCalculation() {
-        List<Node> nodes = new ArrayList<>();
-        if (editor == null) {
-            nodes.addAll(calculationColumn.text(step.cell(), note, step.all(Output.Typeset.class), folded, caret -> actions.edit(id, caret)));
-        } else {
-            nodes.add(editor);
-            nodes.addAll(preview(editor.text()));
-        }
-        nodes.addAll(calculationColumn.shown(step));
-        calculation.getChildren().setAll(nodes);
-    }
-
-    /** While a derive or input step is edited its text stands typeset below. */
-    private List<Node> preview(String text) {
-        return step.cell().kind() == Cell.Kind.DERIVE || step.cell().kind() == Cell.Kind.INPUT
-                ? calculationColumn.text(Cell.of(step.cell().kind(), "", text), "", List.of(), false, caret -> { })
-                : List.of();
     }
 
     // --- editing ---
@@ -168,7 +188,7 @@ final class StepView extends ThreeColumns {
     /** Opens the editor; the caret stands before this letter, at the end for −1. */
     void edit(int caret, CellEditor.Host host) {
         if (editor == null) {
-            editor = new CellEditor(step.cell().kind(), step.cell().source(), zoom, host, text -> fillCalculation());
+            editor = new CellEditor(step.cell().kind(), step.cell().source(), zoom, host, text -> build());
             labelField = new TextField(step.cell().label());
             labelField.setPromptText("label");
             labelField.getStyleClass().add("label-field");
@@ -179,8 +199,7 @@ final class StepView extends ThreeColumns {
                     host.leave();
                 }
             });
-            fillReference();
-            fillCalculation();
+            build();
         }
         editor.takeKeys(caret < 0 ? editor.text().length() : caret);
     }
@@ -203,8 +222,7 @@ final class StepView extends ThreeColumns {
 
     /** Shows the step again after its editor was closed. */
     void showText() {
-        fillReference();
-        fillCalculation();
+        build();
     }
 
     /** Called when the row leaves the page. */

@@ -291,6 +291,28 @@ class PadTest {
     }
 
     @Test
+    void formulasAreTypesetBelowWhileTheyAreWrittenAndTheKeysStay() {
+        Fx.run(() -> press(view(4), KeyCode.ENTER, false));
+        int before = Fx.get(() -> pictures(view(4)).size());
+        Fx.run(() -> view(4).editor().area().appendText("\nA_s = pi*R_s^2"));
+        Fx.until("the new formula stands below", () -> pictures(view(4)).size() == before + 1);
+        assertSame(Fx.get(() -> view(4).editor().area()), Fx.get(() -> stage.getScene().getFocusOwner()));
+    }
+
+    @Test
+    void rowsThatDidNotChangeKeepTheirNodes() {
+        Fx.run(() -> pad.workOut());
+        untilIdle();
+        List<PictureView> formulas = Fx.get(() -> pictures(view(4)).stream().filter(p -> p.getStyleClass().contains("formula")).toList());
+        Fx.run(() -> {
+            pad.inputs().field("H").setText("8.00");
+            press(pad.inputs().field("H"), KeyCode.ENTER, false);
+        });
+        untilIdle();
+        assertEquals(formulas, Fx.get(() -> pictures(view(4)).stream().filter(p -> p.getStyleClass().contains("formula")).toList()));
+    }
+
+    @Test
     void editingWithoutAChangeRunsNothing() {
         Fx.run(() -> pad.workOut());
         untilIdle();
