@@ -38,17 +38,25 @@ final class Bar extends HBox {
     }
 
     private MenuButton fileMenu() {
-        return new MenuButton("File", null, item("New", Pad::newSheet), item("Open…", Pad::open), item("Save", Pad::save),
+        MenuButton menu = menu("File");
+        menu.getItems().addAll(item("New", Pad::newSheet), item("Open…", Pad::open), item("Save", Pad::save),
                 item("Save as…", Pad::saveAs));
+        return menu;
     }
 
     private MenuButton stepMenu() {
-        MenuButton menu = new MenuButton("Step");
+        MenuButton menu = menu("Step");
         for (Cell.Kind kind : Cell.Kind.values()) {
             menu.getItems().add(item("Add " + kind.word() + " below", p -> p.addBelow(kind)));
         }
         menu.getItems().addAll(new SeparatorMenuItem(), item("Move up", p -> p.moveAtHand(-1)), item("Move down", p -> p.moveAtHand(1)),
                 item("Remove", Pad::removeAtHand), new SeparatorMenuItem(), item("Undo", Pad::undo), item("Redo", Pad::redo));
+        return menu;
+    }
+
+    private static MenuButton menu(String text) {
+        MenuButton menu = new MenuButton(text);
+        menu.setMinWidth(USE_PREF_SIZE);
         return menu;
     }
 

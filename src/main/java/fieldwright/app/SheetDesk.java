@@ -240,6 +240,8 @@ final class SheetDesk {
 
     /** Takes what steps of an order gave, as soon as it is known. */
     void take(Order order, List<CellOutcome> outcomes) {
+        // What was not stale when the order was given holds in the order's sequence too; the rest is doubted until it comes.
+        workedOrder = order.steps.stream().map(Step::id).toList();
         boolean changed = false;
         for (CellOutcome outcome : outcomes) {
             changed |= store(order, outcome);

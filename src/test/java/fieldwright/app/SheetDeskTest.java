@@ -113,6 +113,14 @@ class SheetDeskTest {
     }
 
     @Test
+    void aStepIsCurrentAsSoonAsItIsWorkedForTheFirstTime() throws Exception {
+        SheetDesk desk = SheetDesk.of(Samples.SILO);
+        SheetDesk.Order order = desk.order();
+        desk.take(order, Samples.outcome(order.text()).cells().subList(0, 4));
+        assertEquals("5", stale(desk), "only what is still to come");
+    }
+
+    @Test
     void resultsOfAnOldTextDoNotPassForThoseOfANewOne() throws Exception {
         SheetDesk desk = SheetDesk.of(Samples.SILO);
         SheetDesk.Order order = desk.order();
