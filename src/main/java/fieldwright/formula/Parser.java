@@ -338,6 +338,9 @@ final class Parser {
         comma(t, "when(condition, value, otherwise)");
         Node yes = value(logic());
         comma(t, "when(condition, value, otherwise)");
+        if (isWord("otherwise")) {
+            take();
+        }
         Node no = value(logic());
         close(open);
         return new Node.When(condition, yes, no, new At(t.from()));

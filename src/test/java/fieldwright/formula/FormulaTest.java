@@ -21,7 +21,7 @@ class FormulaTest {
     @ParameterizedTest(name = "{0}")
     @CsvSource(delimiter = ';', value = {
         "1 + 2*3; 7", "-2^2; -4", "2^-1; 0.5", "2^3^2; 512", "(1+2)*3; 9", "7/2/2; 1.75", "1 - 2 - 3; -4", "2*-3; -6", "1e3 + .5; 1000.5",
-        "min(3, 1, 2); 1", "max(1, 4); 4", "when(1 < 2, 3, 4); 3", "when(0 < 1 < 2 and not (3 < 2), 3, 4); 3", "when(2 < 1 or 1 >= 2, 3, 4); 4",
+        "min(3, 1, 2); 1", "max(1, 4); 4", "when(1 < 2, 3, 4); 3", "when(2 < 1, 3, otherwise 4); 4", "when(2 < 1, 3, otherwise -(4)); -4", "when(0 < 1 < 2 and not (3 < 2), 3, 4); 3", "when(2 < 1 or 1 >= 2, 3, 4); 4",
         "abs(-3); 3", "sqrt(16); 4", "2² + 2³; 12", "3×2 − 1; 5", "6÷3; 2", "10⁻¹*10; 1", "90 deg*2/π; 1", "50 % * 2; 1", "1 km/(1 m); 1000",
         "cbrt(-8); -2", "atan2(1 m, 1 m)*4/pi; 1", "floor(2.5) + ceil(2.5); 5", "2 (uC/m^3)/(1 (uC/m^3)); 2", "log10(1000); 3"})
     void textInNumberOut(String text, double value) {
