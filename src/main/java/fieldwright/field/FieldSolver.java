@@ -121,7 +121,10 @@ public final class FieldSolver {
     }
 
     private Vector field(Place at, boolean flux) {
-        Question q = Images.question(source.around(), at);
+        return field(at, Images.question(source.around(), at), flux);
+    }
+
+    private Vector field(Place at, Question q, boolean flux) {
         checkSurroundings();
         evaluations = 0;
         Dimension unit = flux ? Units.SURFACE_DENSITY : Units.FIELD;
@@ -260,11 +263,15 @@ public final class FieldSolver {
         if (q.side() != null && q.behind() == null) {
             return Amount.si(0, 0, Units.POTENTIAL);
         }
+        return potential(q);
+    }
+
+    private Amount potential(Question q) {
         if (!q.isBalanced()) {
             if (compiled.hasEndlessKernel()) {
                 throw endlessPotential();
             }
-            if (compiled.hasEndlessChart() && !tailsConverge(at)) {
+            if (compiled.hasEndlessChart() && !tailsConverge(q)) {
                 throw endlessPotential();
             }
         }
@@ -370,10 +377,32 @@ public final class FieldSolver {
         return Amount.si(scale * value, Double.isNaN(stated) ? Double.POSITIVE_INFINITY : stated, Units.POTENTIAL, standing);
     }
 
+    // ---- what the surroundings add
+
+    /**
+     * E (V/m) of the charge induced in the surroundings alone: the field less that of the source itself, as it would be with the
+     * medium of the charge everywhere. Any place, within the charge too, where it is smooth: ∫ρ·E_reaction is the force on the
+     * charge. Zero in free space. On a conductor or an interface a pair of one-sided values.
+     */
+    public Vector reactionField(Place at) {
+        return field(at, Images.question(source.around(), at).reaction(at), false);
+    }
+
+    /**
+     * V (V) of the charge induced in the surroundings alone, see {@link #reactionField}; ½∫ρ·V_reaction is the work done by bringing the
+     * charge here from far away. Errors: AuthorException for endless charge.
+     */
+    public Amount reactionPotential(Place at) {
+        Question q = Images.question(source.around(), at).reaction(at);
+        checkSurroundings();
+        evaluations = 0;
+        return q.probes().isEmpty() ? Amount.si(0, 0, Units.POTENTIAL) : potential(q);
+    }
+
     /** Whether the potential integral of mapped endless charge settles, from few evaluations. */
-    private boolean tailsConverge(Place at) {
+    private boolean tailsConverge(Question q) {
         Paver paver = new Paver(true, space);
-        for (Probe probe : Images.question(source.around(), at).probes()) {
+        for (Probe probe : q.probes()) {
             for (Patch patch : compiled.patches) {
                 paver.pave(patch, probe);
             }
