@@ -15,6 +15,7 @@ import fieldwright.charge.Sources;
 import fieldwright.formula.BlockFunction;
 import fieldwright.formula.Coordinates;
 import fieldwright.formula.Formula;
+import fieldwright.formula.Polynomial;
 import fieldwright.geometry.Chart;
 import fieldwright.geometry.CoordinateRegion;
 import fieldwright.geometry.CoordinateSystem;
@@ -90,7 +91,50 @@ final class Compiled {
         NodeFunction weight = NodeFunction.of(density, chart);
         SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
         double[][] breaks = RegionIntegral.breaks(chart, density);
-        return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks, triangle);
+        Polynomial polynomial = kernel == Kernel.POINT && (inSpace != null || triangle || chart.isFlat()) ? polynomial(density, chart, weight, triangle) : null;
+        return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks, triangle, polynomial);
+    }
+
+    /** The density as a polynomial of position, if it is one and gives the same numbers as the formula at places all over the chart. */
+    private static Polynomial polynomial(Formula density, Chart chart, NodeFunction weight, boolean triangle) {
+        if (chart.isEndless()) {
+            return null;
+        }
+        int d = chart.dimension();
+        double[] middle = new double[d];
+        java.util.Arrays.fill(middle, 0.3);
+        Chart.Anchor anchor = chart.anchor(middle);
+        boolean fromAxis = density.variables().contains("rho") || density.variables().contains("r");
+        Polynomial polynomial = Polynomial.of(density, fromAxis ? new double[3] : anchor.position());
+        if (polynomial == null || polynomial.degree() == 0) {
+            return polynomial;
+        }
+        int n = d == 2 ? 16 : 27;
+        double[][] du = new double[3][n];
+        int side = d == 2 ? 4 : 3;
+        for (int i = 0; i < n; i++) {
+            int rest = i;
+            for (int k = 0; k < d; k++) {
+                du[k][i] = (rest % side + 0.1) / side - 0.3;
+                rest /= side;
+            }
+            if (triangle) {
+                du[1][i] = (du[1][i] + 0.3) * (0.7 - du[0][i]) - 0.3;
+            }
+        }
+        Nodes nodes = new Nodes();
+        chart.evaluate(anchor, du, n, nodes);
+        double[] values = new double[n];
+        weight.evaluate(nodes, anchor.position(), n, values);
+        double worst = 0;
+        double size = 0;
+        double[] p = anchor.position();
+        for (int i = 0; i < n; i++) {
+            double v = polynomial.at(p[0] + nodes.offset[0][i], p[1] + nodes.offset[1][i], p[2] + nodes.offset[2][i]);
+            worst = Math.max(worst, Math.abs(v - values[i]));
+            size = Math.max(size, Math.abs(values[i]));
+        }
+        return worst <= 2e-14 * size ? polynomial : null;
     }
 
     /** The chart itself, or with rho or r run as a square where only then a density of it alone is resolved: sqrt(rho). */

@@ -54,6 +54,9 @@ final class Paver {
         if (patch.dimension() == 3 && patch.inSpace() != null && patch.kernel() == Kernel.POINT && !chart.isEndless() && faces(patch, probe, chart, sampler)) {
             return;
         }
+        if (patch.dimension() == 2 && patch.polynomial() != null && flatSurface(patch, probe, chart, sampler)) {
+            return;
+        }
         if (patch.triangle()) {
             int first = pieces.size();
             polar(sampler, TRIANGLE, nearestInTriangle(sampler), 0);
@@ -64,6 +67,121 @@ final class Paver {
     }
 
     private static final double[][] TRIANGLE = {{0, 0}, {1, 0}, {0, 1}};
+    private static final double[][] SQUARE = {{0, 0}, {1, 0}, {1, 1}, {0, 1}};
+
+    /** A flat surface near by by its edges; false when it is far, or touched by the place, which other rules know better. */
+    private boolean flatSurface(Patch patch, Probe probe, Chart chart, Sampler whole) {
+        Chart.Anchor middle = whole.anchor(0.5, 0.5);
+        double[] b = whole.toAnchor(middle);
+        int n = 0;
+        for (int i = 0; i < GRID; i++) {
+            for (int j = 0; j < GRID; j++) {
+                space.du[0][n] = i / (GRID - 1.0) - 0.5;
+                space.du[1][n++] = j / (GRID - 1.0) - 0.5;
+            }
+        }
+        Nodes nodes = whole.place(middle, space.du, n);
+        double size = radius(nodes, n);
+        if (!(least(nodes, b, n) < 2 * size)) {
+            return false;
+        }
+        space.du[0][0] = 0;
+        space.du[1][0] = 0;
+        whole.place(middle, space.du, 1);
+        double[] normal = unit(cross(column(whole.tangent(0)), column(whole.tangent(1))));
+        if (normal == null) {
+            return false;
+        }
+        double height = dot(normal, b);
+        if (!(Math.abs(height) > touching(whole, middle))) {
+            height = 0;
+            if (!inPlane(patch, whole, normal)) {
+                return false;
+            }
+        }
+        FlatFace face = FlatFace.surface(patch.polynomial(), whole.target, normal, height, size);
+        edges(patch, probe, chart, face, new double[2], 0, 1, patch.triangle() ? TRIANGLE : SQUARE, 1, size);
+        return true;
+    }
+
+    /** A place in the plane of a flat surface, off its edge: notes the jump if it is on the surface. False on the edge. */
+    private boolean inPlane(Patch patch, Sampler whole, double[] normal) {
+        double[] at = patch.triangle() ? nearestInTriangle(whole)
+            : footOnSurface(whole, new double[2], new double[] {1, 1}, patch.chart().nearest(whole.target));
+        Chart.Anchor foot = whole.anchor(at);
+        double touching = touching(whole, foot);
+        if (norm(whole.toAnchor(foot)) > 2 * touching) {
+            return true;
+        }
+        double[][] corners = patch.triangle() ? TRIANGLE : SQUARE;
+        for (int k = 0; k < corners.length; k++) {
+            if (corners == SQUARE && isFullTurn(patch.chart(), 1 - k % 2)) {
+                continue;
+            }
+            double[] from = corners[k];
+            double[] to = corners[(k + 1) % corners.length];
+            Sampler.Edge edge = new Sampler.Edge(patch, whole.probe, potential, space, whole.chart, null, from.clone(),
+                new double[] {to[0] - from[0], to[1] - from[1]}, 1, 0);
+            double t = (at[0] - from[0]) * (to[0] - from[0]) + (at[1] - from[1]) * (to[1] - from[1]);
+            t /= (to[0] - from[0]) * (to[0] - from[0]) + (to[1] - from[1]) * (to[1] - from[1]);
+            if (!(norm(edge.toAnchor(edge.anchor(footOnLine(edge, 0, 1, Math.min(1, Math.max(0, t)))))) > 2 * touching)) {
+                return false;
+            }
+        }
+        double sigma = whole.densityAt(foot);
+        if (!potential && sigma != 0) {
+            contact.surface(sigma, 1, whole.mapped(normal[0], normal[1], normal[2]), new double[3]);
+        }
+        return true;
+    }
+
+    private double least(Nodes nodes, double[] b, int n) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int i = 0; i < n; i++) {
+            least = Math.min(least, distance(nodes, b, i));
+        }
+        return least;
+    }
+
+    /** Half the longest side of the box that holds the nodes. */
+    private static double radius(Nodes nodes, int n) {
+        double radius = 0;
+        for (int a = 0; a < 3; a++) {
+            double low = Double.POSITIVE_INFINITY;
+            double high = Double.NEGATIVE_INFINITY;
+            for (int i = 0; i < n; i++) {
+                low = Math.min(low, nodes.offset[a][i]);
+                high = Math.max(high, nodes.offset[a][i]);
+            }
+            radius = Math.max(radius, (high - low) / 2);
+        }
+        return radius;
+    }
+
+    /** The edges of a flat face between {@code corners} of its parameters p and q, the others held; {@code sign} tells which way they run. */
+    private void edges(Patch patch, Probe probe, Chart chart, FlatFace face, double[] held, int p, int q, double[][] corners, int sign, double size) {
+        for (int k = 0; k < corners.length; k++) {
+            double[] from = corners[k];
+            double[] to = corners[(k + 1) % corners.length];
+            if (corners == SQUARE && isFullTurn(chart, k % 2 == 0 ? q : p)) {
+                continue;
+            }
+            double[] corner = held.clone();
+            double[] along = new double[held.length];
+            corner[p] = from[0];
+            corner[q] = from[1];
+            along[p] = to[0] - from[0];
+            along[q] = to[1] - from[1];
+            Sampler.Edge edge = new Sampler.Edge(patch, probe, potential, space, chart, face, corner, along, sign, 1e-20 * size);
+            int first = pieces.size();
+            line(edge, 0, 1, 0);
+            rebase(edge, first);
+        }
+    }
+
+    private static double[] cross(double[] a, double[] b) {
+        return new double[] {a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]};
+    }
 
     /** Nearest point of a flat triangle, u + v ≤ 1 in its own parameters: its foot if that is inside, else the nearest on a side. */
     private double[] nearestInTriangle(Sampler s) {
@@ -324,7 +442,7 @@ final class Paver {
             }
             length += i == 0 ? 0 : step(nodes, i - 1, i);
         }
-        if (!(length > 0)) {
+        if (!(length > s.leastLength())) {
             return;
         }
         double lift = lift(s);
@@ -358,10 +476,11 @@ final class Paver {
         }
         double height = Math.hypot(norm(b), lift);
         double[] pole = null;
-        if (!s.patch.kernel().isEndless()) {
+        boolean isEdge = s instanceof Sampler.Edge;
+        if (!s.patch.kernel().isEndless() && !isEdge) {
             roughness = Math.max(roughness, (potential ? 0.1 : 1) * Sampler.EPS * (norm(s.seen) + norm(foot.position())) / height);
         }
-        if (!(height > touching(s, foot))) {
+        if (!isEdge && !(height > touching(s, foot))) {
             height = 0;
             double sigma = s.densityAt(foot);
             if (!s.patch.kernel().isEndless()) {
@@ -881,21 +1000,8 @@ final class Paver {
             }
         }
         Nodes nodes = whole.place(middle, space.du, n);
-        double least = Double.POSITIVE_INFINITY;
-        double radius = 0;
-        double[] low = {1e300, 1e300, 1e300};
-        double[] high = {-1e300, -1e300, -1e300};
-        for (int i = 0; i < n; i++) {
-            least = Math.min(least, distance(nodes, b, i));
-            for (int a = 0; a < 3; a++) {
-                low[a] = Math.min(low[a], nodes.offset[a][i]);
-                high[a] = Math.max(high[a], nodes.offset[a][i]);
-            }
-        }
-        for (int a = 0; a < 3; a++) {
-            radius = Math.max(radius, (high[a] - low[a]) / 2);
-        }
-        if (!(least < 2 * radius)) {
+        double size = radius(nodes, n);
+        if (!(least(nodes, b, n) < 2 * size)) {
             return false;
         }
         int steps = raySteps(patch.inSpace(), whole, nodes, b, n);
@@ -912,7 +1018,12 @@ final class Paver {
                     continue;
                 }
                 Sampler.Face face = new Sampler.Face(patch, probe, potential, space, chart, depth, side == 1, hand, steps);
-                if (hasArea(face)) {
+                if (!hasArea(face, size)) {
+                    continue;
+                }
+                if (patch.polynomial() != null && chart.isFlatFace(depth, side == 1)) {
+                    flatFace(patch, probe, chart, face, side == 1 ? hand : -hand, size);
+                } else {
                     int first = pieces.size();
                     pave(face, new double[2], new double[] {1, 1}, 0);
                     rebase(face, first);
@@ -920,6 +1031,26 @@ final class Paver {
             }
         }
         return true;
+    }
+
+    private void flatFace(Patch patch, Probe probe, Chart chart, Sampler.Face whole, int sign, double size) {
+        Chart.Anchor middle = whole.anchor(0.5, 0.5);
+        double[] b = whole.toAnchor(middle);
+        space.du[0][0] = 0;
+        space.du[1][0] = 0;
+        whole.place(middle, space.du, 1);
+        double[] normal = unit(cross(column(whole.tangent(0)), column(whole.tangent(1))));
+        if (normal == null) {
+            return;
+        }
+        for (int a = 0; a < 3; a++) {
+            normal[a] *= sign;
+        }
+        double height = dot(normal, b);
+        if (Math.abs(height) > touching(whole, middle)) {
+            FlatFace face = FlatFace.ofVolume(patch.polynomial(), whole.target, normal, height, size);
+            edges(patch, probe, chart, face, whole.held, whole.axes[0], whole.axes[1], SQUARE, sign, size);
+        }
     }
 
     /** Both ends of a full turn are the same surface seen from its two sides. */
@@ -931,7 +1062,7 @@ final class Paver {
         return name.equals("phi") && Math.abs(chart.upper(depth) - chart.lower(depth) - 2 * Math.PI) < 1e-14;
     }
 
-    private boolean hasArea(Sampler s) {
+    private boolean hasArea(Sampler s, double size) {
         Chart.Anchor middle = s.anchor(0.5, 0.5);
         for (int i = 0; i < 9; i++) {
             space.du[0][i] = 0.31 * (i / 3 - 1);
@@ -947,16 +1078,11 @@ final class Paver {
             double scale = Math.abs(p[0][i]) + Math.abs(p[1][i]) + Math.abs(p[2][i]);
             scale *= Math.abs(q[0][i]) + Math.abs(q[1][i]) + Math.abs(q[2][i]);
             double area = Math.sqrt(x * x + y * y + z * z);
-            if (area > 0 && area > 1e-14 * scale && scale > 1e-28 * extent(s)) {
+            if (area > 0 && area > 1e-14 * scale && scale > 1e-28 * size * size) {
                 return true;
             }
         }
         return false;
-    }
-
-    private double extent(Sampler s) {
-        double[] p = s.anchor(0.5, 0.5).position();
-        return dot(p, p) + dot(s.seen, s.seen);
     }
 
     /**

@@ -67,7 +67,7 @@ final class Pieces {
             double[] moved = new double[n];
             boolean any = false;
             for (int k = 0; k < n; k++) {
-                moved[k] = anchor.u()[sampler.axes[k]] - base.u()[sampler.axes[k]];
+                moved[k] = sampler.parameter(anchor, k) - sampler.parameter(base, k);
                 any |= moved[k] != 0;
             }
             anchor = base;

@@ -97,6 +97,16 @@ abstract class Sampler {
         return space.nodes.tangent[axes[k]];
     }
 
+    /** A line no longer than this, m, is a point: an edge at which a face has shrunk to nothing but rounding. */
+    double leastLength() {
+        return 0;
+    }
+
+    /** Parameter k of an anchor. */
+    double parameter(Chart.Anchor anchor, int k) {
+        return anchor.u()[axes[k]];
+    }
+
     /**
      * Contributions of nodes placed last: {@code jacobian} is du per unit of the integration variables; {@code b} source minus
      * target of the anchor.
@@ -188,6 +198,13 @@ abstract class Sampler {
 
     /** Rounding of positions that were taken as differences of absolute ones. */
     final void roughen(Chart.Anchor anchor, int n, double[][] out, double[] noise) {
+        if (roughness != 0) {
+            java.util.Arrays.fill(noise, 0, n, 0);
+            addRoughness(anchor, n, out, noise);
+        }
+    }
+
+    final void addRoughness(Chart.Anchor anchor, int n, double[][] out, double[] noise) {
         if (roughness == 0) {
             return;
         }
@@ -203,7 +220,7 @@ abstract class Sampler {
             for (int c = 0; c < components; c++) {
                 size += Math.abs(out[c][i]);
             }
-            noise[i] = size * roughness * ((base + space.nodes.rounding[i]) / distance + space.nodes.relative[i] + 1);
+            noise[i] += size * roughness * ((base + space.nodes.rounding[i]) / distance + space.nodes.relative[i] + 1);
         }
     }
 
@@ -359,6 +376,158 @@ abstract class Sampler {
                     sum[i] += weight * space.density[i];
                 }
             }
+        }
+    }
+
+    /** One edge of a flat face, run through from one corner of its parameters to another; the face to its left, seen against the normal. */
+    static final class Edge extends Sampler {
+        private final FlatFace face;
+        private final int sign;
+        private final double[] corner;
+        private final double[] along;
+        private final double leastLength;
+
+        /** {@code corner} and {@code along} in all parameters of the chart; {@code sign} −1 when they run clockwise about the normal. */
+        Edge(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart, FlatFace face, double[] corner, double[] along, int sign,
+            double leastLength) {
+            super(patch, probe, potential, space, chart, new int[] {0}, corner);
+            this.leastLength = leastLength;
+            this.face = face;
+            this.sign = sign;
+            this.corner = corner;
+            this.along = along;
+        }
+
+        @Override
+        boolean isSmooth() {
+            return true;
+        }
+
+        @Override
+        Chart.Anchor anchor(double... v) {
+            double[] u = corner.clone();
+            for (int k = 0; k < u.length; k++) {
+                u[k] += along[k] == 0 ? 0 : along[k] * v[0];
+            }
+            return chart.anchor(u);
+        }
+
+        @Override
+        double leastLength() {
+            return leastLength;
+        }
+
+        @Override
+        double parameter(Chart.Anchor anchor, int k) {
+            for (int j = 0; j < along.length; j++) {
+                if (along[j] != 0) {
+                    return (anchor.u()[j] - corner[j]) / along[j];
+                }
+            }
+            return 0;
+        }
+
+        @Override
+        Nodes place(Chart.Anchor anchor, double[][] du, int n) {
+            double[][] full = space.full;
+            double[] given = du[0];
+            for (int k = 0; k < 3; k++) {
+                full[k] = Workspace.ZEROS;
+                if (k < along.length && along[k] != 0) {
+                    full[k] = space.edge[k];
+                    for (int i = 0; i < n; i++) {
+                        full[k][i] = along[k] * given[i];
+                    }
+                }
+            }
+            chart.evaluate(anchor, full, n, space.nodes);
+            double[][] t = space.along;
+            for (int a = 0; a < 3; a++) {
+                java.util.Arrays.fill(t[a], 0, n, 0);
+                for (int k = 0; k < along.length; k++) {
+                    double[] own = space.nodes.tangent[k][a];
+                    double f = along[k];
+                    for (int i = 0; f != 0 && i < n; i++) {
+                        t[a][i] += f * own[i];
+                    }
+                }
+            }
+            return space.nodes;
+        }
+
+        @Override
+        double[][] tangent(int k) {
+            return space.along;
+        }
+
+        @Override
+        void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise) {
+            displacements(b, n);
+            double[][] d = space.d;
+            double[][] t = space.along;
+            double[] e1 = face.e1;
+            double[] e2 = face.e2;
+            double[] u = space.ray[0];
+            double[] v = space.ray[1];
+            double[] f = space.weight;
+            double[] r = space.sum;
+            for (int i = 0; i < n; i++) {
+                u[i] = d[0][i] * e1[0] + d[1][i] * e1[1] + d[2][i] * e1[2];
+                v[i] = d[0][i] * e2[0] + d[1][i] * e2[1] + d[2][i] * e2[2];
+                double du = t[0][i] * e1[0] + t[1][i] * e1[1] + t[2][i] * e1[2];
+                double dv = t[0][i] * e2[0] + t[1][i] * e2[1] + t[2][i] * e2[2];
+                double square = u[i] * u[i] + v[i] * v[i];
+                r[i] = Math.sqrt(square);
+                f[i] = square > 0 ? sign * jacobian[i] * (u[i] * dv - v[i] * du) / (square * r[i]) : 0;
+            }
+            double height = Math.abs(face.height);
+            for (int i = 0; i < n; i++) {
+                noise[i] = 0;
+                face.radial(r[i], potential ? null : space.radialA, space.radialB);
+                if (potential || probe.b() != null) {
+                    double sum = 0;
+                    double size = 0;
+                    for (int m = 0; m <= face.degree; m++) {
+                        double term = homogeneous(face.forPotential, m, u[i], v[i]) * space.radialB[m + 1];
+                        sum += term;
+                        size += Math.abs(term);
+                    }
+                    double factor = f[i] * r[i] * r[i];
+                    (potential ? out[0] : space.v)[i] = factor * sum;
+                    noise[i] = 6 * EPS * Math.abs(factor) * size;
+                }
+                if (!potential) {
+                    double plane = 0;
+                    double across = 0;
+                    double size = 0;
+                    for (int m = 0; m <= face.degree; m++) {
+                        double q = homogeneous(face.forField, m, u[i], v[i]);
+                        plane += q * space.radialA[m + 2];
+                        across += q * space.radialA[m + 1];
+                        size += Math.abs(q) * (space.radialA[m + 2] * r[i] + space.radialA[m + 1] * height);
+                    }
+                    double fu = -f[i] * plane * u[i];
+                    double fv = -f[i] * plane * v[i];
+                    double fn = -f[i] * across * face.height;
+                    for (int a = 0; a < 3; a++) {
+                        out[a][i] = fu * e1[a] + fv * e2[a] + fn * face.normal[a];
+                    }
+                    noise[i] += 6 * EPS * Math.abs(f[i]) * size;
+                }
+            }
+            addRoughness(anchor, n, out, noise);
+            deliver(space.v, n, out);
+        }
+
+        private static double homogeneous(double[] q, int m, double u, double v) {
+            int at = m * (m + 1) / 2;
+            double sum = q[at];
+            double power = 1;
+            for (int j = 1; j <= m; j++) {
+                power *= v;
+                sum = sum * u + q[at + j] * power;
+            }
+            return sum;
         }
     }
 }

@@ -16,4 +16,8 @@ final class Workspace {
     final double[] v = new double[BLOCK];
     final double[][] ray = new double[3][BLOCK];
     final double[] sum = new double[BLOCK];
+    final double[][] edge = new double[3][BLOCK];
+    final double[][] along = new double[3][BLOCK];
+    final double[] radialA = new double[fieldwright.formula.Polynomial.MOST + 3];
+    final double[] radialB = new double[fieldwright.formula.Polynomial.MOST + 3];
 }

@@ -266,6 +266,30 @@ public final class Chart {
         return from[depth].isConstant() && to[depth].isConstant();
     }
 
+    /** Whether a surface lies in a plane because of the coordinate that is held. */
+    public boolean isFlat() {
+        if (dimension != 2 || system == null) {
+            return false;
+        }
+        for (int m = 0; m < names; m++) {
+            if (fixed[m] != null) {
+                return fixed[m].isConstant() && isPlane(m);
+            }
+        }
+        return false;
+    }
+
+    /** Whether one end of a volume's coordinate is a plane. */
+    public boolean isFlatFace(int depth, boolean upper) {
+        return dimension == 3 && system != null && (upper ? to[depth] : from[depth]).isConstant() && isPlane(free[depth]);
+    }
+
+    /** Whether a coordinate is constant on planes. */
+    private boolean isPlane(int coordinate) {
+        String name = nest.names().get(coordinate);
+        return system == CoordinateSystem.CARTESIAN || name.equals("z") || name.equals("phi");
+    }
+
     /** True when offsets from an anchor carry no cancellation: all limits and fixed values are numbers, or algebraic. */
     public boolean hasExactOffsets() {
         if (algebraic != null) {
