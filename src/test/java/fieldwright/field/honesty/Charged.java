@@ -9,6 +9,9 @@ import java.util.List;
  * along the surface normal the place is displaced when it lies on the charge: the two one-sided values.
  */
 sealed interface Charged {
+    /** A place nearer than this many sizes is on the charge: some roundings of its coordinates. */
+    double ON = 1e-14;
+
     /** 1 line, 2 surface, 3 volume. */
     int dimension();
 
@@ -393,7 +396,7 @@ sealed interface Charged {
                     return dZ * dq;
                 }
             };
-            return onProfile(profile, arc, density, place, push, nearest, setting);
+            return onProfile(profile, arc, density, place, push, nearest, size(), setting);
         }
     }
 
@@ -456,7 +459,7 @@ sealed interface Charged {
                     return k * dq * (2 * q + dq);
                 }
             };
-            return onProfile(profile, null, density, place, push, best, setting);
+            return onProfile(profile, null, density, place, push, best, size(), setting);
         }
 
         private double nearest(double rho0, double z0) {
@@ -539,18 +542,22 @@ sealed interface Charged {
                     return -2 * radius * Math.sin(q + dq / 2) * Math.sin(dq / 2);
                 }
             };
-            return onProfile(profile, null, density, place, push, nearest, setting);
+            return onProfile(profile, null, density, place, push, nearest, size(), setting);
         }
     }
 
     private static Answer onProfile(RevolutionJudge.Profile profile, double[] arc, SmoothDensity density, Exact.Position place,
-            double[] push, double nearest, DoubleExponential.Setting setting) {
+            double[] push, double nearest, double size, DoubleExponential.Setting setting) {
         BigDecimal rho0 = Exact.hypot(place.x(), place.y());
         double azimuth = Math.atan2(place.y().doubleValue(), place.x().doubleValue());
         double pushRho = push[0] * Math.cos(azimuth) + push[1] * Math.sin(azimuth);
-        boolean on = pushRho != 0 || push[2] != 0;
-        double offRho = on ? pushRho : rho0.subtract(profile.exactRho(nearest)).doubleValue();
-        double offZ = on ? push[2] : place.z().subtract(profile.exactZ(nearest)).doubleValue();
+        double offRho = rho0.subtract(profile.exactRho(nearest)).doubleValue();
+        double offZ = place.z().subtract(profile.exactZ(nearest)).doubleValue();
+        // Of two parts that meet at a kink the place is on one only: the push is from there, from the other its true offset.
+        if ((pushRho != 0 || push[2] != 0) && Math.hypot(offRho, offZ) < ON * size) {
+            offRho = pushRho;
+            offZ = push[2];
+        }
         double distance = Math.sqrt(offRho * offRho + offZ * offZ);
         return RevolutionJudge.judge(profile, density, arc, place, new double[] {offRho, offZ}, nearest, distance, setting);
     }

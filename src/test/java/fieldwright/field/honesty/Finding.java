@@ -143,6 +143,15 @@ record Finding(Problem problem, String quantity, Outcome outcome, double excess,
         return outcome == Outcome.CONVERGED;
     }
 
+    /** A converged number that the judge can tell the true error of: its own is below the stated one. */
+    boolean isJudged() {
+        return isConverged() && !expectedUnbounded() && judgeError <= statedError;
+    }
+
+    boolean isUnjudged() {
+        return isConverged() && !expectedUnbounded() && !isJudged();
+    }
+
     /** A number where there is none, or none at all. */
     boolean isWrongKind() {
         return outcome == Outcome.FAILED || expectedUnbounded() && outcome == Outcome.CONVERGED
@@ -150,11 +159,11 @@ record Finding(Problem problem, String quantity, Outcome outcome, double excess,
     }
 
     boolean isDishonest(double factor) {
-        return isConverged() && excess > factor;
+        return isJudged() && excess > factor;
     }
 
     boolean exceedsTolerance() {
-        return isConverged() && !expectedUnbounded() && trueError - judgeError > allowed;
+        return isJudged() && trueError - judgeError > allowed;
     }
 
     /** Stated over true error; where the true one is below what the judge can see, over the judge's. */

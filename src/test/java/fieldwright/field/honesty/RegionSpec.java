@@ -9,8 +9,10 @@ import fieldwright.geometry.CoordinateSystem;
 import fieldwright.geometry.ParametricRegion;
 import fieldwright.geometry.Region;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Locale;
+import java.util.Set;
 
 /** A region as an author would type it: a system with limits, or three formulas with one parameter. */
 record RegionSpec(String system, List<String[]> entries) {
@@ -42,7 +44,13 @@ record RegionSpec(String system, List<String[]> entries) {
 
     Region region() {
         if (system.equals("parametric")) {
-            ParametricRegion r = ParametricRegion.of(formula(entries.get(0)[1]), formula(entries.get(1)[1]), formula(entries.get(2)[1]));
+            Set<String> free = new HashSet<>();
+            entries.subList(3, entries.size()).forEach(e -> free.add(e[0]));
+            Formula[] x = new Formula[3];
+            for (int c = 0; c < 3; c++) {
+                x[c] = Formula.parse(entries.get(c)[1]).bind(Scope.EMPTY, free);
+            }
+            ParametricRegion r = ParametricRegion.of(x[0], x[1], x[2]);
             for (String[] e : entries.subList(3, entries.size())) {
                 r = r.over(e[0], formula(e[1]), formula(e[2]));
             }
