@@ -12,6 +12,9 @@ sealed interface Charged {
     /** A place nearer than this many sizes is on the charge: some roundings of its coordinates. */
     double ON = 1e-14;
 
+    /** Stands for no distance at all where a scale is needed: potentials on a rim, m. */
+    double LEAST = 1e-30;
+
     /** 1 line, 2 surface, 3 volume. */
     int dimension();
 

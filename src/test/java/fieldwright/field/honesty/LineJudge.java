@@ -29,7 +29,7 @@ final class LineJudge {
         this.curve = curve;
         this.density = density;
         this.nearest = nearest;
-        scale = distance / curve.speed(nearest);
+        scale = Math.max(distance, Charged.LEAST) / curve.speed(nearest);
         BigDecimal[] exact = curve.exact(nearest);
         BigDecimal[] at = {place.x(), place.y(), place.z()};
         for (int c = 0; c < 3; c++) {

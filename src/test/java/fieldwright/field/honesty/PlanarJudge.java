@@ -39,7 +39,7 @@ final class PlanarJudge {
         this.density = density;
         this.foot = foot;
         this.height = height;
-        scale = distance;
+        scale = Math.max(distance, Charged.LEAST);
         along = new DoubleExponential(setting);
         across = new DoubleExponential(setting);
     }
@@ -99,7 +99,7 @@ final class PlanarJudge {
 
     static double asinh(double t) {
         double m = Math.abs(t);
-        double value = m < 1e-3 ? Math.log1p(m + m * m / (1 + Math.sqrt(1 + m * m))) : Math.log(m + Math.sqrt(1 + m * m));
+        double value = m < 1e9 ? Math.log1p(m + m * m / (1 + Math.sqrt(1 + m * m))) : Math.log(m) + Math.log(2);
         return Math.copySign(value, t);
     }
 }

@@ -60,7 +60,7 @@ final class RevolutionJudge {
         offZ = off[1];
         nearestRho = profile.exactRho(nearest).doubleValue();
         nearestZ = profile.exactZ(nearest).doubleValue();
-        scale = distance / profile.speed(nearest);
+        scale = Math.max(distance, Charged.LEAST) / profile.speed(nearest);
         this.arc = arc == null ? new double[] {-Math.PI, 0, 0, Math.PI} : relative(arc, azimuth0);
         meridian = new DoubleExponential(setting);
         ring = new DoubleExponential(setting);
