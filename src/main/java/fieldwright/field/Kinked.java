@@ -19,8 +19,9 @@ import fieldwright.integral.RegionIntegral;
 import fieldwright.quantity.Amount;
 
 /**
- * A volume cut where its density bends: at zeros of what stands in abs, sign, min or max, when those are values of one coordinate
- * between numbers. On each part one branch holds, so that abs(z) is z or −z, a polynomial, which the radial integral takes.
+ * A volume cut where its density bends or jumps: at zeros of what stands in abs, sign, min or max, or of the two sides of a condition
+ * of when, if those are values of one coordinate between numbers. On each part one branch holds, so that abs(z) is z or −z, a
+ * polynomial, which the radial integral takes.
  */
 record Kinked(CoordinateRegion region, Formula density) {
     private static final Set<Function> BRANCHED = Set.of(Function.ABS, Function.SIGN, Function.MIN, Function.MAX);
@@ -96,6 +97,10 @@ record Kinked(CoordinateRegion region, Formula density) {
 
     private Node branch(Node node, Chart chart) {
         Node n = node.mapChildren(c -> branch(c, chart));
+        if (n instanceof Node.When w && w.condition() instanceof Node.Compare c) {
+            int side = sign(density.part(c.left()).minus(density.part(c.right())), chart);
+            return side == 0 ? n : c.relation().holds(side, 0) ? w.yes() : w.no();
+        }
         if (!(n instanceof Node.Call call) || !BRANCHED.contains(call.function())) {
             return n;
         }

@@ -192,7 +192,7 @@ public sealed interface Node {
             this.sign = sign;
         }
 
-        boolean holds(double a, double b) {
+        public boolean holds(double a, double b) {
             return switch (this) {
                 case LESS, MUCH_LESS -> a < b;
                 case LESS_OR_EQUAL -> a <= b;

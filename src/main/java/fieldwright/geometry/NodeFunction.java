@@ -131,12 +131,12 @@ public final class NodeFunction {
     private Boolean smooth;
     /** A function of one coordinate that is as good as a polynomial between the cuts of the chart. */
     private boolean resolved;
-    /** Every kink is a value of one coordinate with constant limits, where integrals over the chart are cut. */
+    /** Every kink is a value of one coordinate with constant limits, or the chart a line: there integrals over it are cut. */
     private boolean kinksAreCut;
 
     private static boolean kinksAreCut(Formula formula, Chart chart) {
         for (Formula kink : formula.kinks()) {
-            boolean cut = false;
+            boolean cut = chart.dimension() == 1 && !chart.isEndless(0);
             for (int k = 0; k < chart.dimension(); k++) {
                 String name = chart.coordinates().get(chart.coordinateOf(k));
                 cut |= kink.variables().equals(java.util.Set.of(name)) && chart.hasConstantLimits(k) && !chart.isEndless(k);

@@ -4,6 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeSet;
+import java.util.function.DoubleConsumer;
+import java.util.function.DoubleUnaryOperator;
 
 import fieldwright.formula.BlockFunction;
 import fieldwright.formula.Formula;
@@ -78,17 +80,18 @@ public final class RegionIntegral {
 
     /**
      * Where each depth of a chart should be cut: at zeros of the formula's kinks that depend on one coordinate with constant
-     * limits. Always contains 0 and 1.
+     * limits, on a line at zeros of any kink. Always contains 0 and 1.
      */
     public static double[][] breaks(Chart chart, Formula f) {
         double[][] cuts = new double[chart.dimension()][];
         for (int k = 0; k < cuts.length; k++) {
             TreeSet<Double> found = new TreeSet<>(List.of(0.0, 1.0));
-            String name = chart.coordinates().get(chart.coordinateOf(k));
-            if (chart.hasConstantLimits(k) && !chart.isEndless(k)) {
+            if (!chart.isEndless(k)) {
                 for (Formula kink : f.kinks()) {
-                    if (kink.variables().size() == 1 && kink.variables().contains(name)) {
-                        roots(kink.compile(List.of(name)), chart, k, found);
+                    if (cuts.length == 1) {
+                        alongLine(chart, kink, found);
+                    } else {
+                        alongCoordinate(chart, k, kink, found);
                     }
                 }
             }
@@ -103,35 +106,53 @@ public final class RegionIntegral {
         return cuts;
     }
 
-    private static void roots(BlockFunction kink, Chart chart, int depth, TreeSet<Double> found) {
-        double a = chart.lower(depth);
-        double b = chart.upper(depth);
-        double before = kink.at(a);
-        int steps = 200;
+    private static void alongCoordinate(Chart chart, int depth, Formula kink, TreeSet<Double> found) {
+        String name = chart.coordinates().get(chart.coordinateOf(depth));
+        if (chart.hasConstantLimits(depth) && kink.variables().equals(java.util.Set.of(name))) {
+            BlockFunction value = kink.compile(List.of(name));
+            roots(value::at, chart.lower(depth), chart.upper(depth), 200, at -> cut(chart.parameter(depth, at), found));
+        }
+    }
+
+    private static void alongLine(Chart chart, Formula kink, TreeSet<Double> found) {
+        NodeFunction value = NodeFunction.of(kink, chart);
+        Chart.Anchor middle = chart.anchor(new double[] {0.5});
+        Nodes nodes = new Nodes();
+        double[][] du = new double[1][1];
+        double[] out = new double[1];
+        roots(u -> {
+            du[0][0] = u - 0.5;
+            chart.evaluate(middle, du, 1, nodes);
+            value.evaluate(nodes, middle.position(), 1, out);
+            return out[0];
+        }, 0, 1, 1000, u -> cut(u, found));
+    }
+
+    private static void roots(DoubleUnaryOperator kink, double a, double b, int steps, DoubleConsumer found) {
+        double before = kink.applyAsDouble(a);
         for (int i = 1; i <= steps; i++) {
             double low = a + (b - a) * (i - 1) / steps;
             double high = i == steps ? b : a + (b - a) * i / steps;
-            double after = kink.at(high);
+            double after = kink.applyAsDouble(high);
             if (before * after < 0) {
                 double sign = before;
                 for (int step = 0; step < 100 && high - low > 1e-16 * (b - a); step++) {
                     double middle = (low + high) / 2;
-                    if (kink.at(middle) * sign > 0) {
+                    if (kink.applyAsDouble(middle) * sign > 0) {
                         low = middle;
                     } else {
                         high = middle;
                     }
                 }
-                cut(chart, depth, (low + high) / 2, found);
+                found.accept((low + high) / 2);
             } else if (after == 0) {
-                cut(chart, depth, high, found);
+                found.accept(high);
             }
             before = after;
         }
     }
 
-    private static void cut(Chart chart, int depth, double coordinate, TreeSet<Double> found) {
-        double u = chart.parameter(depth, coordinate);
+    private static void cut(double u, TreeSet<Double> found) {
         if (u > 1e-12 && u < 1 - 1e-12) {
             found.add(u);
         }

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Random;
+import java.util.Set;
 import java.util.function.DoubleUnaryOperator;
 
 import org.junit.jupiter.api.Test;
@@ -17,8 +18,10 @@ import fieldwright.charge.Source;
 import fieldwright.charge.Surroundings;
 import fieldwright.formula.Constants;
 import fieldwright.formula.Formula;
+import fieldwright.formula.Scope;
 import fieldwright.geometry.CoordinateRegion;
 import fieldwright.geometry.CoordinateSystem;
+import fieldwright.geometry.ParametricRegion;
 import fieldwright.integral.GaussLegendre;
 import fieldwright.quantity.Place;
 import fieldwright.quantity.Vector;
@@ -61,6 +64,7 @@ class RoughDensityTest {
         "sqrt(r/(1 m))", r -> Math.pow(r, 3.5) / 3.5,
         "r/(1 m)", r -> Math.pow(r, 4) / 4,
         "1/(1+r/(1 m))", r -> r < 0.05 ? Math.pow(r, 3) * series(r) : r * r / 2 - r + Math.log1p(r),
+        "when(r^2 < 0.25 (m^2), 2, 1)", r -> (Math.pow(r, 3) + Math.pow(Math.min(r, 0.5), 3)) / 3,
         "abs(r/(1 m)-0.5)", r -> r < 0.5 ? Math.pow(r, 3) / 6 - Math.pow(r, 4) / 4
             : 1 / 96.0 + Math.pow(r, 4) / 4 - Math.pow(r, 3) / 6);
 
@@ -132,6 +136,45 @@ class RoughDensityTest {
             check("sqrt(rho)", p, e, new double[] {0, 0, exact}, 1e-13 * exact, broken);
         }
         assertEquals(List.of(), broken);
+    }
+
+    /** A jump along a curve and along the height of a cone: the same as two charges, each with its own density. */
+    @Test
+    void jumpsAreTwoCharges() {
+        List<String> broken = new ArrayList<>();
+        Random random = new Random(SEED + 2);
+        for (int i = 0; i < 12; i++) {
+            Place p = place(random, i);
+            String at = 0.2 + 0.5 * random.nextDouble() + " m";
+            sum("helix", p, new Source[] {helix("when(z < " + at + ", 1, 3)", "0", "10"), helix("1", "0", at + "/(0.1 m)"),
+                helix("3", at + "/(0.1 m)", "10")}, broken);
+            sum("cone", p, new Source[] {cone("when(z >= " + at + ", exp(x/(1 m)), 2)", "0 m", "1 m"), cone("2", "0 m", at),
+                cone("exp(x/(1 m))", at, "1 m")}, broken);
+        }
+        assertEquals(List.of(), broken);
+    }
+
+    private static Source helix(String density, String from, String to) {
+        Set<String> t = Set.of("t");
+        ParametricRegion curve = ParametricRegion.of(Formula.parse("0.5 m*cos(t)").bind(Scope.EMPTY, t), Formula.parse("0.5 m*sin(t)").bind(Scope.EMPTY, t),
+            Formula.parse("0.1 m*t").bind(Scope.EMPTY, t)).over("t", Formula.parse(from), Formula.parse(to));
+        return Charge.of(curve, Formula.parse("1 (C/m)*(" + density + ")")).with(Surroundings.FREE_SPACE);
+    }
+
+    private static Source cone(String density, String from, String to) {
+        return in(CoordinateSystem.CYLINDRICAL, density, "z", from, to, "phi", "0", "2*pi", "rho", "0 m", "0.7*z");
+    }
+
+    private static void sum(String what, Place p, Source[] wholeAndParts, List<String> broken) {
+        Vector[] e = new Vector[3];
+        for (int k = 0; k < 3; k++) {
+            FieldSolver solver = FieldSolver.of(wholeAndParts[k], Accuracy.DEFAULT);
+            e[k] = solver.electricField(p);
+            assertTrue(e[k].standing().isConverged(), () -> what + " at " + p);
+            assertTrue(solver.evaluations() < 60_000, () -> what + " at " + p + ": " + solver.evaluations() + " evaluations");
+        }
+        double bound = norm(e[1].x().error() + e[2].x().error(), e[1].y().error() + e[2].y().error(), e[1].z().error() + e[2].z().error());
+        check(what, p, e[0], new double[] {e[1].x().si() + e[2].x().si(), e[1].y().si() + e[2].y().si(), e[1].z().si() + e[2].z().si()}, bound, broken);
     }
 
     private static void check(String what, Place p, Vector e, double[] exact, double bound, List<String> broken) {
