@@ -92,7 +92,10 @@ final class Compiled {
         SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
         double[][] breaks = RegionIntegral.breaks(chart, density);
         Polynomial polynomial = kernel == Kernel.POINT && (inSpace != null || triangle || chart.isFlat()) ? polynomial(density, chart, weight, triangle) : null;
-        return new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks, triangle, polynomial);
+        Facets facets = new Facets();
+        Patch patch = new Patch(chart, frame.isOwn() ? Frame.OWN : frame, density, weight, kernel, inSpace, breaks, triangle, polynomial, facets);
+        facets.of(patch);
+        return patch;
     }
 
     /** The density as a polynomial of position, if it is one and gives the same numbers as the formula at places all over the chart. */

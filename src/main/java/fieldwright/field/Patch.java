@@ -10,7 +10,8 @@ import fieldwright.geometry.NodeFunction;
  * {@code triangle}: only the half u + v ≤ 1 of the chart's box carries charge; {@code polynomial}: the density of a flat surface or a volume
  * as one of position, or null. */
 record Patch(Chart chart, Frame frame, Formula density, NodeFunction weight, Kernel kernel, SpaceFunction inSpace, double[][] breaks,
-    boolean triangle, Polynomial polynomial) {
+    boolean triangle, Polynomial polynomial,
+    Facets facets) {
     int dimension() {
         return chart.dimension();
     }

@@ -41,20 +41,21 @@ final class Paver {
     }
 
     void pave(Patch patch, Probe probe) {
-        double[] own = patch.frame().toOwn(probe.place());
-        Chart chart = patch.chart().towards(own);
         if (patch.weight().isConstant() && patch.weight().constant() == 0) {
             return;
         }
-        Sampler.Coulomb sampler = new Sampler.Coulomb(patch, probe, potential, space, chart);
+        Facets facets = patch.facets();
+        Facet.Body body = facets.body(space, probe);
+        Sampler.Coulomb sampler = new Sampler.Coulomb(body, probe, potential);
         if (patch.dimension() == 0) {
             single(sampler);
             return;
         }
-        if (patch.dimension() == 3 && patch.inSpace() != null && patch.kernel() == Kernel.POINT && !chart.isEndless() && faces(patch, probe, chart, sampler)) {
+        if (patch.dimension() == 3 && patch.inSpace() != null && patch.kernel() == Kernel.POINT && !body.chart.isEndless()
+            && faces(facets, sampler)) {
             return;
         }
-        if (patch.dimension() == 2 && patch.polynomial() != null && flatSurface(patch, probe, chart, sampler)) {
+        if (patch.dimension() == 2 && patch.polynomial() != null && flatSurface(facets, sampler)) {
             return;
         }
         if (patch.triangle()) {
@@ -63,124 +64,64 @@ final class Paver {
             rebase(sampler, first);
             return;
         }
-        boxes(patch, chart, sampler);
+        boxes(patch, body.chart, sampler);
     }
 
     private static final double[][] TRIANGLE = {{0, 0}, {1, 0}, {0, 1}};
-    private static final double[][] SQUARE = {{0, 0}, {1, 0}, {1, 1}, {0, 1}};
 
-    /** A flat surface near by by its edges; false when it is far, or touched by the place, which other rules know better. */
-    private boolean flatSurface(Patch patch, Probe probe, Chart chart, Sampler whole) {
-        Chart.Anchor middle = whole.anchor(0.5, 0.5);
-        double[] b = whole.toAnchor(middle);
-        int n = 0;
-        for (int i = 0; i < GRID; i++) {
-            for (int j = 0; j < GRID; j++) {
-                space.du[0][n] = i / (GRID - 1.0) - 0.5;
-                space.du[1][n++] = j / (GRID - 1.0) - 0.5;
-            }
-        }
-        Nodes nodes = whole.place(middle, space.du, n);
-        double size = radius(nodes, n);
-        if (!(least(nodes, b, n) < 2 * size)) {
+    /** A flat surface near by by its edges; false when it is far, or the place is on its edge, which other rules know better. */
+    private boolean flatSurface(Facets facets, Sampler whole) {
+        Facets.Extent extent = facets.extent();
+        double[] b = whole.toAnchor(extent.middle());
+        if (!(extent.least(b) < 2 * extent.radius())) {
             return false;
         }
-        space.du[0][0] = 0;
-        space.du[1][0] = 0;
-        whole.place(middle, space.du, 1);
-        double[] normal = unit(cross(column(whole.tangent(0)), column(whole.tangent(1))));
-        if (normal == null) {
+        Facet.Edges edges = facets.edges();
+        if (edges.normal == null) {
             return false;
         }
-        double height = dot(normal, b);
-        if (!(Math.abs(height) > touching(whole, middle))) {
+        double height = dot(edges.normal, whole.toAnchor(edges.middle));
+        if (!(Math.abs(height) > touching(whole, edges.middle))) {
             height = 0;
-            if (!inPlane(patch, whole, normal)) {
+            if (!inPlane(whole, edges)) {
                 return false;
             }
         }
-        FlatFace face = FlatFace.surface(patch.polynomial(), whole.target, normal, height, size);
-        edges(patch, probe, chart, face, new double[2], 0, 1, patch.triangle() ? TRIANGLE : SQUARE, 1, size);
+        FlatFace face = FlatFace.surface(whole.patch.polynomial(), whole.target, edges.normal, height, extent.radius());
+        paveEdges(whole.probe, edges, face);
         return true;
     }
 
     /** A place in the plane of a flat surface, off its edge: notes the jump if it is on the surface. False on the edge. */
-    private boolean inPlane(Patch patch, Sampler whole, double[] normal) {
-        double[] at = patch.triangle() ? nearestInTriangle(whole)
-            : footOnSurface(whole, new double[2], new double[] {1, 1}, patch.chart().nearest(whole.target));
+    private boolean inPlane(Sampler whole, Facet.Edges edges) {
+        double[] at = whole.patch.triangle() ? nearestInTriangle(whole)
+            : footOnSurface(whole, new double[2], new double[] {1, 1}, whole.chart.nearest(whole.target));
         Chart.Anchor foot = whole.anchor(at);
         double touching = touching(whole, foot);
         if (norm(whole.toAnchor(foot)) > 2 * touching) {
             return true;
         }
-        double[][] corners = patch.triangle() ? TRIANGLE : SQUARE;
-        for (int k = 0; k < corners.length; k++) {
-            if (corners == SQUARE && isFullTurn(patch.chart(), 1 - k % 2)) {
-                continue;
-            }
-            double[] from = corners[k];
-            double[] to = corners[(k + 1) % corners.length];
-            Sampler.Edge edge = new Sampler.Edge(patch, whole.probe, potential, space, whole.chart, null, from.clone(),
-                new double[] {to[0] - from[0], to[1] - from[1]}, 1, 0);
-            double t = (at[0] - from[0]) * (to[0] - from[0]) + (at[1] - from[1]) * (to[1] - from[1]);
-            t /= (to[0] - from[0]) * (to[0] - from[0]) + (to[1] - from[1]) * (to[1] - from[1]);
-            if (!(norm(edge.toAnchor(edge.anchor(footOnLine(edge, 0, 1, Math.min(1, Math.max(0, t)))))) > 2 * touching)) {
+        for (Facet.Edge facet : edges.all) {
+            Sampler.Edge edge = new Sampler.Edge(facet, whole.probe, potential, null);
+            double t = footOnLine(edge, 0, 1, facet.project(at, whole.facet.axes));
+            if (!(norm(edge.toAnchor(edge.anchor(t))) > 2 * touching)) {
                 return false;
             }
         }
         double sigma = whole.densityAt(foot);
         if (!potential && sigma != 0) {
-            contact.surface(sigma, 1, whole.mapped(normal[0], normal[1], normal[2]), new double[3]);
+            contact.surface(sigma, 1, whole.mapped(edges.normal[0], edges.normal[1], edges.normal[2]), new double[3]);
         }
         return true;
     }
 
-    private double least(Nodes nodes, double[] b, int n) {
-        double least = Double.POSITIVE_INFINITY;
-        for (int i = 0; i < n; i++) {
-            least = Math.min(least, distance(nodes, b, i));
-        }
-        return least;
-    }
-
-    /** Half the longest side of the box that holds the nodes. */
-    private static double radius(Nodes nodes, int n) {
-        double radius = 0;
-        for (int a = 0; a < 3; a++) {
-            double low = Double.POSITIVE_INFINITY;
-            double high = Double.NEGATIVE_INFINITY;
-            for (int i = 0; i < n; i++) {
-                low = Math.min(low, nodes.offset[a][i]);
-                high = Math.max(high, nodes.offset[a][i]);
-            }
-            radius = Math.max(radius, (high - low) / 2);
-        }
-        return radius;
-    }
-
-    /** The edges of a flat face between {@code corners} of its parameters p and q, the others held; {@code sign} tells which way they run. */
-    private void edges(Patch patch, Probe probe, Chart chart, FlatFace face, double[] held, int p, int q, double[][] corners, int sign, double size) {
-        for (int k = 0; k < corners.length; k++) {
-            double[] from = corners[k];
-            double[] to = corners[(k + 1) % corners.length];
-            if (corners == SQUARE && isFullTurn(chart, k % 2 == 0 ? q : p)) {
-                continue;
-            }
-            double[] corner = held.clone();
-            double[] along = new double[held.length];
-            corner[p] = from[0];
-            corner[q] = from[1];
-            along[p] = to[0] - from[0];
-            along[q] = to[1] - from[1];
-            Sampler.Edge edge = new Sampler.Edge(patch, probe, potential, space, chart, face, corner, along, sign, 1e-20 * size);
+    private void paveEdges(Probe probe, Facet.Edges edges, FlatFace face) {
+        for (Facet.Edge facet : edges.all) {
+            Sampler.Edge edge = new Sampler.Edge(facet, probe, potential, face);
             int first = pieces.size();
-            line(edge, 0, 1, 0);
+            line(edge, facet.whole(), 0);
             rebase(edge, first);
         }
-    }
-
-    private static double[] cross(double[] a, double[] b) {
-        return new double[] {a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]};
     }
 
     /** Nearest point of a flat triangle, u + v ≤ 1 in its own parameters: its foot if that is inside, else the nearest on a side. */
@@ -260,13 +201,11 @@ final class Paver {
             }
             return;
         }
-        s.place(anchor, space.du, 0);
-        for (double[] du : space.du) {
-            du[0] = 0;
-        }
         s.place(anchor, space.du, 1);
+        space.jacobian[0] = 1;
+        s.facet.carry(anchor, space.jacobian, 1, space.set);
         double[][] out = new double[3][1];
-        s.values(anchor, b, new double[] {1}, 1, out, new double[1]);
+        s.act(space.set, anchor, b, 1, out, new double[1]);
         for (int c = 0; c < start.length; c++) {
             start[c] += out[c][0];
         }
@@ -284,8 +223,15 @@ final class Paver {
                 endlessCuts(chart, k, cuts, tail);
             }
         }
-        int[] index = new int[dims];
         int first = pieces.size();
+        if (!chart.isEndless()) {
+            for (Panel panel : sampler.facet.between(cuts)) {
+                pave(sampler, panel, 0);
+            }
+            rebase(sampler, first);
+            return;
+        }
+        int[] index = new int[dims];
         while (true) {
             double[] from = new double[dims];
             double[] to = new double[dims];
@@ -298,7 +244,7 @@ final class Paver {
             if (isTail) {
                 addTail(sampler, from, to);
             } else {
-                pave(sampler, from, to, 0);
+                pave(sampler, new Panel(sampler.facet, from, to), 0);
             }
             int k = 0;
             while (k < dims && ++index[k] == cuts[k].length - 1) {
@@ -313,7 +259,7 @@ final class Paver {
 
     /** One anchor, the nearest, for all pieces of a sampler whose offsets are exact. */
     private void rebase(Sampler sampler, int first) {
-        if (!sampler.chart.hasExactOffsets()) {
+        if (pieces.size() == first || !sampler.chart.hasExactOffsets()) {
             return;
         }
         Pieces.Base nearest = null;
@@ -362,12 +308,12 @@ final class Paver {
         pieces.add(Piece.whole(new Pieces.Box(s, from, to), orders));
     }
 
-    private void pave(Sampler s, double[] from, double[] to, int depth) {
+    private void pave(Sampler s, Panel panel, int depth) {
         Stop.check();
-        switch (from.length) {
-            case 1 -> line(s, from[0], to[0], depth);
-            case 2 -> surface(s, from, to, depth);
-            default -> volume(s, from, to, depth);
+        switch (panel.from.length) {
+            case 1 -> line(s, panel, depth);
+            case 2 -> surface(s, panel, depth);
+            default -> volume(s, panel, depth);
         }
     }
 
@@ -396,14 +342,9 @@ final class Paver {
         return Math.max(least, Math.min(24, n));
     }
 
-    private void split(Sampler s, double[] from, double[] to, int direction, int depth) {
-        double middle = (from[direction] + to[direction]) / 2;
-        double[] a = to.clone();
-        double[] b = from.clone();
-        a[direction] = middle;
-        b[direction] = middle;
-        pave(s, from, a, depth + 1);
-        pave(s, b, to, depth + 1);
+    private void split(Sampler s, Panel panel, int direction, int depth) {
+        pave(s, panel.half(direction, true), depth + 1);
+        pave(s, panel.half(direction, false), depth + 1);
     }
 
     /** Cuts [0, 1]² of a piece so that no part spans more than SPAN in sinh coordinates. */
@@ -423,39 +364,34 @@ final class Paver {
 
     private static final double[] ALONG = {0, 0.23, 0.5, 0.71, 1};
 
-    private void line(Sampler s, double from, double to, int depth) {
-        Chart.Anchor middle = s.anchor((from + to) / 2);
-        double[] b = s.toAnchor(middle);
-        for (int i = 0; i < ALONG.length; i++) {
-            space.du[0][i] = from + (to - from) * ALONG[i] - (from + to) / 2;
+    private void line(Sampler s, Panel panel, int depth) {
+        double length = panel.length[0];
+        if (!(length > s.facet.leastLength())) {
+            return;
         }
-        Nodes nodes = s.place(middle, space.du, ALONG.length);
-        double length = 0;
+        double[] b = s.toAnchor(panel.anchor);
         double least = Double.POSITIVE_INFINITY;
         int nearest = 0;
-        double bend = bend(s.tangent(0), ALONG.length);
         for (int i = 0; i < ALONG.length; i++) {
-            double d = distance(nodes, b, i);
+            double d = distance(panel.sample, b, i);
             if (d < least) {
                 least = d;
                 nearest = i;
             }
-            length += i == 0 ? 0 : step(nodes, i - 1, i);
         }
-        if (!(length > s.leastLength())) {
-            return;
-        }
+        double bend = panel.bend[0][0];
         double lift = lift(s);
-        double distance = Math.hypot(Math.max(0, least - length / 8), lift);
         if (Math.hypot(least, lift) > FAR * length && bend < 1.5) {
-            int n = order(distance, length, bend, 6);
-            pieces.add(Piece.whole(new Pieces.Box(s, new double[] {from}, new double[] {to}), n));
+            double distance = Math.hypot(Math.max(0, least - length / 8), lift);
+            pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length, bend, 6)));
             return;
         }
         if (bend > BENT && depth < DEEPEST) {
-            split(s, new double[] {from}, new double[] {to}, 0, depth);
+            split(s, panel, 0, depth);
             return;
         }
+        double from = panel.from[0];
+        double to = panel.to[0];
         nearLine(s, from, to, from + (to - from) * ALONG[nearest], lift);
     }
 
@@ -574,69 +510,19 @@ final class Paver {
         return u < from + near ? from : u > to - near ? to : Double.isNaN(u) ? (from + to) / 2 : u;
     }
 
-    private double distance(Nodes nodes, double[] b, int i) {
-        double x = b[0] + nodes.offset[0][i];
-        double y = b[1] + nodes.offset[1][i];
-        double z = b[2] + nodes.offset[2][i];
+    private static double distance(double[][] offset, double[] b, int i) {
+        double x = b[0] + offset[0][i];
+        double y = b[1] + offset[1][i];
+        double z = b[2] + offset[2][i];
         return Math.sqrt(x * x + y * y + z * z);
-    }
-
-    private static double step(Nodes nodes, int i, int j) {
-        double x = nodes.offset[0][i] - nodes.offset[0][j];
-        double y = nodes.offset[1][i] - nodes.offset[1][j];
-        double z = nodes.offset[2][i] - nodes.offset[2][j];
-        return Math.sqrt(x * x + y * y + z * z);
-    }
-
-    /** Largest difference between tangents against the largest tangent. */
-    private static double bend(double[][] t, int n) {
-        double largest = 0;
-        double difference = 0;
-        for (int i = 0; i < n; i++) {
-            largest = Math.max(largest, t[0][i] * t[0][i] + t[1][i] * t[1][i] + t[2][i] * t[2][i]);
-            for (int j = 0; j < i; j++) {
-                difference = Math.max(difference, square(t, i, j));
-            }
-        }
-        return largest > 0 ? Math.sqrt(difference / largest) : 0;
-    }
-
-    private static double square(double[][] t, int i, int j) {
-        double x = t[0][i] - t[0][j];
-        double y = t[1][i] - t[1][j];
-        double z = t[2][i] - t[2][j];
-        return x * x + y * y + z * z;
     }
 
     // ---- surfaces
 
-    /** Nine nodes of a box, index 3·i + j. */
-    private void surface(Sampler s, double[] from, double[] to, int depth) {
-        double[] at = {(from[0] + to[0]) / 2, (from[1] + to[1]) / 2};
-        Chart.Anchor middle = s.anchor(at);
-        double[] b = s.toAnchor(middle);
-        for (int i = 0; i < 9; i++) {
-            space.du[0][i] = (to[0] - from[0]) * (i / 3 - 1) / 2.0;
-            space.du[1][i] = (to[1] - from[1]) * (i % 3 - 1) / 2.0;
-        }
-        Nodes nodes = s.place(middle, space.du, 9);
-        double[] length = new double[2];
-        double[] shortest = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
-        int[] collapsed = {-1, -1};
-        for (int i = 0; i < 3; i++) {
-            double l1 = step(nodes, 3 * i, 3 * i + 1) + step(nodes, 3 * i + 1, 3 * i + 2);
-            double l0 = step(nodes, i, i + 3) + step(nodes, i + 3, i + 6);
-            length[0] = Math.max(length[0], l0);
-            length[1] = Math.max(length[1], l1);
-            if (l1 < shortest[1]) {
-                shortest[1] = l1;
-                collapsed[0] = i;
-            }
-            if (l0 < shortest[0]) {
-                shortest[0] = l0;
-                collapsed[1] = i;
-            }
-        }
+    /** Nine samples of a box, index 3·i + j. */
+    private void surface(Sampler s, Panel panel, int depth) {
+        double[] b = s.toAnchor(panel.anchor);
+        double[] length = panel.length;
         double size = Math.max(length[0], length[1]);
         if (!(size > 0)) {
             return;
@@ -644,35 +530,37 @@ final class Paver {
         double least = Double.POSITIVE_INFINITY;
         int nearest = 4;
         for (int i = 0; i < 9; i++) {
-            double d = distance(nodes, b, i);
+            double d = distance(panel.sample, b, i);
             if (d < least) {
                 least = d;
                 nearest = i;
             }
         }
         double lift = lift(s);
-        double[][] bends = bends(s);
+        double[][] bends = panel.bend;
         double bend0 = Math.max(bends[0][0], bends[1][0]);
         double bend1 = Math.max(bends[0][1], bends[1][1]);
         if (Math.hypot(least, lift) > FAR * size && Math.max(bend0, bend1) < 2.5) {
             double distance = Math.hypot(Math.max(0.5 * least, least - size / 4), lift);
-            pieces.add(Piece.whole(new Pieces.Box(s, from, to), order(distance, length[0], bend0, 6), order(distance, length[1], bend1, 6)));
+            pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length[0], bend0, 6), order(distance, length[1], bend1, 6)));
             return;
         }
-        boolean fan0 = shortest[1] < 1e-9 * size && collapsed[0] != 1;
-        boolean fan1 = shortest[0] < 1e-9 * size && collapsed[1] != 1;
+        double[] from = panel.from;
+        double[] to = panel.to;
+        boolean fan0 = panel.shortest[1] < 1e-9 * size && panel.collapsed[0] != 1;
+        boolean fan1 = panel.shortest[0] < 1e-9 * size && panel.collapsed[1] != 1;
         if (fan0 ^ fan1) {
             int ray = fan0 ? 0 : 1;
-            boolean low = collapsed[ray] == 0;
+            boolean low = panel.collapsed[ray] == 0;
             int tip = ray == 0 ? low ? 1 : 7 : low ? 3 : 5;
-            double tipDistance = Math.hypot(distance(nodes, b, tip), lift);
+            double tipDistance = Math.hypot(distance(panel.sample, b, tip), lift);
             boolean round = bends[ray][1 - ray] > 1.2 && length[1 - ray] > 0.5 * length[ray];
             int over = overTip(s, from, to, ray, low, tipDistance, length[ray], bends[ray][ray], depth);
             if (over == DONE) {
                 return;
             }
             if (depth < DEEPEST) {
-                split(s, from, to, over == ASIDE && round ? 1 - ray : ray, depth);
+                split(s, panel, over == ASIDE && round ? 1 - ray : ray, depth);
                 return;
             }
         }
@@ -680,34 +568,11 @@ final class Paver {
             double cost0 = bend0 * (bend0 > BENT ? 1 : 0) + 1e-3 * length[0] / size;
             double cost1 = bend1 * (bend1 > BENT ? 1 : 0) + 1e-3 * length[1] / size;
             boolean long0 = Math.hypot(least, lift) > 0.2 * size ? length[0] >= length[1] : cost0 >= cost1;
-            split(s, from, to, long0 ? 0 : 1, depth);
+            split(s, panel, long0 ? 0 : 1, depth);
             return;
         }
         double[] guess = {from[0] + (to[0] - from[0]) * (nearest / 3) / 2.0, from[1] + (to[1] - from[1]) * (nearest % 3) / 2.0};
-        nearSurface(s, from, to, guess, lift, depth);
-    }
-
-    /** bends[k][j]: how much the tangent of parameter k changes along parameter j, against its own length. */
-    private double[][] bends(Sampler s) {
-        double[][] bends = new double[2][2];
-        for (int k = 0; k < 2; k++) {
-            double[][] t = s.tangent(k);
-            double largest = 0;
-            for (int i = 0; i < 9; i++) {
-                double square = t[0][i] * t[0][i] + t[1][i] * t[1][i] + t[2][i] * t[2][i];
-                largest = Math.max(largest, square);
-            }
-            if (!(largest > 0)) {
-                continue;
-            }
-            for (int i = 0; i < 3; i++) {
-                double d0 = Math.max(square(t, i, i + 6), Math.max(square(t, i, i + 3), square(t, i + 3, i + 6)));
-                double d1 = Math.max(square(t, 3 * i, 3 * i + 2), Math.max(square(t, 3 * i, 3 * i + 1), square(t, 3 * i + 1, 3 * i + 2)));
-                bends[k][0] = Math.max(bends[k][0], Math.sqrt(d0 / largest));
-                bends[k][1] = Math.max(bends[k][1], Math.sqrt(d1 / largest));
-            }
-        }
-        return bends;
+        nearSurface(s, panel, guess, lift, depth);
     }
 
     private static final int DONE = 0;
@@ -817,14 +682,16 @@ final class Paver {
         return true;
     }
 
-    private void nearSurface(Sampler s, double[] from, double[] to, double[] guess, double lift, int depth) {
+    private void nearSurface(Sampler s, Panel panel, double[] guess, double lift, int depth) {
+        double[] from = panel.from;
+        double[] to = panel.to;
         double[] at = footOnSurface(s, from, to, guess);
         double[][] corners = {{from[0], from[1]}, {to[0], from[1]}, {to[0], to[1]}, {from[0], to[1]}};
         if (!polar(s, corners, at, lift)) {
             if (depth < DEEPEST) {
-                split(s, from, to, depth % 2, depth);
+                split(s, panel, depth % 2, depth);
             } else {
-                pieces.add(Piece.whole(new Pieces.Box(s, from, to), 8, 8));
+                pieces.add(Piece.whole(new Pieces.Box(s, panel), 8, 8));
             }
         }
     }
@@ -983,113 +850,55 @@ final class Paver {
 
     // ---- volumes
 
-    private static final int GRID = 4;
-
     /** Faces with the radial integral done first, when the place is inside or near and the density allows it. */
-    private boolean faces(Patch patch, Probe probe, Chart chart, Sampler whole) {
-        Chart.Anchor middle = whole.anchor(0.5, 0.5, 0.5);
-        double[] b = whole.toAnchor(middle);
-        int n = 0;
-        for (int i = 0; i < GRID; i++) {
-            for (int j = 0; j < GRID; j++) {
-                for (int k = 0; k < GRID; k++) {
-                    space.du[0][n] = i / (GRID - 1.0) - 0.5;
-                    space.du[1][n] = j / (GRID - 1.0) - 0.5;
-                    space.du[2][n++] = k / (GRID - 1.0) - 0.5;
-                }
-            }
-        }
-        Nodes nodes = whole.place(middle, space.du, n);
-        double size = radius(nodes, n);
-        if (!(least(nodes, b, n) < 2 * size)) {
+    private boolean faces(Facets facets, Sampler whole) {
+        Facets.Extent extent = facets.extent();
+        double[] b = whole.toAnchor(extent.middle());
+        if (!(extent.least(b) < 2 * extent.radius())) {
             return false;
         }
-        int steps = raySteps(patch.inSpace(), whole, nodes, b, n);
-        if (steps == 0) {
+        Sampler.Rays rays = rays(whole, extent, b);
+        if (rays == null) {
             return false;
         }
-        int hand = chart.handedness(space.nodes);
-        for (int depth = 0; depth < 3; depth++) {
-            if (isFullTurn(chart, depth)) {
+        for (Facet.Face facet : facets.faces()) {
+            if (facet.edges != null) {
+                flatFace(facet, whole, extent.radius());
                 continue;
             }
-            for (int side = 0; side < 2; side++) {
-                if (chart.closesAt(depth, side == 1)) {
-                    continue;
-                }
-                Sampler.Face face = new Sampler.Face(patch, probe, potential, space, chart, depth, side == 1, hand, steps);
-                if (!hasArea(face, size)) {
-                    continue;
-                }
-                if (patch.polynomial() != null && chart.isFlatFace(depth, side == 1)) {
-                    flatFace(patch, probe, chart, face, side == 1 ? hand : -hand, size);
-                } else {
-                    int first = pieces.size();
-                    pave(face, new double[2], new double[] {1, 1}, 0);
-                    rebase(face, first);
-                }
-            }
+            Sampler.Face face = new Sampler.Face(facet, whole.probe, potential, rays);
+            int first = pieces.size();
+            pave(face, facet.whole(), 0);
+            rebase(face, first);
         }
         return true;
     }
 
-    private void flatFace(Patch patch, Probe probe, Chart chart, Sampler.Face whole, int sign, double size) {
-        Chart.Anchor middle = whole.anchor(0.5, 0.5);
-        double[] b = whole.toAnchor(middle);
-        space.du[0][0] = 0;
-        space.du[1][0] = 0;
-        whole.place(middle, space.du, 1);
-        double[] normal = unit(cross(column(whole.tangent(0)), column(whole.tangent(1))));
+    private void flatFace(Facet.Face facet, Sampler whole, double size) {
+        double[] normal = facet.edges.normal;
         if (normal == null) {
             return;
         }
-        for (int a = 0; a < 3; a++) {
-            normal[a] *= sign;
-        }
-        double height = dot(normal, b);
-        if (Math.abs(height) > touching(whole, middle)) {
-            FlatFace face = FlatFace.ofVolume(patch.polynomial(), whole.target, normal, height, size);
-            edges(patch, probe, chart, face, whole.held, whole.axes[0], whole.axes[1], SQUARE, sign, size);
+        double height = dot(normal, whole.toAnchor(facet.edges.middle));
+        if (Math.abs(height) > touching(whole, facet.edges.middle)) {
+            paveEdges(whole.probe, facet.edges, FlatFace.ofVolume(whole.patch.polynomial(), whole.target, normal, height, size));
         }
     }
 
-    /** Both ends of a full turn are the same surface seen from its two sides. */
-    private static boolean isFullTurn(Chart chart, int depth) {
-        if (chart.system() == null || !chart.hasConstantLimits(depth)) {
-            return false;
+    private Sampler.Rays rays(Sampler s, Facets.Extent extent, double[] b) {
+        if (s.patch.polynomial() != null) {
+            return Sampler.Rays.closed(s.patch.polynomial(), s.target);
         }
-        String name = chart.coordinates().get(chart.coordinateOf(depth));
-        return name.equals("phi") && Math.abs(chart.upper(depth) - chart.lower(depth) - 2 * Math.PI) < 1e-14;
-    }
-
-    private boolean hasArea(Sampler s, double size) {
-        Chart.Anchor middle = s.anchor(0.5, 0.5);
-        for (int i = 0; i < 9; i++) {
-            space.du[0][i] = 0.31 * (i / 3 - 1);
-            space.du[1][i] = 0.31 * (i % 3 - 1);
-        }
-        s.place(middle, space.du, 9);
-        double[][] p = s.tangent(0);
-        double[][] q = s.tangent(1);
-        for (int i = 0; i < 9; i++) {
-            double x = p[1][i] * q[2][i] - p[2][i] * q[1][i];
-            double y = p[2][i] * q[0][i] - p[0][i] * q[2][i];
-            double z = p[0][i] * q[1][i] - p[1][i] * q[0][i];
-            double scale = Math.abs(p[0][i]) + Math.abs(p[1][i]) + Math.abs(p[2][i]);
-            scale *= Math.abs(q[0][i]) + Math.abs(q[1][i]) + Math.abs(q[2][i]);
-            double area = Math.sqrt(x * x + y * y + z * z);
-            if (area > 0 && area > 1e-14 * scale && scale > 1e-28 * size * size) {
-                return true;
-            }
-        }
-        return false;
+        int steps = raySteps(s.patch.inSpace(), s, extent.sample(), b);
+        return steps == 0 ? null : Sampler.Rays.sampled(s.patch.inSpace(), steps);
     }
 
     /**
      * How many Gauss nodes the density takes along rays from the place to the grid of the body; exact for polynomials, by
      * comparison of two orders otherwise; 0 when it is not smooth enough along them.
      */
-    private int raySteps(SpaceFunction rho, Sampler s, Nodes nodes, double[] b, int n) {
+    private int raySteps(SpaceFunction rho, Sampler s, double[][] offset, double[] b) {
+        int n = offset[0].length;
         if (rho.isConstant()) {
             return 1;
         }
@@ -1099,7 +908,7 @@ final class Paver {
         double[][] d = new double[3][n];
         for (int a = 0; a < 3; a++) {
             for (int i = 0; i < n; i++) {
-                d[a][i] = b[a] + nodes.offset[a][i];
+                d[a][i] = b[a] + offset[a][i];
             }
         }
         double[] coarse = rayIntegral(rho, s, d, n, 6);
@@ -1141,47 +950,20 @@ final class Paver {
         return sum;
     }
 
-    /** 27 nodes of a box, index 9·i + 3·j + k. */
-    private void volume(Sampler s, double[] from, double[] to, int depth) {
-        double[] at = new double[3];
-        for (int k = 0; k < 3; k++) {
-            at[k] = (from[k] + to[k]) / 2;
-        }
-        Chart.Anchor middle = s.anchor(at);
-        double[] b = s.toAnchor(middle);
-        int[] stride = {9, 3, 1};
-        for (int i = 0; i < 27; i++) {
-            for (int k = 0; k < 3; k++) {
-                space.du[k][i] = (to[k] - from[k]) * (i / stride[k] % 3 - 1) / 2.0;
-            }
-        }
-        Nodes nodes = s.place(middle, space.du, 27);
-        double[] length = new double[3];
-        double[] bend = new double[3];
+    /** 27 samples of a box, index 9·i + 3·j + k. */
+    private void volume(Sampler s, Panel panel, int depth) {
+        double[] b = s.toAnchor(panel.anchor);
+        double[] length = panel.length;
         double least = Double.POSITIVE_INFINITY;
         int nearest = 13;
         for (int i = 0; i < 27; i++) {
-            double d = distance(nodes, b, i);
+            double d = distance(panel.sample, b, i);
             if (d < least) {
                 least = d;
                 nearest = i;
             }
         }
-        for (int j = 0; j < 3; j++) {
-            for (int i = 0; i < 27; i++) {
-                if (i / stride[j] % 3 == 0) {
-                    length[j] = Math.max(length[j], step(nodes, i, i + stride[j]) + step(nodes, i + stride[j], i + 2 * stride[j]));
-                    for (int k = 0; k < 3; k++) {
-                        double[][] t = s.tangent(k);
-                        double here = Math.max(size2(t, i), Math.max(size2(t, i + stride[j]), size2(t, i + 2 * stride[j])));
-                        double change = Math.max(square(t, i, i + 2 * stride[j]), square(t, i, i + stride[j]));
-                        if (here > 0) {
-                            bend[j] = Math.max(bend[j], Math.sqrt(change / here));
-                        }
-                    }
-                }
-            }
-        }
+        double[] bend = {panel.bend[0][0], panel.bend[1][1], panel.bend[2][2]};
         double size = Math.max(length[0], Math.max(length[1], length[2]));
         if (!(size > 0)) {
             return;
@@ -1192,7 +974,7 @@ final class Paver {
             for (int k = 0; k < 3; k++) {
                 orders[k] = Math.min(20, order(distance, length[k], bend[k], 6));
             }
-            pieces.add(Piece.whole(new Pieces.Box(s, from, to), orders));
+            pieces.add(Piece.whole(new Pieces.Box(s, panel), orders));
             return;
         }
         int worst = 0;
@@ -1202,10 +984,13 @@ final class Paver {
             }
         }
         if (bend[worst] > BENT && depth < 40) {
-            split(s, from, to, worst, depth);
+            split(s, panel, worst, depth);
             return;
         }
+        double[] from = panel.from;
+        double[] to = panel.to;
         double[] guess = new double[3];
+        int[] stride = {9, 3, 1};
         for (int k = 0; k < 3; k++) {
             guess[k] = from[k] + (to[k] - from[k]) * (nearest / stride[k] % 3) / 2.0;
         }
@@ -1262,8 +1047,8 @@ final class Paver {
 
     /** Way per parameter towards the further end: what counts at an end where a coordinate starts as a square. */
     private double meanSpeed(Sampler s, Chart.Anchor foot, double[] from, double[] to, int k) {
-        double down = from[k] - foot.u()[s.axes[k]];
-        double up = to[k] - foot.u()[s.axes[k]];
+        double down = from[k] - s.facet.parameter(foot, k);
+        double up = to[k] - s.facet.parameter(foot, k);
         double step = up > -down ? up : down;
         for (double[] du : space.du) {
             du[0] = 0;

@@ -2,6 +2,7 @@ package fieldwright.field;
 
 import fieldwright.geometry.Chart;
 import fieldwright.integral.Integrand;
+import fieldwright.integral.TensorRule;
 
 /**
  * The pieces a patch is cut into. Each maps its own unit box into the patch's, so that what is left to integrate is smooth:
@@ -18,12 +19,17 @@ final class Pieces {
         Chart.Anchor anchor;
         double[] b;
         private double[] shift;
-        final double[] jacobian = new double[Workspace.BLOCK];
+        final double[] jacobian;
+
+        Base(Sampler sampler, Chart.Anchor anchor) {
+            this.sampler = sampler;
+            this.anchor = anchor;
+            b = sampler.toAnchor(anchor);
+            jacobian = sampler.space.jacobian;
+        }
 
         Base(Sampler sampler, double[] anchorAt) {
-            this.sampler = sampler;
-            anchor = sampler.anchor(anchorAt);
-            b = sampler.toAnchor(anchor);
+            this(sampler, sampler.anchor(anchorAt));
         }
 
         @Override
@@ -38,7 +44,7 @@ final class Pieces {
 
         @Override
         public boolean isSmooth() {
-            return sampler.isSmooth();
+            return sampler.facet.isSmooth();
         }
 
         @Override
@@ -53,8 +59,10 @@ final class Pieces {
                     }
                 }
             }
-            sampler.place(anchor, sampler.space.du, n);
-            sampler.values(anchor, b, jacobian, n, out, noise);
+            NodeSet set = sampler.space.set;
+            sampler.facet.place(anchor, sampler.space.du, n);
+            sampler.facet.carry(anchor, sampler.space.jacobian, n, set);
+            sampler.act(set, anchor, b, n, out, noise);
             finish(u, n, out, noise);
         }
 
@@ -67,7 +75,7 @@ final class Pieces {
             double[] moved = new double[n];
             boolean any = false;
             for (int k = 0; k < n; k++) {
-                moved[k] = sampler.parameter(anchor, k) - sampler.parameter(base, k);
+                moved[k] = sampler.facet.parameter(anchor, k) - sampler.facet.parameter(base, k);
                 any |= moved[k] != 0;
             }
             anchor = base;
@@ -89,13 +97,26 @@ final class Pieces {
 
     /** A box of parameters as it is. */
     static final class Box extends Base {
+        private final Panel panel;
+        private final double[] toOwn;
         private final double[] from;
         private final double[] width;
         private final double[] at;
         private final double volume;
 
+        /** A panel, with the nodes it keeps. */
+        Box(Sampler sampler, Panel panel) {
+            this(sampler, panel, panel.anchor, panel.from, panel.to);
+        }
+
         Box(Sampler sampler, double[] from, double[] to) {
-            super(sampler, middle(from, to));
+            this(sampler, null, sampler.anchor(middle(from, to)), from, to);
+        }
+
+        private Box(Sampler sampler, Panel panel, Chart.Anchor anchor, double[] from, double[] to) {
+            super(sampler, anchor);
+            this.panel = panel;
+            toOwn = b;
             this.from = from;
             at = middle(from, to);
             width = new double[from.length];
@@ -113,6 +134,15 @@ final class Pieces {
                 m[k] = (from[k] + to[k]) / 2;
             }
             return m;
+        }
+
+        @Override
+        public boolean evaluate(TensorRule rule, int block, int n, double[][] out, double[] noise) {
+            if (panel == null) {
+                return false;
+            }
+            sampler.act(panel.nodes(rule)[block], panel.anchor, toOwn, n, out, noise);
+            return true;
         }
 
         @Override

@@ -1,139 +1,93 @@
 package fieldwright.field;
 
+import fieldwright.formula.Polynomial;
 import fieldwright.geometry.Chart;
 import fieldwright.geometry.Nodes;
-import fieldwright.quantity.AuthorException;
 
 /**
- * What a patch, or one face of a volume, adds to the answer at one probe, as a function on its unit box: geometry for the
- * paver, values for the integrands. Distances are those that count for the kernel.
+ * What a facet adds to the answer at one probe: geometry for the paver, values for the integrands. Distances are those that count for
+ * the kernel.
  */
 abstract class Sampler {
     static final double EPS = 1.2e-16;
 
+    final Facet facet;
     final Patch patch;
     final Probe probe;
     final boolean potential;
     final Workspace space;
     final Chart chart;
-    /** Chart depth of each parameter; other depths stay where {@link #held} says. */
-    final int[] axes;
-    final double[] held;
+    /** The place in the patch's frame, and as far as it counts for the kernel. */
     final double[] target;
     final double[] seen;
-    final double[] map;
-    final boolean plainMap;
-    private final double roughness;
+    private final double[] map;
+    private final boolean plainMap;
+    private final boolean rough;
 
-    Sampler(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart, int[] axes, double[] held) {
-        this.patch = patch;
+    Sampler(Facet facet, Probe probe, boolean potential) {
+        this.facet = facet;
         this.probe = probe;
         this.potential = potential;
-        this.space = space;
-        this.chart = chart;
-        this.axes = axes;
-        this.held = held;
+        patch = facet.patch;
+        space = facet.space;
+        chart = facet.chart;
         target = patch.frame().toOwn(probe.place());
-        seen = target.clone();
         Kernel kernel = patch.kernel();
-        for (int a = 0; a < 3; a++) {
-            boolean across = kernel.kind == Kernel.Kind.PLANE && a != kernel.axis;
-            if (across || a == kernel.alongAxis()) {
-                seen[a] = 0;
+        if (kernel.isEndless()) {
+            seen = target.clone();
+            for (int a = 0; a < 3; a++) {
+                boolean across = kernel.kind == Kernel.Kind.PLANE && a != kernel.axis;
+                if (across || a == kernel.alongAxis()) {
+                    seen[a] = 0;
+                }
             }
+        } else {
+            seen = target;
         }
-        map = new double[9];
-        double[] turn = patch.frame().turn();
+        plainMap = probe.isPlain() && probe.c() == 1 && patch.frame().isUnturned();
+        map = plainMap ? null : map(probe.a(), patch.frame().turn());
+        rough = !chart.hasExactOffsets();
+    }
+
+    private static double[] map(double[] a, double[] turn) {
+        double[] map = new double[9];
         for (int i = 0; i < 3; i++) {
             for (int j = 0; j < 3; j++) {
                 for (int k = 0; k < 3; k++) {
-                    map[3 * i + j] += probe.a()[3 * i + k] * turn[3 * k + j];
+                    map[3 * i + j] += a[3 * i + k] * turn[3 * k + j];
                 }
             }
         }
-        boolean unit = true;
-        for (int i = 0; i < 9; i++) {
-            unit &= map[i] == (i % 4 == 0 ? 1 : 0);
-        }
-        plainMap = unit && probe.b() == null;
-        roughness = chart.hasExactOffsets() ? 0 : EPS;
+        return map;
     }
 
     int dimension() {
-        return axes.length;
+        return facet.dimension();
     }
 
     Chart.Anchor anchor(double... v) {
-        double[] u = held.clone();
-        for (int k = 0; k < axes.length; k++) {
-            u[axes[k]] = v[k];
-        }
-        return chart.anchor(u);
+        return facet.anchor(v);
     }
 
     /** Source minus target of an anchor. */
     double[] toAnchor(Chart.Anchor anchor) {
-        double[] b = new double[3];
-        for (int a = 0; a < 3; a++) {
-            b[a] = anchor.position()[a] - seen[a];
-        }
-        return b;
+        double[] p = anchor.position();
+        return new double[] {p[0] - seen[0], p[1] - seen[1], p[2] - seen[2]};
     }
 
-    /** Positions, tangents and measure at anchor + du. */
     Nodes place(Chart.Anchor anchor, double[][] du, int n) {
-        double[][] full = space.full;
-        for (int k = 0; k < 3; k++) {
-            full[k] = Workspace.ZEROS;
-        }
-        for (int k = 0; k < axes.length; k++) {
-            full[axes[k]] = du[k];
-        }
-        chart.evaluate(anchor, full, n, space.nodes);
-        return space.nodes;
+        return facet.place(anchor, du, n);
     }
 
     double[][] tangent(int k) {
-        return space.nodes.tangent[axes[k]];
+        return facet.tangent(k);
     }
 
-    /** A line no longer than this, m, is a point: an edge at which a face has shrunk to nothing but rounding. */
-    double leastLength() {
-        return 0;
-    }
+    /** Contributions of nodes at b + offset, b source minus target of their anchor. */
+    abstract void act(NodeSet set, Chart.Anchor anchor, double[] b, int n, double[][] out, double[] noise);
 
-    /** Parameter k of an anchor. */
-    double parameter(Chart.Anchor anchor, int k) {
-        return anchor.u()[axes[k]];
-    }
-
-    /**
-     * Contributions of nodes placed last: {@code jacobian} is du per unit of the integration variables; {@code b} source minus
-     * target of the anchor.
-     */
-    abstract void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise);
-
-    /** Whether the density is known to be smooth in the chart's parameters. */
-    boolean isSmooth() {
-        return patch.weight().isSmooth();
-    }
-
-    private double reach = -1;
-
-    /** Distance from the frame's origin to the furthest corner: the size its coordinates are rounded at. */
     double reach() {
-        if (reach < 0) {
-            int n = axes.length;
-            for (int i = 0; i < 1 << n; i++) {
-                double[] v = new double[n];
-                for (int k = 0; k < n; k++) {
-                    v[k] = chart.isEndless(axes[k]) ? 0.5 : i >> k & 1;
-                }
-                double[] p = anchor(v).position();
-                reach = Math.max(reach, Math.sqrt(p[0] * p[0] + p[1] * p[1] + p[2] * p[2]));
-            }
-        }
-        return reach;
+        return facet.reach();
     }
 
     /** Density at an anchor. */
@@ -148,14 +102,14 @@ abstract class Sampler {
 
     /** Direction in the patch's frame to the answer's frame. */
     double[] mapped(double x, double y, double z) {
-        return new double[] {
+        return plainMap ? new double[] {x, y, z} : new double[] {
             map[0] * x + map[1] * y + map[2] * z, map[3] * x + map[4] * y + map[5] * z, map[6] * x + map[7] * y + map[8] * z};
     }
 
-    final void displacements(double[] b, int n) {
+    final void displacements(NodeSet set, double[] b, int n) {
         for (int a = 0; a < 3; a++) {
             double[] d = space.d[a];
-            double[] o = space.nodes.offset[a];
+            double[] o = set.offset()[a];
             double shift = b[a];
             for (int i = 0; i < n; i++) {
                 d[i] = shift + o[i];
@@ -196,16 +150,9 @@ abstract class Sampler {
         }
     }
 
-    /** Rounding of positions that were taken as differences of absolute ones. */
-    final void roughen(Chart.Anchor anchor, int n, double[][] out, double[] noise) {
-        if (roughness != 0) {
-            java.util.Arrays.fill(noise, 0, n, 0);
-            addRoughness(anchor, n, out, noise);
-        }
-    }
-
-    final void addRoughness(Chart.Anchor anchor, int n, double[][] out, double[] noise) {
-        if (roughness == 0) {
+    /** Adds the rounding of positions that were taken as differences of absolute ones. */
+    final void roughen(NodeSet set, Chart.Anchor anchor, int n, double[][] out, double[] noise) {
+        if (!rough) {
             return;
         }
         double[] p = anchor.position();
@@ -220,43 +167,20 @@ abstract class Sampler {
             for (int c = 0; c < components; c++) {
                 size += Math.abs(out[c][i]);
             }
-            noise[i] += size * roughness * ((base + space.nodes.rounding[i]) / distance + space.nodes.relative[i] + 1);
+            noise[i] += size * EPS * ((base + set.rounding()[i]) / distance + set.relative()[i] + 1);
         }
     }
 
     /** Charge as it stands: density times measure times kernel. */
     static final class Coulomb extends Sampler {
-        Coulomb(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart) {
-            super(patch, probe, potential, space, chart, all(chart.dimension()), new double[chart.dimension()]);
-        }
-
-        private static int[] all(int n) {
-            int[] axes = new int[n];
-            for (int k = 0; k < n; k++) {
-                axes[k] = k;
-            }
-            return axes;
+        Coulomb(Facet.Body facet, Probe probe, boolean potential) {
+            super(facet, probe, potential);
         }
 
         @Override
-        void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise) {
-            double[] w = space.weight;
-            double[] measure = space.nodes.measure;
-            if (patch.weight().isConstant()) {
-                double density = patch.weight().constant();
-                for (int i = 0; i < n; i++) {
-                    w[i] = density * measure[i] * jacobian[i];
-                }
-            } else {
-                patch.weight().evaluate(space.nodes, anchor.position(), n, w);
-                for (int i = 0; i < n; i++) {
-                    if (Double.isNaN(w[i])) {
-                        throw notANumber(patch, space.nodes, i);
-                    }
-                    w[i] *= measure[i] * jacobian[i];
-                }
-            }
-            displacements(b, n);
+        void act(NodeSet set, Chart.Anchor anchor, double[] b, int n, double[][] out, double[] noise) {
+            double[] w = set.carried()[0];
+            displacements(set, b, n);
             if (potential) {
                 patch.kernel().potential(space.d, w, target, n, out[0]);
             } else {
@@ -265,19 +189,9 @@ abstract class Sampler {
                     patch.kernel().potential(space.d, w, target, n, space.v);
                 }
             }
-            roughen(anchor, n, out, noise);
+            roughen(set, anchor, n, out, noise);
             deliver(space.v, n, out);
         }
-    }
-
-    static AuthorException notANumber(Patch patch, Nodes nodes, int i) {
-        StringBuilder where = new StringBuilder();
-        for (int m = 0; m < patch.chart().coordinates().size(); m++) {
-            where.append(m == 0 ? "" : ", ").append(patch.chart().coordinates().get(m)).append(" = ")
-                .append(String.format(java.util.Locale.ROOT, "%.6g", nodes.c[m][i]));
-        }
-        return new AuthorException("density " + patch.density().text() + " is not a number at " + where
-            + " (SI). Check roots, logarithms and divisions in it against the region's limits.");
     }
 
     /**
@@ -286,82 +200,103 @@ abstract class Sampler {
      * where rays leave it; what they add there cancels between faces.
      */
     static final class Face extends Sampler {
-        private final int sign;
-        private final int raySteps;
+        private final Rays rays;
 
-        Face(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart, int depth, boolean upper, int handedness,
-            int raySteps) {
-            super(patch, probe, potential, space, chart, others(depth), held(depth, upper));
-            this.raySteps = raySteps;
-            sign = (upper ? 1 : -1) * handedness;
+        Face(Facet.Face facet, Probe probe, boolean potential, Rays rays) {
+            super(facet, probe, potential);
+            this.rays = rays;
         }
 
         @Override
-        boolean isSmooth() {
-            return true;   // SpaceFunction admits no other
-        }
-
-        /** The two other depths, in cyclic order, so that their cross product points out of the upper face. */
-        private static int[] others(int depth) {
-            return new int[] {(depth + 1) % 3, (depth + 2) % 3};
-        }
-
-        private static double[] held(int depth, boolean upper) {
-            double[] u = new double[3];
-            u[depth] = upper ? 1 : 0;
-            return u;
-        }
-
-        @Override
-        void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise) {
-            displacements(b, n);
+        void act(NodeSet set, Chart.Anchor anchor, double[] b, int n, double[][] out, double[] noise) {
+            displacements(set, b, n);
             double[] dx = space.d[0];
             double[] dy = space.d[1];
             double[] dz = space.d[2];
-            double[][] s = tangent(0);
-            double[][] t = tangent(1);
-            double[] w = space.weight;
-            for (int i = 0; i < n; i++) {
-                double nx = s[1][i] * t[2][i] - s[2][i] * t[1][i];
-                double ny = s[2][i] * t[0][i] - s[0][i] * t[2][i];
-                double nz = s[0][i] * t[1][i] - s[1][i] * t[0][i];
-                w[i] = sign * jacobian[i] * (nx * dx[i] + ny * dy[i] + nz * dz[i]);
-            }
-            boolean both = !potential && probe.b() != null;
+            double[] nx = set.carried()[0];
+            double[] ny = set.carried()[1];
+            double[] nz = set.carried()[2];
+            double[] sum = space.sum;
             if (!potential) {
-                rays(n, false);
-                double[] sum = space.sum;
+                rays.along(seen, n, false, space);
                 for (int i = 0; i < n; i++) {
+                    double w = nx[i] * dx[i] + ny[i] * dy[i] + nz[i] * dz[i];
                     double square = dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i];
-                    double f = square > 0 ? -w[i] * sum[i] / (square * Math.sqrt(square)) : 0;
+                    double f = square > 0 ? -w * sum[i] / (square * Math.sqrt(square)) : 0;
                     out[0][i] = f * dx[i];
                     out[1][i] = f * dy[i];
                     out[2][i] = f * dz[i];
                 }
             }
-            if (potential || both) {
-                rays(n, true);
+            if (potential || probe.b() != null) {
+                rays.along(seen, n, true, space);
                 double[] v = potential ? out[0] : space.v;
                 for (int i = 0; i < n; i++) {
+                    double w = nx[i] * dx[i] + ny[i] * dy[i] + nz[i] * dz[i];
                     double square = dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i];
-                    v[i] = square > 0 ? w[i] * space.sum[i] / Math.sqrt(square) : 0;
+                    v[i] = square > 0 ? w * sum[i] / Math.sqrt(square) : 0;
                 }
             }
-            roughen(anchor, n, out, noise);
+            roughen(set, anchor, n, out, noise);
             deliver(space.v, n, out);
         }
+    }
 
-        /** ∫₀¹ ρ dt, or ∫₀¹ ρ t dt, along each ray. */
-        private void rays(int n, boolean timesT) {
-            SpaceFunction rho = patch.inSpace();
+    /** ∫₀¹ ρ(place + t d) dt and ∫₀¹ ρ t dt for many d from one place: closed for polynomials, by Gauss nodes along each ray otherwise. */
+    static final class Rays {
+        private final SpaceFunction density;
+        private final int steps;
+        private final double[] forField;
+        private final double[] forPotential;
+        private final int degree;
+
+        private Rays(SpaceFunction density, int steps, double[] forField, double[] forPotential, int degree) {
+            this.density = density;
+            this.steps = steps;
+            this.forField = forField;
+            this.forPotential = forPotential;
+            this.degree = degree;
+        }
+
+        static Rays sampled(SpaceFunction density, int steps) {
+            return new Rays(density, steps, null, null, 0);
+        }
+
+        static Rays closed(Polynomial density, double[] place) {
+            int degree = density.degree();
+            double[] c = new double[Polynomial.count(degree)];
+            density.about(place, c);
+            return new Rays(null, 0, nested(c, degree, 1), nested(c, degree, 2), degree);
+        }
+
+        /** Coefficients over their degree plus {@code more}, in the order in which Horner's rule over z, y, x takes them. */
+        private static double[] nested(double[] c, int degree, int more) {
+            double[] out = new double[c.length];
+            int at = 0;
+            for (int k = degree; k >= 0; k--) {
+                for (int j = degree - k; j >= 0; j--) {
+                    for (int i = degree - k - j; i >= 0; i--) {
+                        out[at++] = c[Polynomial.index(i, j, k)] / (i + j + k + more);
+                    }
+                }
+            }
+            return out;
+        }
+
+        /** Fills space.sum for the displacements in space.d. */
+        void along(double[] seen, int n, boolean timesT, Workspace space) {
             double[] sum = space.sum;
-            if (rho.isConstant()) {
-                java.util.Arrays.fill(sum, 0, n, timesT ? rho.constant() / 2 : rho.constant());
+            if (density == null) {
+                horner(timesT ? forPotential : forField, space.d, n, sum);
+                return;
+            }
+            if (density.isConstant()) {
+                java.util.Arrays.fill(sum, 0, n, timesT ? density.constant() / 2 : density.constant());
                 return;
             }
             java.util.Arrays.fill(sum, 0, n, 0);
-            var rule = fieldwright.integral.GaussLegendre.of(raySteps);
-            for (int j = 0; j < raySteps; j++) {
+            var rule = fieldwright.integral.GaussLegendre.of(steps);
+            for (int j = 0; j < steps; j++) {
                 double step = rule.node(j);
                 for (int a = 0; a < 3; a++) {
                     double[] r = space.ray[a];
@@ -370,152 +305,100 @@ abstract class Sampler {
                         r[i] = step * d[i];
                     }
                 }
-                rho.evaluate(seen, space.ray, n, space.density);
+                density.evaluate(seen, space.ray, n, space.density);
                 double weight = rule.weight(j) * (timesT ? step : 1);
                 for (int i = 0; i < n; i++) {
                     sum[i] += weight * space.density[i];
                 }
             }
         }
+
+        private void horner(double[] c, double[][] d, int n, double[] out) {
+            if (degree == 0) {
+                java.util.Arrays.fill(out, 0, n, c[0]);
+                return;
+            }
+            for (int m = 0; m < n; m++) {
+                double x = d[0][m];
+                double y = d[1][m];
+                double z = d[2][m];
+                double s = 0;
+                int at = 0;
+                for (int k = degree; k >= 0; k--) {
+                    double t = 0;
+                    for (int j = degree - k; j >= 0; j--) {
+                        double r = 0;
+                        for (int i = degree - k - j; i >= 0; i--) {
+                            r = r * x + c[at++];
+                        }
+                        t = t * y + r;
+                    }
+                    s = s * z + t;
+                }
+                out[m] = s;
+            }
+        }
     }
 
-    /** One edge of a flat face, run through from one corner of its parameters to another; the face to its left, seen against the normal. */
+    /** One edge of a flat face, with the integrals along rays in its plane done first. */
     static final class Edge extends Sampler {
         private final FlatFace face;
-        private final int sign;
-        private final double[] corner;
-        private final double[] along;
-        private final double leastLength;
 
-        /** {@code corner} and {@code along} in all parameters of the chart; {@code sign} −1 when they run clockwise about the normal. */
-        Edge(Patch patch, Probe probe, boolean potential, Workspace space, Chart chart, FlatFace face, double[] corner, double[] along, int sign,
-            double leastLength) {
-            super(patch, probe, potential, space, chart, new int[] {0}, corner);
-            this.leastLength = leastLength;
+        Edge(Facet.Edge facet, Probe probe, boolean potential, FlatFace face) {
+            super(facet, probe, potential);
             this.face = face;
-            this.sign = sign;
-            this.corner = corner;
-            this.along = along;
         }
 
         @Override
-        boolean isSmooth() {
-            return true;
-        }
-
-        @Override
-        Chart.Anchor anchor(double... v) {
-            double[] u = corner.clone();
-            for (int k = 0; k < u.length; k++) {
-                u[k] += along[k] == 0 ? 0 : along[k] * v[0];
-            }
-            return chart.anchor(u);
-        }
-
-        @Override
-        double leastLength() {
-            return leastLength;
-        }
-
-        @Override
-        double parameter(Chart.Anchor anchor, int k) {
-            for (int j = 0; j < along.length; j++) {
-                if (along[j] != 0) {
-                    return (anchor.u()[j] - corner[j]) / along[j];
-                }
-            }
-            return 0;
-        }
-
-        @Override
-        Nodes place(Chart.Anchor anchor, double[][] du, int n) {
-            double[][] full = space.full;
-            double[] given = du[0];
-            for (int k = 0; k < 3; k++) {
-                full[k] = Workspace.ZEROS;
-                if (k < along.length && along[k] != 0) {
-                    full[k] = space.edge[k];
-                    for (int i = 0; i < n; i++) {
-                        full[k][i] = along[k] * given[i];
-                    }
-                }
-            }
-            chart.evaluate(anchor, full, n, space.nodes);
-            double[][] t = space.along;
-            for (int a = 0; a < 3; a++) {
-                java.util.Arrays.fill(t[a], 0, n, 0);
-                for (int k = 0; k < along.length; k++) {
-                    double[] own = space.nodes.tangent[k][a];
-                    double f = along[k];
-                    for (int i = 0; f != 0 && i < n; i++) {
-                        t[a][i] += f * own[i];
-                    }
-                }
-            }
-            return space.nodes;
-        }
-
-        @Override
-        double[][] tangent(int k) {
-            return space.along;
-        }
-
-        @Override
-        void values(Chart.Anchor anchor, double[] b, double[] jacobian, int n, double[][] out, double[] noise) {
-            displacements(b, n);
+        void act(NodeSet set, Chart.Anchor anchor, double[] b, int n, double[][] out, double[] noise) {
+            displacements(set, b, n);
             double[][] d = space.d;
-            double[][] t = space.along;
+            double[][] t = set.carried();
             double[] e1 = face.e1;
             double[] e2 = face.e2;
-            double[] u = space.ray[0];
-            double[] v = space.ray[1];
-            double[] f = space.weight;
-            double[] r = space.sum;
+            double height = Math.abs(face.height);
+            boolean both = potential || probe.b() != null;
             for (int i = 0; i < n; i++) {
-                u[i] = d[0][i] * e1[0] + d[1][i] * e1[1] + d[2][i] * e1[2];
-                v[i] = d[0][i] * e2[0] + d[1][i] * e2[1] + d[2][i] * e2[2];
+                double u = d[0][i] * e1[0] + d[1][i] * e1[1] + d[2][i] * e1[2];
+                double v = d[0][i] * e2[0] + d[1][i] * e2[1] + d[2][i] * e2[2];
                 double du = t[0][i] * e1[0] + t[1][i] * e1[1] + t[2][i] * e1[2];
                 double dv = t[0][i] * e2[0] + t[1][i] * e2[1] + t[2][i] * e2[2];
-                double square = u[i] * u[i] + v[i] * v[i];
-                r[i] = Math.sqrt(square);
-                f[i] = square > 0 ? sign * jacobian[i] * (u[i] * dv - v[i] * du) / (square * r[i]) : 0;
-            }
-            double height = Math.abs(face.height);
-            for (int i = 0; i < n; i++) {
-                noise[i] = 0;
-                face.radial(r[i], potential ? null : space.radialA, space.radialB);
-                if (potential || probe.b() != null) {
+                double square = u * u + v * v;
+                double r = Math.sqrt(square);
+                double f = square > 0 ? (u * dv - v * du) / (square * r) : 0;
+                face.radial(r, potential ? null : space.radialA, space.radialB);
+                if (both) {
                     double sum = 0;
                     double size = 0;
                     for (int m = 0; m <= face.degree; m++) {
-                        double term = homogeneous(face.forPotential, m, u[i], v[i]) * space.radialB[m + 1];
+                        double term = homogeneous(face.forPotential, m, u, v) * space.radialB[m + 1];
                         sum += term;
                         size += Math.abs(term);
                     }
-                    double factor = f[i] * r[i] * r[i];
+                    double factor = f * square;
                     (potential ? out[0] : space.v)[i] = factor * sum;
-                    noise[i] = 6 * EPS * Math.abs(factor) * size;
+                    noise[i] += 6 * EPS * Math.abs(factor) * size;
                 }
                 if (!potential) {
                     double plane = 0;
                     double across = 0;
                     double size = 0;
                     for (int m = 0; m <= face.degree; m++) {
-                        double q = homogeneous(face.forField, m, u[i], v[i]);
+                        double q = homogeneous(face.forField, m, u, v);
                         plane += q * space.radialA[m + 2];
                         across += q * space.radialA[m + 1];
-                        size += Math.abs(q) * (space.radialA[m + 2] * r[i] + space.radialA[m + 1] * height);
+                        size += Math.abs(q) * (Math.abs(space.radialA[m + 2]) * r + space.radialA[m + 1] * height);
                     }
-                    double fu = -f[i] * plane * u[i];
-                    double fv = -f[i] * plane * v[i];
-                    double fn = -f[i] * across * face.height;
+                    double fu = -f * plane * u;
+                    double fv = -f * plane * v;
+                    double fn = -f * across * face.height;
                     for (int a = 0; a < 3; a++) {
                         out[a][i] = fu * e1[a] + fv * e2[a] + fn * face.normal[a];
                     }
-                    noise[i] += 6 * EPS * Math.abs(f[i]) * size;
+                    noise[i] += 6 * EPS * Math.abs(f) * size;
                 }
             }
-            addRoughness(anchor, n, out, noise);
+            roughen(set, anchor, n, out, noise);
             deliver(space.v, n, out);
         }
 

@@ -11,7 +11,8 @@ final class Workspace {
     final double[][] du = new double[3][BLOCK];
     final double[][] full = new double[3][];
     final double[][] d = new double[3][BLOCK];
-    final double[] weight = new double[BLOCK];
+    final double[] jacobian = new double[BLOCK];
+    final NodeSet set = NodeSet.scratch(nodes);
     final double[] density = new double[BLOCK];
     final double[] v = new double[BLOCK];
     final double[][] ray = new double[3][BLOCK];

@@ -279,6 +279,12 @@ public final class Chart {
         return false;
     }
 
+    /** Both ends of a full turn are the same line or surface, seen from its two sides. */
+    public boolean isFullTurn(int depth) {
+        return system != null && hasConstantLimits(depth) && coordinates().get(free[depth]).equals("phi")
+            && Math.abs(upper(depth) - lower(depth) - 2 * Math.PI) < 1e-14;
+    }
+
     /** Whether one end of a volume's coordinate is a plane. */
     public boolean isFlatFace(int depth, boolean upper) {
         return dimension == 3 && system != null && (upper ? to[depth] : from[depth]).isConstant() && isPlane(free[depth]);

@@ -11,6 +11,16 @@ public record Frame(double[] turn, double[] move) {
         return this == OWN;
     }
 
+    /** Whether it moves without turning. */
+    public boolean isUnturned() {
+        for (int i = 0; i < 9; i++) {
+            if (turn[i] != (i % 4 == 0 ? 1 : 0)) {
+                return false;
+            }
+        }
+        return true;
+    }
+
     public static Frame moved(double x, double y, double z) {
         return new Frame(OWN.turn, new double[] {x, y, z});
     }

@@ -278,8 +278,10 @@ public final class Cubature {
         TensorRule rule = TensorRule.of(piece.orders);
         int dimension = piece.orders.length;
         double volume = 1;
+        boolean whole = true;
         for (int d = 0; d < dimension; d++) {
             volume *= piece.to[d] - piece.from[d];
+            whole &= piece.from[d] == 0 && piece.to[d] == 1;
             for (int c = 0; c < components; c++) {
                 java.util.Arrays.fill(marginal[d][c], 0, piece.orders[d], 0);
             }
@@ -293,17 +295,19 @@ public final class Cubature {
         double carried = 0;
         for (int first = 0; first < rule.size; first += Integrand.BLOCK) {
             int n = Math.min(Integrand.BLOCK, rule.size - first);
-            for (int d = 0; d < dimension; d++) {
-                double from = piece.from[d];
-                double width = piece.to[d] - from;
-                double[] node = rule.node[d];
-                double[] target = u[d];
-                for (int i = 0; i < n; i++) {
-                    target[i] = from + width * node[first + i];
-                }
-            }
             java.util.Arrays.fill(noise, 0, n, 0);
-            piece.integrand.evaluate(u, n, out, noise);
+            if (!whole || !piece.integrand.evaluate(rule, first / Integrand.BLOCK, n, out, noise)) {
+                for (int d = 0; d < dimension; d++) {
+                    double from = piece.from[d];
+                    double width = piece.to[d] - from;
+                    double[] node = rule.node[d];
+                    double[] target = u[d];
+                    for (int i = 0; i < n; i++) {
+                        target[i] = from + width * node[first + i];
+                    }
+                }
+                piece.integrand.evaluate(u, n, out, noise);
+            }
             for (int i = 0; i < n; i++) {
                 double part = rule.weight[first + i] * noise[i];
                 carried += part * part;

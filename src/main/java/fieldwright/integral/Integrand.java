@@ -16,6 +16,14 @@ public interface Integrand {
      */
     void evaluate(double[][] u, int n, double[][] out, double[] noise);
 
+    /**
+     * As {@link #evaluate(double[][], int, double[][], double[])} at the nodes of a rule over the whole unit box, block by block, for
+     * integrands that keep what they need of them; false when they keep nothing and nothing was done.
+     */
+    default boolean evaluate(TensorRule rule, int block, int n, double[][] out, double[] noise) {
+        return false;
+    }
+
     /** Gauss order below which the integrand must not be taken in a direction of its unit box. */
     default int leastOrder(int direction) {
         return 0;

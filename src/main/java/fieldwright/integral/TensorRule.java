@@ -4,7 +4,7 @@ import java.util.Map;
 import java.util.concurrent.ConcurrentHashMap;
 
 /** Product of Gauss rules on a unit box of 1 to 3 dimensions, laid out flat; immutable and shared. */
-final class TensorRule {
+public final class TensorRule {
     private static final Map<Integer, TensorRule> CACHE = new ConcurrentHashMap<>();
 
     final int size;
@@ -38,6 +38,15 @@ final class TensorRule {
             }
             weight[i] = w;
         }
+    }
+
+    public int size() {
+        return size;
+    }
+
+    /** Of each flat node, its place in [0, 1] along one dimension. */
+    public double[] nodes(int dimension) {
+        return node[dimension];
     }
 
     static TensorRule of(int... orders) {
