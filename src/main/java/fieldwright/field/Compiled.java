@@ -285,6 +285,17 @@ final class Compiled {
         }
     }
 
+    private Ball[] balls;
+
+    /** A ball about patch i. */
+    Ball ball(int i, Workspace space) {
+        balls = balls == null ? new Ball[patches.size()] : balls;
+        if (balls[i] == null) {
+            balls[i] = Ball.of(patches.get(i), space);
+        }
+        return balls[i];
+    }
+
     boolean hasEndlessKernel() {
         return patches.stream().anyMatch(p -> p.kernel().isEndless());
     }

@@ -127,16 +127,11 @@ public final class FieldSolver {
     private Vector field(Place at, Question q, boolean flux) {
         checkSurroundings();
         evaluations = 0;
-        Dimension unit = flux ? Units.SURFACE_DENSITY : Units.FIELD;
-        double here = scale(q, flux, q.side() == null ? q.permittivityBehind() : q.permittivity());
-        if (q.isInsideConductor()) {
-            return zero(at, unit);
-        }
         if (q.side() == null) {
-            return vector(at, q.probes(), here, unit);
+            return vector(at, q, q.here(), q.permittivityBehind(), flux);
         }
-        Vector plus = vector(at, q.probes(), here, unit);
-        Vector minus = q.behind() == null ? zero(at, unit) : vector(at, q.behind(), scale(q, flux, q.permittivityBehind()), unit);
+        Vector plus = vector(at, q, q.here(), q.permittivity(), flux);
+        Vector minus = vector(at, q, q.behind(), q.permittivityBehind(), flux);
         if (plus.isSided() || minus.isSided()) {
             plus = plus.isSided() ? plus.onSide(q.side()[0], q.side()[1], q.side()[2]) : plus;
             minus = minus.isSided() ? minus.onSide(-q.side()[0], -q.side()[1], -q.side()[2]) : minus;
@@ -157,15 +152,98 @@ public final class FieldSolver {
         return Vector.of(at, nothing, nothing, nothing);
     }
 
-    private Vector vector(Place at, List<Probe> probes, double scale, Dimension unit) {
+    private Vector vector(Place at, Question q, View view, double local, boolean flux) {
+        Dimension unit = flux ? Units.SURFACE_DENSITY : Units.FIELD;
+        if (view.isConductor()) {
+            return zero(at, unit);
+        }
+        double scale = scale(q, flux, local);
         Paver paver = new Paver(false, space);
         double[] placeError = new double[3];
-        for (Probe probe : probes) {
-            points(probe, paver, placeError);
-            for (Patch patch : compiled.patches) {
+        see(view, Images.coordinates(at), paver, placeError);
+        Vector own = vector(at, paver, placeError, scale, unit);
+        if (!view.hasSteadyField() || own.standing().kind() == Standing.Kind.UNBOUNDED) {
+            return own;
+        }
+        double factor = flux ? Constants.EPS0 * local : 1;
+        Amount[] steady = new Amount[3];
+        for (int k = 0; k < 3; k++) {
+            double e = factor * view.field()[k];
+            steady[k] = Amount.si(e, 8 * Sampler.EPS * factor * norm(view.field()), unit);
+        }
+        return own.plus(Vector.of(at, steady[0], steady[1], steady[2]));
+    }
+
+    /** All of the source, through the probes and smooth parts of a view. */
+    private void see(View view, double[] at, Paver paver, double[] error) {
+        for (PointCharge point : compiled.points) {
+            if (point.charge().si() == 0) {
+                continue;
+            }
+            boolean far = isFar(view, at, Images.coordinates(point.at()), 0);
+            for (Probe probe : far ? List.<Probe>of() : view.probes()) {
+                if (paver.isPotential()) {
+                    potentialOf(point, probe, paver, error);
+                } else {
+                    fieldOf(point, probe, paver, error);
+                }
+            }
+            smooth(point, far ? view.far() : view.green(), paver, error);
+        }
+        for (int i = 0; i < compiled.patches.size(); i++) {
+            Patch patch = compiled.patches.get(i);
+            boolean far = view.far() != null && !patch.kernel().isEndless() && !patch.chart().isEndless()
+                && isFar(view, at, compiled.ball(i, space).centre(), compiled.ball(i, space).radius());
+            for (Probe probe : far ? List.<Probe>of() : view.probes()) {
                 paver.pave(patch, probe);
             }
+            smooth(patch, far ? view.far() : view.green(), paver, error);
         }
+    }
+
+    private static boolean isFar(View view, double[] at, double[] centre, double radius) {
+        return view.far() != null
+            && norm(new double[] {at[0] - centre[0], at[1] - centre[1], at[2] - centre[2]}) - radius > Math.max(view.farBeyond(), 0.3 * radius);
+    }
+
+    private void smooth(PointCharge point, Green green, Paver paver, double[] error) {
+        if (green == null) {
+            return;
+        }
+        double[] at = Images.coordinates(point.at());
+        double[][] s = {{at[0]}, {at[1]}, {at[2]}};
+        double[][] out = new double[3][1];
+        double q = point.charge().si();
+        double relative = point.charge().error() / Math.abs(q) + green.relativeError() + 4 * Sampler.EPS;
+        double bound = Math.abs(q) * (paver.isPotential() ? green.potentialError() : green.fieldError());
+        if (paver.isPotential()) {
+            green.potential(s, 1, out[0]);
+        } else {
+            green.field(s, 1, out);
+        }
+        double size = norm(new double[] {out[0][0], out[1][0], out[2][0]});
+        for (int a = 0; a < paver.start.length; a++) {
+            paver.start[a] += q * out[a][0];
+            error[a] += bound + relative * Math.abs(q) * size;
+        }
+    }
+
+    private void smooth(Patch patch, Green green, Paver paver, double[] error) {
+        if (green == null) {
+            return;
+        }
+        Green part = patch.kernel().isEndless() ? green.endless(patch) : green;
+        GreenPiece.add(patch, part, paver, space);
+        double bound = paver.isPotential() ? part.potentialError() : part.fieldError();
+        if (bound > 0) {
+            double most = bound * GreenPiece.charge(patch, space);
+            for (int a = 0; a < error.length; a++) {
+                error[a] += most;
+            }
+        }
+    }
+
+    private Vector vector(Place at, Paver paver, double[] placeError, double scale, Dimension unit) {
         Contact contact = paver.contact;
         if (contact.unboundedReason() != null) {
             return Vector.unbounded(at, unit, contact.unboundedDirection(), contact.unboundedReason());
@@ -210,40 +288,35 @@ public final class FieldSolver {
         return Vector.of(at, c[0], c[1], c[2]);
     }
 
-    private void points(Probe probe, Paver paver, double[] placeError) {
-        for (PointCharge point : compiled.points) {
-            double q = point.charge().si();
-            if (q == 0) {
-                continue;
+    private static void fieldOf(PointCharge point, Probe probe, Paver paver, double[] placeError) {
+        double q = point.charge().si();
+        double[] at = Images.coordinates(point.at());
+        double[] d = new double[3];
+        double size = 0;
+        for (int a = 0; a < 3; a++) {
+            d[a] = at[a] - probe.place()[a];
+            size += Math.abs(at[a]) + Math.abs(probe.place()[a]);
+        }
+        double distance = norm(d);
+        if (!(distance > 4 * Sampler.EPS * size)) {
+            paver.contact.unbounded("on a point charge: the field grows without bound as 1 over the distance squared", null);
+            return;
+        }
+        double unit = q / distance / distance;
+        double relative = 8 * Sampler.EPS + 2 * Sampler.EPS * size / distance + point.charge().error() / Math.abs(q);
+        for (int a = 0; a < 3; a++) {
+            double sum = 0;
+            for (int k = 0; k < 3; k++) {
+                sum -= probe.a()[3 * a + k] * (d[k] / distance) * unit;
             }
-            double[] at = Images.coordinates(point.at());
-            double[] d = new double[3];
-            double size = 0;
-            for (int a = 0; a < 3; a++) {
-                d[a] = at[a] - probe.place()[a];
-                size += Math.abs(at[a]) + Math.abs(probe.place()[a]);
+            double own = Math.abs(sum);
+            if (probe.b() != null) {
+                double v = probe.b()[a] * q / distance;
+                sum += v;
+                own += Math.abs(v);
             }
-            double distance = norm(d);
-            if (!(distance > 4 * Sampler.EPS * size)) {
-                paver.contact.unbounded("on a point charge: the field grows without bound as 1 over the distance squared", null);
-                return;
-            }
-            double unit = q / distance / distance;
-            double relative = 8 * Sampler.EPS + 2 * Sampler.EPS * size / distance + point.charge().error() / Math.abs(q);
-            for (int a = 0; a < 3; a++) {
-                double sum = 0;
-                for (int k = 0; k < 3; k++) {
-                    sum -= probe.a()[3 * a + k] * (d[k] / distance) * unit;
-                }
-                double own = Math.abs(sum);
-                if (probe.b() != null) {
-                    double v = probe.b()[a] * q / distance;
-                    sum += v;
-                    own += Math.abs(v);
-                }
-                paver.start[a] += sum;
-                placeError[a] += relative * (own + Math.abs(unit) * 0.5);
-            }
+            paver.start[a] += sum;
+            placeError[a] += relative * (own + Math.abs(unit) * 0.5);
         }
     }
 
@@ -256,26 +329,29 @@ public final class FieldSolver {
     public Amount potential(Place at) {
         Question q = Images.question(source.around(), at);
         checkSurroundings();
-        evaluations = 0;
-        if (q.isInsideConductor()) {
-            return Amount.si(0, 0, Units.POTENTIAL);
+        if (source.around() instanceof Surroundings.Applied applied && !applied.hasZero()) {
+            throw new AuthorException("potential in an applied uniform field: it falls without end, so it has no zero of its own. "
+                + "Name the place where it is zero: .potential(place) with zeroAt(place).");
         }
-        if (q.side() != null && q.behind() == null) {
-            return Amount.si(0, 0, Units.POTENTIAL);
-        }
-        return potential(q);
+        return potential(q, at);
     }
 
-    private Amount potential(Question q) {
-        if (!q.isBalanced()) {
-            if (compiled.hasEndlessKernel()) {
-                throw endlessPotential();
-            }
-            if (compiled.hasEndlessChart() && !tailsConverge(q)) {
-                throw endlessPotential();
-            }
+    private Amount potential(Question q, Place at) {
+        evaluations = 0;
+        View view = q.forPotential();
+        if (hasEndless() && !isSettled(view) && (compiled.hasEndlessKernel() || !tailsConverge(view))) {
+            throw endlessPotential();
         }
-        return potential(q.probes(), scale(q, false, 1));
+        return potential(view, Images.coordinates(at), scale(q, false, 1));
+    }
+
+    private boolean hasEndless() {
+        return compiled.hasEndlessKernel() || compiled.hasEndlessChart();
+    }
+
+    /** Whether an endless source has a potential there. */
+    private static boolean isSettled(View view) {
+        return view.isConductor() && view.probes().isEmpty() || view.isBalanced();
     }
 
     private static AuthorException endlessPotential() {
@@ -287,18 +363,17 @@ public final class FieldSolver {
     public Amount potential(Place at, Place zero) {
         Question here = Images.question(source.around(), at);
         Question there = Images.question(source.around(), zero);
-        if (!compiled.hasEndlessKernel() && !compiled.hasEndlessChart() || here.isInsideConductor() || there.isInsideConductor()) {
-            return potential(at).minus(potential(zero));
-        }
         checkSurroundings();
+        View a = here.forPotential();
+        View b = there.forPotential();
+        if (!hasEndless() || isSettled(a) && isSettled(b)) {
+            return potential(here, at).minus(potential(there, zero));
+        }
         evaluations = 0;
-        double scale = scale(here, false, 1);
-        if (!compiled.hasEndlessChart() || here.isBalanced() && there.isBalanced()) {
-            List<Probe> all = new ArrayList<>(here.probes());
-            for (Probe p : there.probes()) {
-                all.add(new Probe(p.place(), p.a(), p.b(), -p.c()));
-            }
-            return potential(all, scale);
+        if (!compiled.hasEndlessChart() && a.green() == null && b.green() == null) {
+            List<Probe> all = new ArrayList<>(a.probes());
+            b.probes().forEach(p -> all.add(p.times(-1)));
+            return potential(View.of(all).plus(new double[3], a.potential() - b.potential()), Images.coordinates(at), scale(here, false, 1));
         }
         return alongPath(at, zero);
     }
@@ -340,41 +415,38 @@ public final class FieldSolver {
         return Amount.si(r.value()[0], r.error()[0], Units.POTENTIAL, standing);
     }
 
-    private Amount potential(List<Probe> probes, double scale) {
-        Paver paver = new Paver(true, space);
-        double pointError = 0;
-        for (Probe probe : probes) {
-            for (PointCharge point : compiled.points) {
-                double[] at = Images.coordinates(point.at());
-                double[] d = new double[3];
-                double size = 0;
-                for (int a = 0; a < 3; a++) {
-                    d[a] = at[a] - probe.place()[a];
-                    size += Math.abs(at[a]) + Math.abs(probe.place()[a]);
-                }
-                double q = point.charge().si();
-                if (q != 0 && !(norm(d) > 4 * Sampler.EPS * size)) {
-                    paver.contact.unbounded("on a point charge: the potential grows without bound", null);
-                } else if (q != 0) {
-                    double v = probe.c() * q / norm(d);
-                    paver.start[0] += v;
-                    pointError += Math.abs(v) * (4 * Sampler.EPS + Sampler.EPS * size / norm(d) + point.charge().error() / Math.abs(q));
-                }
-            }
-            for (Patch patch : compiled.patches) {
-                paver.pave(patch, probe);
-            }
+    private static void potentialOf(PointCharge point, Probe probe, Paver paver, double[] error) {
+        double[] at = Images.coordinates(point.at());
+        double[] d = new double[3];
+        double size = 0;
+        for (int a = 0; a < 3; a++) {
+            d[a] = at[a] - probe.place()[a];
+            size += Math.abs(at[a]) + Math.abs(probe.place()[a]);
         }
+        double q = point.charge().si();
+        if (!(norm(d) > 4 * Sampler.EPS * size)) {
+            paver.contact.unbounded("on a point charge: the potential grows without bound", null);
+        } else {
+            double v = probe.c() * q / norm(d);
+            paver.start[0] += v;
+            error[0] += Math.abs(v) * (4 * Sampler.EPS + Sampler.EPS * size / norm(d) + point.charge().error() / Math.abs(q));
+        }
+    }
+
+    private Amount potential(View view, double[] at, double scale) {
+        Paver paver = new Paver(true, space);
+        double[] pointError = new double[1];
+        see(view, at, paver, pointError);
         if (paver.contact.isUnboundedLine()) {
             return Amount.si(Double.NaN, Double.POSITIVE_INFINITY, Units.POTENTIAL,
                 Standing.unbounded(paver.contact.unboundedReason().replace("field", "potential").replace(" as 1 over the distance", "")));
         }
         Cubature.Result r = integrate(paver, 1, false, scale);
         double value = r.value()[0];
-        double error = r.error()[0] + pointError + ROUNDING * Math.abs(value) + paver.roughness() * Math.abs(value);
+        double error = r.error()[0] + pointError[0] + ROUNDING * Math.abs(value) + paver.roughness() * Math.abs(value);
         Standing standing = standing("potential", r, error, Math.abs(value), r.magnitude()[0], paver.roughness(), scale, "V");
-        double stated = scale * error;
-        return Amount.si(scale * value, Double.isNaN(stated) ? Double.POSITIVE_INFINITY : stated, Units.POTENTIAL, standing);
+        double stated = scale * error + 8 * Sampler.EPS * Math.abs(view.potential());
+        return Amount.si(scale * value + view.potential(), Double.isNaN(stated) ? Double.POSITIVE_INFINITY : stated, Units.POTENTIAL, standing);
     }
 
     // ---- what the surroundings add
@@ -396,13 +468,13 @@ public final class FieldSolver {
         Question q = Images.question(source.around(), at).reaction(at);
         checkSurroundings();
         evaluations = 0;
-        return q.probes().isEmpty() ? Amount.si(0, 0, Units.POTENTIAL) : potential(q);
+        return potential(q, at);
     }
 
     /** Whether the potential integral of mapped endless charge settles, from few evaluations. */
-    private boolean tailsConverge(Question q) {
+    private boolean tailsConverge(View view) {
         Paver paver = new Paver(true, space);
-        for (Probe probe : q.probes()) {
+        for (Probe probe : view.probes()) {
             for (Patch patch : compiled.patches) {
                 paver.pave(patch, probe);
             }
@@ -443,12 +515,18 @@ public final class FieldSolver {
     /** Charge must be on the right side of a conductor or interface; looked at on a grid of each part. */
     private void checkSurroundings() {
         Surroundings around = source.around();
+        if (around instanceof Surroundings.Applied applied) {
+            around = applied.around();
+        }
         if (checked || around instanceof Surroundings.FreeSpace || around instanceof Surroundings.Medium) {
             return;
         }
         checked = true;
         for (PointCharge point : compiled.points) {
-            double s = clearance(around, Images.coordinates(point.at()));
+            if (point.charge().si() == 0) {
+                continue;
+            }
+            double s = Images.clearance(around, Images.coordinates(point.at()));
             if (!(s > 0)) {
                 throw wrongSide(around, "a point charge", Images.coordinates(point.at()));
             }
@@ -486,7 +564,7 @@ public final class FieldSolver {
                 own[a] = anchor.position()[a] + nodes.offset[a][0];
             }
             double[] p = patch.frame().toSheet(own);
-            double s = clearance(around, p);
+            double s = Images.clearance(around, p);
             if (s < 0) {
                 throw wrongSide(around, "charge", p);
             }
@@ -501,43 +579,28 @@ public final class FieldSolver {
         }
     }
 
+    /** Whether endless charge meets a wall. */
     private static boolean across(Surroundings around, Patch patch) {
-        double[] along = new double[3];
+        if (around instanceof Surroundings.GroundedCorner c) {
+            return across(c.first(), patch) || across(c.second(), patch);
+        }
+        double[] direction = patch.frame().directionToSheet(unit(patch.kernel().axis));
+        String axis = around instanceof Surroundings.GroundPlane g ? g.axis() : around instanceof Surroundings.DielectricHalfSpace h ? h.axis()
+            : around instanceof Surroundings.GroundedPair p ? p.axis() : null;
         if (patch.kernel().kind == Kernel.Kind.PLANE) {
-            return !(around instanceof Surroundings.GroundPlane g) || Math.abs(patch.frame().directionToSheet(unit(patch.kernel().axis))["xyz".indexOf(g.axis())]) < 1 - 1e-12;
+            return axis == null || around instanceof Surroundings.DielectricHalfSpace || Math.abs(direction["xyz".indexOf(axis)]) < 1 - 1e-12;
         }
-        along[patch.kernel().axis] = 1;
-        double[] direction = patch.frame().directionToSheet(along);
-        String axis = around instanceof Surroundings.GroundPlane g ? g.axis() : around instanceof Surroundings.DielectricHalfSpace h ? h.axis() : null;
-        if (axis == null || patch.kernel().kind != Kernel.Kind.LINE) {
-            return false;
+        if (axis == null) {
+            return around instanceof Surroundings.GroundedBox;
         }
-        return Math.abs(direction["xyz".indexOf(axis)]) > 1e-12;
+        return (patch.kernel().kind == Kernel.Kind.LINE || around instanceof Surroundings.GroundedPair)
+            && Math.abs(direction["xyz".indexOf(axis)]) > 1e-12;
     }
 
     private static double[] unit(int axis) {
         double[] v = new double[3];
         v[axis] = 1;
         return v;
-    }
-
-    /** Distance to the wall, positive on the allowed side, 0 within rounding. */
-    private static double clearance(Surroundings around, double[] p) {
-        if (around instanceof Surroundings.GroundPlane g) {
-            return loosely(Images.depth(g.axis(), g.offset(), g.side(), p), g.offset());
-        }
-        if (around instanceof Surroundings.DielectricHalfSpace h) {
-            return loosely(Images.depth(h.axis(), h.offset(), h.side(), p), h.offset());
-        }
-        if (around instanceof Surroundings.GroundedSphere s) {
-            double r = norm(new double[] {p[0] - s.x(), p[1] - s.y(), p[2] - s.z()});
-            return loosely(s.outside() ? r - s.radius() : s.radius() - r, s.radius());
-        }
-        return 1;
-    }
-
-    private static double loosely(double distance, double scale) {
-        return Math.abs(distance) <= 1e-12 * Math.abs(scale) ? 0 : distance;
     }
 
     private static AuthorException wrongSide(Surroundings around, String what, double[] p) {

@@ -1,5 +1,6 @@
 package fieldwright.field;
 
+import java.util.ArrayList;
 import java.util.List;
 
 import fieldwright.charge.Surroundings;
@@ -20,15 +21,129 @@ final class Images {
                 + ".above(groundPlane(\"z\", \"0\")). Leaving out a grounded wall errs to the unsafe side.");
         }
         if (around instanceof Surroundings.GroundPlane plane) {
-            return groundPlane(plane, p);
+            return walled(List.of(new Wall(plane.axis(), plane.offset(), plane.side())), p);
+        }
+        if (around instanceof Surroundings.GroundedCorner corner) {
+            return walled(List.of(new Wall(corner.first()), new Wall(corner.second())), p);
         }
         if (around instanceof Surroundings.DielectricHalfSpace half) {
             return halfSpace(half, p);
         }
-        if (around instanceof Surroundings.GroundedSphere sphere) {
-            return sphere(sphere, p);
+        if (around instanceof Surroundings.ConductingSphere sphere) {
+            return Spheres.question(sphere, p);
         }
-        return Question.of(List.of(Probe.direct(p.x(), p.y(), p.z())), around.permittivity());
+        if (around instanceof Surroundings.GroundedPair pair) {
+            double[] low = new double[3];
+            double[] high = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
+            low[axis(pair.axis())] = pair.from();
+            high[axis(pair.axis())] = pair.to();
+            return between(low, high, p);
+        }
+        if (around instanceof Surroundings.GroundedBox b) {
+            return between(new double[] {b.x0(), b.y0(), b.z0()}, new double[] {b.x1(), b.y1(), b.z1()}, p);
+        }
+        if (around instanceof Surroundings.Applied applied) {
+            return Applied.question(applied, p);
+        }
+        return Question.of(View.of(List.of(Probe.direct(p.x(), p.y(), p.z()))), around.permittivity());
+    }
+
+    /** Distance to the nearest wall, positive on the charge's side. */
+    static double clearance(Surroundings around, double[] p) {
+        if (around instanceof Surroundings.GroundPlane g) {
+            return loosely(depth(g.axis(), g.offset(), g.side(), p), g.offset());
+        }
+        if (around instanceof Surroundings.DielectricHalfSpace h) {
+            return loosely(depth(h.axis(), h.offset(), h.side(), p), h.offset());
+        }
+        if (around instanceof Surroundings.GroundedCorner c) {
+            return Math.min(clearance(c.first(), p), clearance(c.second(), p));
+        }
+        if (around instanceof Surroundings.ConductingSphere s) {
+            double r = Math.sqrt((p[0] - s.x()) * (p[0] - s.x()) + (p[1] - s.y()) * (p[1] - s.y()) + (p[2] - s.z()) * (p[2] - s.z()));
+            return loosely(s.outside() ? r - s.radius() : s.radius() - r, s.radius());
+        }
+        if (around instanceof Surroundings.GroundedPair g) {
+            double at = p[axis(g.axis())];
+            return loosely(Math.min(at - g.from(), g.to() - at), Math.abs(g.from()) + Math.abs(g.to()));
+        }
+        if (around instanceof Surroundings.GroundedBox b) {
+            double least = Math.min(Math.min(p[0] - b.x0(), b.x1() - p[0]), Math.min(p[1] - b.y0(), b.y1() - p[1]));
+            least = Math.min(least, Math.min(p[2] - b.z0(), b.z1() - p[2]));
+            return loosely(least, Math.abs(b.x0()) + Math.abs(b.x1()) + Math.abs(b.y0()) + Math.abs(b.y1()) + Math.abs(b.z0()) + Math.abs(b.z1()));
+        }
+        if (around instanceof Surroundings.Applied a) {
+            return clearance(a.around(), p);
+        }
+        return 1;
+    }
+
+    private static double loosely(double distance, double scale) {
+        return Math.abs(distance) <= 1e-12 * Math.abs(scale) ? 0 : distance;
+    }
+
+    /** A grounded plane; {@code side}: where the field is. */
+    private record Wall(String axis, double offset, int side) {
+        Wall(Surroundings.GroundPlane plane) {
+            this(plane.axis(), plane.offset(), plane.side());
+        }
+    }
+
+    /** All images in walls that stand at right angles to each other: every wall doubles their number. */
+    private static Question walled(List<Wall> walls, Place place) {
+        double[] p = coordinates(place);
+        Wall touched = null;
+        List<Probe> probes = new ArrayList<>(List.of(Probe.direct(p[0], p[1], p[2])));
+        for (Wall wall : walls) {
+            double s = depth(wall.axis, wall.offset, wall.side, p);
+            if (s < 0 || s == 0 && touched != null) {
+                return Question.of(View.GROUNDED, 1);   // behind a wall, or in the edge between two
+            }
+            touched = s == 0 ? wall : touched;
+            for (Probe probe : List.copyOf(probes)) {
+                probes.add(mirrored(wall.axis, wall.offset, probe, s == 0));
+            }
+        }
+        View here = View.of(probes);
+        return touched == null ? Question.of(here, 1) : Question.on(here, normal(touched.axis, touched.side), View.GROUNDED);
+    }
+
+    private static Probe mirrored(String axis, double offset, Probe probe, boolean onPlane) {
+        int k = axis(axis);
+        double[] q = probe.place().clone();
+        q[k] = onPlane ? q[k] : 2 * offset - q[k];
+        double[] a = probe.a().clone();
+        for (int i = 0; i < 3; i++) {
+            for (int j = 0; j < 3; j++) {
+                a[3 * i + j] *= j == k ? 1 : -1;
+            }
+        }
+        return new Probe(q, a, null, -probe.c());
+    }
+
+    /** Between walls across one, two or three axes: the nearest images as probes, all others as a smooth part. */
+    private static Question between(double[] low, double[] high, Place place) {
+        double[] p = coordinates(place);
+        List<Wall> nearest = new ArrayList<>();
+        double[] length = new double[3];
+        for (int k = 0; k < 3; k++) {
+            length[k] = high[k] - low[k];
+            if (length[k] < Double.POSITIVE_INFINITY) {
+                String axis = "xyz".substring(k, k + 1);
+                boolean upper = p[k] - low[k] > length[k] / 2;
+                if (depth(axis, upper ? high[k] : low[k], upper ? -1 : 1, p) < 0) {
+                    return Question.of(View.GROUNDED, 1);
+                }
+                nearest.add(new Wall(axis, upper ? high[k] : low[k], upper ? -1 : 1));
+            }
+        }
+        Question q = walled(nearest, place);
+        if (q.here().isConductor()) {
+            return q;
+        }
+        View here = q.here().with(new WalledGreen(p, low, length, false))
+            .orFar(new WalledGreen(p, low, length, true), WalledGreen.farBeyond(length));
+        return new Question(here, 1, q.side(), q.behind(), 1);
     }
 
     private static int axis(String name) {
@@ -46,29 +161,10 @@ final class Images {
         return Math.abs(s) <= EPS * (Math.abs(at) + Math.abs(offset)) ? 0 : s;
     }
 
-    private static Probe mirrored(String axis, double offset, double[] p, double factor, boolean onPlane) {
-        int k = axis(axis);
-        double[] q = p.clone();
-        q[k] = onPlane ? p[k] : 2 * offset - p[k];
-        double[] a = {factor, 0, 0, 0, factor, 0, 0, 0, factor};
-        a[4 * k] = -factor;
-        return new Probe(q, a, null, factor);
-    }
-
     private static double[] normal(String axis, int side) {
         double[] n = new double[3];
         n[axis(axis)] = side;
         return n;
-    }
-
-    private static Question groundPlane(Surroundings.GroundPlane g, Place place) {
-        double[] p = coordinates(place);
-        double s = depth(g.axis(), g.offset(), g.side(), p);
-        if (s < 0) {
-            return Question.of(List.of(), 1);
-        }
-        List<Probe> probes = List.of(Probe.direct(p[0], p[1], p[2]), mirrored(g.axis(), g.offset(), p, -1, s == 0));
-        return s > 0 ? Question.of(probes, 1) : new Question(probes, 1, normal(g.axis(), g.side()), null, 1);
     }
 
     /** Image −q(ε₂ − ε₁)/(ε₂ + ε₁) before the interface, q·2ε₁/(ε₁ + ε₂) in place of q behind it. */
@@ -78,67 +174,14 @@ final class Images {
         double k = (d.behind() - d.here()) / (d.behind() + d.here());
         double through = 2 * d.here() / (d.here() + d.behind());
         Probe direct = Probe.direct(p[0], p[1], p[2]);
-        List<Probe> before = List.of(direct, mirrored(d.axis(), d.offset(), p, -k, s == 0));
+        List<Probe> before = List.of(direct, mirrored(d.axis(), d.offset(), direct, s == 0).times(k));
         List<Probe> behind = List.of(new Probe(p, new double[] {through, 0, 0, 0, through, 0, 0, 0, through}, null, through));
         if (s > 0) {
-            return Question.of(before, d.here());
+            return Question.of(View.of(before), d.here());
         }
         if (s < 0) {
-            return new Question(behind, d.here(), null, null, d.behind());
+            return new Question(View.of(behind), d.here(), null, null, d.behind());
         }
-        return new Question(before, d.here(), normal(d.axis(), d.side()), behind, d.behind());
-    }
-
-    /** Kelvin's inversion: V = V₀(p) − (a/r) V₀(a² p/r²), places counted from the centre. */
-    private static Question sphere(Surroundings.GroundedSphere g, Place place) {
-        double[] p = {place.x() - g.x(), place.y() - g.y(), place.z() - g.z()};
-        double r = Math.sqrt(p[0] * p[0] + p[1] * p[1] + p[2] * p[2]);
-        double a = g.radius();
-        boolean on = Math.abs(r - a) <= 4 * EPS * a;
-        if (!on && g.outside() == r < a) {
-            return Question.of(List.of(), 1);
-        }
-        Probe direct = Probe.direct(place.x(), place.y(), place.z());
-        if (r < 3e-4 * a) {
-            return Question.of(aroundCentre(g, p, direct), 1);
-        }
-        List<Probe> probes = List.of(direct, inverted(g, p, 1, on));
-        if (!on) {
-            return Question.of(probes, 1);
-        }
-        double sign = g.outside() ? 1 : -1;
-        return new Question(probes, 1, new double[] {sign * p[0] / r, sign * p[1] / r, sign * p[2] / r}, null, 1);
-    }
-
-    /**
-     * Near the centre the inverted place runs off to infinity: the induced field is harmonic, so its value is the mean over six places
-     * round about (exact but for fourth order in their distance, 6e-4 radii).
-     */
-    private static List<Probe> aroundCentre(Surroundings.GroundedSphere g, double[] p, Probe direct) {
-        double h = 6e-4 * g.radius();
-        java.util.ArrayList<Probe> probes = new java.util.ArrayList<>(List.of(direct));
-        for (int k = 0; k < 6; k++) {
-            double[] q = p.clone();
-            q[k / 2] += k % 2 == 0 ? h : -h;
-            probes.add(inverted(g, q, 1.0 / 6, false));
-        }
-        return probes;
-    }
-
-    private static Probe inverted(Surroundings.GroundedSphere g, double[] p, double factor, boolean on) {
-        double a = g.radius();
-        double r = Math.sqrt(p[0] * p[0] + p[1] * p[1] + p[2] * p[2]);
-        double ratio = on ? 1 : a / r;
-        double[] n = {p[0] / r, p[1] / r, p[2] / r};
-        double scale = on ? 1 : ratio * ratio;
-        double[] q = {g.x() + scale * p[0], g.y() + scale * p[1], g.z() + scale * p[2]};
-        double[] m = new double[9];
-        for (int i = 0; i < 3; i++) {
-            for (int j = 0; j < 3; j++) {
-                m[3 * i + j] = -factor * ratio * ratio * ratio * ((i == j ? 1 : 0) - 2 * n[i] * n[j]);
-            }
-        }
-        double v = -factor * ratio / r;
-        return new Probe(q, m, new double[] {v * n[0], v * n[1], v * n[2]}, -factor * ratio);
+        return new Question(View.of(before), d.here(), normal(d.axis(), d.side()), View.of(behind), d.behind());
     }
 }

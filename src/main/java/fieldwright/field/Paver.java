@@ -34,6 +34,10 @@ final class Paver {
         return roughness;
     }
 
+    boolean isPotential() {
+        return potential;
+    }
+
     Paver(boolean potential, Workspace space) {
         this.potential = potential;
         this.space = space;

@@ -6,19 +6,40 @@ import java.util.List;
 import fieldwright.quantity.Place;
 
 /**
- * Where a source is to be seen for one answer, in given surroundings: probes for the place and its images. For a place on an
- * interface {@code side} is the unit normal towards {@code probes}; the other side has {@code behind} (null: a conductor, all zero).
- * Permittivities are relative. No probes: inside a conductor.
+ * How a source is to be seen for one answer, in given surroundings. For a place on a conductor or an interface {@code side} is the
+ * unit normal towards what {@code here} sees, and {@code behind} what the other side sees. Permittivities are relative.
  */
-record Question(List<Probe> probes, double permittivity, double[] side, List<Probe> behind, double permittivityBehind) {
-    static Question of(List<Probe> probes, double permittivity) {
-        return new Question(probes, permittivity, null, null, permittivity);
+record Question(View here, double permittivity, double[] side, View behind, double permittivityBehind) {
+    static Question of(View here, double permittivity) {
+        return new Question(here, permittivity, null, null, permittivity);
     }
 
-    /** What is left of the answer at {@code at} without the source's own field in the medium it stands in: that of induced charge. */
+    /** On a conductor whose inside is {@code within}. */
+    static Question on(View here, double[] side, View within) {
+        return new Question(here, 1, side, within, 1);
+    }
+
+    /** The side whose potential is that of the place: both have the same, a conductor's is simpler. */
+    View forPotential() {
+        return side == null ? here : behind;
+    }
+
+    /**
+     * What is left of the answer at {@code at} without the source's own field in the medium it stands in, and without what is there
+     * when the source is not: that of the charge it induces.
+     */
     Question reaction(Place at) {
-        return new Question(withoutOwn(probes, at), permittivity, side, side == null ? null : withoutOwn(behind == null ? List.of() : behind, at),
-            permittivity);
+        return new Question(reaction(here, at), permittivity, side, side == null ? null : reaction(behind, at), permittivity);
+    }
+
+    private static View reaction(View view, Place at) {
+        View rest = View.of(withoutOwn(view.isConductor() ? steady(view.probes()) : view.probes(), at));
+        return rest.with(view.green());
+    }
+
+    /** Potential only. */
+    private static List<Probe> steady(List<Probe> probes) {
+        return probes.stream().map(p -> new Probe(p.place(), new double[9], null, p.c())).toList();
     }
 
     private static List<Probe> withoutOwn(List<Probe> probes, Place at) {
@@ -35,18 +56,5 @@ record Question(List<Probe> probes, double permittivity, double[] side, List<Pro
             rest.add(Probe.direct(at.x(), at.y(), at.z()).times(-own));
         }
         return rest;
-    }
-
-    boolean isInsideConductor() {
-        return probes.isEmpty();
-    }
-
-    /** True when image charges balance: an endless source then has a potential. */
-    boolean isBalanced() {
-        double sum = 0;
-        for (Probe p : probes) {
-            sum += p.c();
-        }
-        return probes.size() > 1 && sum == 0;
     }
 }

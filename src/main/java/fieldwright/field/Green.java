@@ -1,0 +1,32 @@
+package fieldwright.field;
+
+import fieldwright.quantity.AuthorException;
+
+/**
+ * Part of a Green function, seen from one place (that of the question) and smooth in the place of the source: what is left of endless
+ * rows of images without the near ones, or all of it for sources far away. Without 1/(4π eps0): 1/m and 1/m² for unit charge.
+ * Keeps scratch space: one thread at a time.
+ */
+interface Green {
+    /** {@code out[i]} = potential of unit charges at {@code s[0..2][i]}, sheet frame. */
+    void potential(double[][] s, int n, double[] out);
+
+    /** {@code out[0..2][i]} = field of unit charges, sheet frame. */
+    void field(double[][] s, int n, double[][] out);
+
+    /** What {@link #potential} is wrong by at most beside rounding, for unit charge (1/m). */
+    double potentialError();
+
+    /** What {@link #field} is wrong by at most beside rounding, for unit charge (1/m²). */
+    double fieldError();
+
+    /** What a value is wrong by at most beside the bounds above, as a part of itself. */
+    default double relativeError() {
+        return 0;
+    }
+
+    /** The same for a patch whose charge is integrated along its endless coordinates. Errors: AuthorException where that is not worked. */
+    default Green endless(Patch patch) {
+        throw new AuthorException("endless charge in these surroundings: it is not worked. Give the region finite limits.");
+    }
+}

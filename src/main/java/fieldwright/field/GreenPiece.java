@@ -1,0 +1,178 @@
+package fieldwright.field;
+
+import java.util.List;
+
+import fieldwright.geometry.Chart;
+import fieldwright.geometry.Nodes;
+import fieldwright.integral.Cubature;
+import fieldwright.integral.Integrand;
+
+/** Density times measure times a smooth {@link Green} part over a patch: boxes of parameters as they are. */
+final class GreenPiece implements Integrand {
+    private static final int[] ORDERS = {0, 20, 14, 10};
+
+    private final Patch patch;
+    private final Green green;
+    private final boolean potential;
+    private final Workspace space;
+    private final Chart.Anchor anchor;
+    private final double[][] s = new double[3][BLOCK];
+
+    private GreenPiece(Patch patch, Green green, boolean potential, Workspace space) {
+        this.patch = patch;
+        this.green = green;
+        this.potential = potential;
+        this.space = space;
+        double[] middle = new double[patch.dimension()];
+        java.util.Arrays.fill(middle, 0.5);
+        anchor = patch.chart().anchor(middle);
+    }
+
+    /** Adds the pieces, cut where the density bends; what needs no integral to the start. */
+    static void add(Patch patch, Green green, Paver paver, Workspace space) {
+        if (patch.weight().isConstant() && patch.weight().constant() == 0) {
+            return;
+        }
+        GreenPiece f = new GreenPiece(patch, green, paver.isPotential(), space);
+        if (patch.dimension() == 0) {
+            double[][] out = new double[paver.start.length][1];
+            f.evaluate(new double[0][], 1, out, new double[1]);
+            for (int c = 0; c < out.length; c++) {
+                paver.start[c] += out[c][0];
+            }
+            return;
+        }
+        add(f, paver.pieces);
+    }
+
+    private static void add(GreenPiece f, List<Cubature.Piece> pieces) {
+        Patch patch = f.patch;
+        int d = patch.dimension();
+        double[][] cuts = new double[d][];
+        for (int k = 0; k < d; k++) {
+            cuts[k] = patch.chart().isEndless(k) ? endless(patch.breaks()[k]) : patch.breaks()[k];
+        }
+        int[] orders = new int[d];
+        java.util.Arrays.fill(orders, ORDERS[d]);
+        int[] index = new int[d];
+        while (true) {
+            double[] from = new double[d];
+            double[] to = new double[d];
+            for (int k = 0; k < d; k++) {
+                from[k] = cuts[k][index[k]];
+                to[k] = cuts[k][index[k] + 1];
+            }
+            pieces.add(new Cubature.Piece(f, from, to, orders));
+            int k = 0;
+            while (k < d && ++index[k] == cuts[k].length - 1) {
+                index[k++] = 0;
+            }
+            if (k == d) {
+                return;
+            }
+        }
+    }
+
+    private static double[] endless(double[] breaks) {
+        java.util.TreeSet<Double> all = new java.util.TreeSet<>(List.of(0.25, 0.5, 0.75));
+        for (double b : breaks) {
+            all.add(b);
+        }
+        return all.stream().mapToDouble(Double::doubleValue).toArray();
+    }
+
+    /** ∫ |density| over the patch, roughly: a fixed rule. */
+    static double charge(Patch patch, Workspace space) {
+        GreenPiece f = new GreenPiece(patch, ONE, true, space);
+        if (patch.dimension() == 0) {
+            double[][] out = new double[1][1];
+            f.evaluate(new double[0][], 1, out, new double[1]);
+            return Math.abs(out[0][0]);
+        }
+        List<Cubature.Piece> pieces = new java.util.ArrayList<>();
+        add(f, pieces);
+        return Cubature.integrate(pieces, 1, false, new Cubature.Goal(0.1, 1, 0, 2000), null).magnitude()[0];
+    }
+
+    private static final Green ONE = new Green() {
+        @Override
+        public void potential(double[][] s, int n, double[] out) {
+            java.util.Arrays.fill(out, 0, n, 1);
+        }
+
+        @Override
+        public void field(double[][] s, int n, double[][] out) {
+            for (double[] c : out) {
+                java.util.Arrays.fill(c, 0, n, 0);
+            }
+        }
+
+        @Override
+        public double potentialError() {
+            return 0;
+        }
+
+        @Override
+        public double fieldError() {
+            return 0;
+        }
+    };
+
+    @Override
+    public int dimension() {
+        return patch.dimension();
+    }
+
+    @Override
+    public int components() {
+        return potential ? 1 : 3;
+    }
+
+    @Override
+    public boolean isSmooth() {
+        return patch.weight().isSmooth();
+    }
+
+    @Override
+    public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
+        double[][] du = space.du;
+        double[] w = space.weight;
+        java.util.Arrays.fill(w, 0, n, 1);
+        for (int k = 0; k < patch.dimension(); k++) {
+            for (int i = 0; i < n; i++) {
+                double width = patch.triangle() && k == 1 ? 1 - u[0][i] : 1;
+                du[k][i] = width * u[k][i] - 0.5;
+                w[i] *= width;
+            }
+        }
+        Nodes nodes = space.nodes;
+        patch.chart().evaluate(anchor, du, n, nodes);
+        patch.weight().evaluate(nodes, anchor.position(), n, space.density);
+        double[] own = new double[3];
+        for (int i = 0; i < n; i++) {
+            if (Double.isNaN(space.density[i])) {
+                throw Sampler.notANumber(patch, nodes, i);
+            }
+            w[i] *= space.density[i] * nodes.measure[i];
+            for (int a = 0; a < 3; a++) {
+                own[a] = anchor.position()[a] + nodes.offset[a][i];
+            }
+            double[] sheet = patch.frame().toSheet(own);
+            for (int a = 0; a < 3; a++) {
+                s[a][i] = sheet[a];
+            }
+        }
+        if (potential) {
+            green.potential(s, n, out[0]);
+        } else {
+            green.field(s, n, out);
+        }
+        double relative = 10 * green.relativeError();
+        for (int i = 0; i < n; i++) {
+            for (int c = 0; c < components(); c++) {
+                out[c][i] = w[i] == 0 ? 0 : w[i] * out[c][i];
+                noise[i] = Math.max(noise[i], relative * Math.abs(out[c][i]));
+            }
+        }
+    }
+}
