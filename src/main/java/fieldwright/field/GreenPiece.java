@@ -17,6 +17,7 @@ final class GreenPiece implements Integrand {
     private final Workspace space;
     private final Chart.Anchor anchor;
     private final double[][] s = new double[3][BLOCK];
+    private final double[] weight = new double[BLOCK];
 
     private GreenPiece(Patch patch, Green green, boolean potential, Workspace space) {
         this.patch = patch;
@@ -136,7 +137,7 @@ final class GreenPiece implements Integrand {
     @Override
     public void evaluate(double[][] u, int n, double[][] out, double[] noise) {
         double[][] du = space.du;
-        double[] w = space.weight;
+        double[] w = weight;
         java.util.Arrays.fill(w, 0, n, 1);
         for (int k = 0; k < patch.dimension(); k++) {
             for (int i = 0; i < n; i++) {
@@ -151,7 +152,7 @@ final class GreenPiece implements Integrand {
         double[] own = new double[3];
         for (int i = 0; i < n; i++) {
             if (Double.isNaN(space.density[i])) {
-                throw Sampler.notANumber(patch, nodes, i);
+                throw Facet.notANumber(patch, nodes, i);
             }
             w[i] *= space.density[i] * nodes.measure[i];
             for (int a = 0; a < 3; a++) {

@@ -8,6 +8,7 @@ import fieldwright.output.Output;
 import fieldwright.quantity.Amount;
 import fieldwright.quantity.AuthorException;
 import fieldwright.quantity.Place;
+import fieldwright.quantity.Units;
 import fieldwright.quantity.Vector;
 import java.util.List;
 import java.util.function.Function;
@@ -101,16 +102,66 @@ public final class Distribution {
                 wall.text() + ", charge before it in air; no conductor near");
     }
 
-    /** Outside an earthed sphere; the potential is zero on it. */
-    public Distribution outside(GroundedSphere sphere) {
-        return in(new Surroundings.GroundedSphere(sphere.centre().x(), sphere.centre().y(), sphere.centre().z(), sphere.radius(), true),
-                sphere.text() + ", field region outside it; no other conductor or dielectric near");
+    /**
+     * In the corner of two earthed planes at right angles.
+     *
+     * @param firstSide of the first plane on which the charge and the field lie: {@code "+z"}
+     * @param secondSide the same for the second
+     */
+    public Distribution inCorner(GroundPlane first, String firstSide, GroundPlane second, String secondSide) {
+        Surroundings corner = new Surroundings.GroundedCorner(faced(first, firstSide), faced(second, secondSide));
+        return in(corner, "ground planes " + first.text() + " and " + second.text() + " at right angles, field region " + region(first, firstSide)
+                + " and " + region(second, secondSide) + "; no other conductor or dielectric near");
     }
 
-    /** Inside an earthed spherical shell. */
-    public Distribution inside(GroundedSphere sphere) {
-        return in(new Surroundings.GroundedSphere(sphere.centre().x(), sphere.centre().y(), sphere.centre().z(), sphere.radius(), false),
-                sphere.text() + ", field region inside it");
+    private static Surroundings.GroundPlane faced(GroundPlane plane, String side) {
+        String text = side.strip().replace('\u2212', '-');
+        if (!text.matches("[+-]" + plane.axis())) {
+            throw new AuthorException("inCorner, ground plane " + plane.text() + ", side \"" + side + "\": name the side the charge is on, \"+"
+                    + plane.axis() + "\" or \"-" + plane.axis() + "\".");
+        }
+        return new Surroundings.GroundPlane(plane.axis(), plane.offset(), text.startsWith("-") ? -1 : 1);
+    }
+
+    private static String region(GroundPlane plane, String side) {
+        return plane.axis() + (side.strip().startsWith("+") ? " > " : " < ") + plane.offsetText();
+    }
+
+    /** Between two earthed parallel planes without end. */
+    public Distribution between(GroundPlanes planes) {
+        return in(planes.around(), planes.text() + ", field region between them; the planes are taken as endless");
+    }
+
+    /** Outside a conducting sphere. */
+    public Distribution outside(ConductingSphere sphere) {
+        return in(sphere.outside(), sphere.text() + ", field region outside it; no other conductor or dielectric near");
+    }
+
+    /** Inside a conducting spherical shell. */
+    public Distribution inside(ConductingSphere sphere) {
+        return in(sphere.inside(), sphere.text() + ", thin shell, charge inside it");
+    }
+
+    /** Inside earthed walls; the potential is zero on them. */
+    public Distribution inside(Enclosure walls) {
+        return in(walls.around(), walls.text() + ", field region inside it");
+    }
+
+    /**
+     * With a uniform field applied from far away, in V/m, stated after the surroundings: {@code .above(groundPlane("z", "0"))
+     * .inUniformField("0", "0", "-E_0")}. The potential is counted from the conductor, or from the plane through the centre of an
+     * insulated sphere; elsewhere {@link #zeroAt} must say.
+     */
+    public Distribution inUniformField(Object x, Object y, Object z) {
+        double ex = Given.si("inUniformField, x", x, Units.FIELD);
+        double ey = Given.si("inUniformField, y", y, Units.FIELD);
+        double ez = Given.si("inUniformField, z", z, Units.FIELD);
+        if (assumption == null) {
+            throw new AuthorException(kind + ": inUniformField adds to surroundings, which are not stated. Write .inFreeSpace(), .inMedium(eps_r), "
+                    + ".above(groundPlane(\"z\", \"0\")) or .outside(floatingSphere(centre, radius)) before it.");
+        }
+        String text = assumption + "; uniform field (" + Given.text(x) + ", " + Given.text(y) + ", " + Given.text(z) + ") applied from far away";
+        return new Distribution(kind, source.with(new Surroundings.Applied(source.around(), ex, ey, ez)), text, zero);
     }
 
     private Distribution in(Surroundings around, String text) {

@@ -2,6 +2,7 @@ package fieldwright.words;
 
 import fieldwright.charge.Charge;
 import fieldwright.charge.PointCharge;
+import fieldwright.charge.Surroundings;
 import fieldwright.formula.Formula;
 import fieldwright.geometry.Bodies;
 import fieldwright.judge.Assessment;
@@ -90,6 +91,11 @@ public final class Words {
     /** Density in C/m³ over a volume. */
     public static Distribution volumeCharge(Shape volume, Object density) {
         return spread("volumeCharge", 3, volume, density);
+    }
+
+    /** None at all: for what conductors do to an applied field alone. */
+    public static Distribution noCharge() {
+        return Distribution.of("no charge", new PointCharge(new Place(0, 0, 0), Amount.si(0, 0, Units.CHARGE), null));
     }
 
     /** Charges that act together. */
@@ -287,11 +293,57 @@ public final class Words {
                 + " fills " + axis + (filled > 0 ? " > " : " < ") + stated(offset, value));
     }
 
+    /** Two earthed parallel planes for {@code .between(…)}: {@code groundPlanes("z", "0", "H")}. */
+    public static GroundPlanes groundPlanes(String axis, Object from, Object to) {
+        axis("groundPlanes", axis);
+        double low = Given.length("groundPlanes, first offset", from);
+        double high = Given.length("groundPlanes, second offset", to);
+        return new GroundPlanes(new Surroundings.GroundedPair(axis, Math.min(low, high), Math.max(low, high)),
+                "ground planes " + axis + " = " + stated(from, low) + " and " + axis + " = " + stated(to, high));
+    }
+
+    /** A closed earthed box with its sides across the axes, by two opposite corners, for {@code .inside(…)}. */
+    public static Enclosure groundedBox(Place corner, Place opposite) {
+        Surroundings box = new Surroundings.GroundedBox(Math.min(corner.x(), opposite.x()), Math.max(corner.x(), opposite.x()),
+                Math.min(corner.y(), opposite.y()), Math.max(corner.y(), opposite.y()), Math.min(corner.z(), opposite.z()),
+                Math.max(corner.z(), opposite.z()));
+        return new Enclosure(box, "closed earthed box from " + stated(corner) + " to " + stated(opposite));
+    }
+
     /** An earthed sphere for {@code .outside(…)}, or an earthed spherical shell for {@code .inside(…)}. */
-    public static GroundedSphere groundedSphere(Place centre, Object radius) {
-        double value = size("groundedSphere, radius", radius).si();
-        return new GroundedSphere(centre, value, "earthed sphere of radius " + stated(radius, value) + " about (" + centre.x() + ", "
-                + centre.y() + ", " + centre.z() + ") m");
+    public static ConductingSphere groundedSphere(Place centre, Object radius) {
+        double a = size("groundedSphere, radius", radius).si();
+        return new ConductingSphere(new Surroundings.GroundedSphere(centre.x(), centre.y(), centre.z(), a, true),
+                new Surroundings.GroundedSphere(centre.x(), centre.y(), centre.z(), a, false),
+                "earthed sphere of radius " + stated(radius, a) + " about " + stated(centre));
+    }
+
+    /** An insulated conducting sphere without charge of its own. */
+    public static ConductingSphere floatingSphere(Place centre, Object radius) {
+        return floatingSphere(centre, radius, 0);
+    }
+
+    /** An insulated conducting sphere with a net charge, C. */
+    public static ConductingSphere floatingSphere(Place centre, Object radius, Object netCharge) {
+        double a = size("floatingSphere, radius", radius).si();
+        double charge = Given.si("floatingSphere, net charge", netCharge, Units.CHARGE);
+        return new ConductingSphere(new Surroundings.FloatingSphere(centre.x(), centre.y(), centre.z(), a, true, charge),
+                new Surroundings.FloatingSphere(centre.x(), centre.y(), centre.z(), a, false, charge),
+                "insulated conducting sphere of radius " + stated(radius, a) + " about " + stated(centre) + ", "
+                        + (charge == 0 ? "uncharged" : "net charge " + Amount.si(charge, 0, Units.CHARGE)));
+    }
+
+    /** A conducting sphere held at a potential against infinity, V. */
+    public static ConductingSphere sphereHeldAt(Object potential, Place centre, Object radius) {
+        double v = Given.si("sphereHeldAt, potential", potential, Units.POTENTIAL);
+        double a = size("sphereHeldAt, radius", radius).si();
+        return new ConductingSphere(new Surroundings.HeldSphere(centre.x(), centre.y(), centre.z(), a, true, v),
+                new Surroundings.HeldSphere(centre.x(), centre.y(), centre.z(), a, false, v),
+                "conducting sphere of radius " + stated(radius, a) + " about " + stated(centre) + " held at " + Amount.si(v, 0, Units.POTENTIAL));
+    }
+
+    private static String stated(Place place) {
+        return "(" + place.x() + ", " + place.y() + ", " + place.z() + ") m";
     }
 
     /** As the author wrote it; a name or formula with its number behind it. */

@@ -251,6 +251,32 @@ class WordsTest {
         near(2e-9 / (4 * Math.PI * EPS0 * 2.3 * 5), desk.work(() -> pointCharge(at(0, 0, 0), "2 nC").inMedium(2.3).potential(at(0, 0, "5 m"))));
     }
 
+    private String said() {
+        return desk.shown(Output.Assumption.class).toString();
+    }
+
+    @Test
+    void surroundingsAreSaidInWordsAndPrinted() {
+        Distribution corner = desk.work(() -> pointCharge(at("1 m", 0, "2 m"), "2 nC").inCorner(groundPlane("z", 0), "+z", groundPlane("x", 0), "+x"));
+        near(2e-9 / (4 * Math.PI * EPS0) * (1 - 1 / 3.0 - 1 / Math.sqrt(5) + 1 / Math.sqrt(13)),
+                desk.work(() -> corner.potential(at("1 m", 0, "1 m"))));
+        Distribution pair = desk.work(() -> pointCharge(at(0, 0, "H/2"), "2 nC").between(groundPlanes("z", "0", "H")));
+        assertEquals(0, desk.work(() -> pair.potential(at(0, 0, "H"))).si());
+        assertTrue(said().contains("ground planes z = 0 and z = H (4 m)"), said());
+        Distribution box = desk.work(() -> pointCharge(at("1 m", "1 m", "1 m"), "2 nC").inside(groundedBox(at(0, 0, 0), at("2 m", "2 m", "H"))));
+        assertEquals(0, desk.work(() -> box.potential(at("2 m", "1 m", "1 m"))).si());
+        Distribution alone = desk.work(() -> noCharge().outside(floatingSphere(at(0, 0, 0), "0.5 m", "3 nC")));
+        near(3e-9 / (4 * Math.PI * EPS0 * 2), desk.work(() -> alone.potential(at("2 m", 0, 0))));
+        near(50, desk.work(() -> noCharge().outside(sphereHeldAt("100 V", at(0, 0, 0), "0.5 m")).potential(at("1 m", 0, 0))));
+        near(3 * 2000, desk.work(() -> noCharge().outside(groundedSphere(at(0, 0, 0), "0.5 m")).inUniformField(0, 0, "2 kV/m")
+                .electricField(at(0, 0, "0.5 m")).onSide("+z").z()));
+        assertTrue(said().contains("uniform field (0, 0, 2 kV/m) applied"), said());
+        assertTrue(complaint(() -> noCharge().inUniformField(0, 0, "2 kV/m")).contains("surroundings"));
+        assertTrue(complaint(() -> noCharge().inFreeSpace().inUniformField(0, 0, "2 kV/m").potential(at(0, 0, 0))).contains("zeroAt"));
+        assertTrue(complaint(() -> noCharge().inCorner(groundPlane("z", 0), "+x", groundPlane("x", 0), "+x")).contains("\"+z\""));
+        assertTrue(complaint(() -> pointCharge(at(0, 0, "5 m"), "2 nC").between(groundPlanes("z", "0", "H")).potential(at(0, 0, "1 m"))).contains("planes"));
+    }
+
     @Test
     void groundPlanesMirror() {
         double q = 2e-9;
