@@ -257,7 +257,7 @@ public final class FieldSolver {
         }
         size = Math.sqrt(size);
         for (int a = 0; a < 3; a++) {
-            error[a] = r.error()[a] + placeError[a] + paver.roughness() * size + ROUNDING * Math.abs(r.value()[a]);
+            error[a] = r.error()[a] + placeError[a] + paver.rimError() + paver.roughness() * size + ROUNDING * Math.abs(r.value()[a]);
             errorSize += error[a] * error[a];
         }
         Standing standing = standing("field", r, Math.sqrt(errorSize), size, norm(r.magnitude()), paver.roughness(), scale,

@@ -25,6 +25,8 @@ final class Panel {
     final int[] collapsed = {-1, -1};
     /** bend[k][j]: how much the tangent of parameter k changes along parameter j, against its own length; of a line bend[0][0]. */
     final double[][] bend;
+    /** The parameter of a surface whose tangent turns in one half of its way and hardly in the other, or −1. */
+    int uneven = -1;
     private final Panel[][] halves;
     private final java.util.HashMap<TensorRule, NodeSet[]> nodes = new java.util.HashMap<>();
 
@@ -144,6 +146,7 @@ final class Panel {
                 collapsed[1] = i;
             }
         }
+        uneven = isUneven(facet.tangent(0), 3, 1) ? 0 : isUneven(facet.tangent(1), 1, 3) ? 1 : -1;
         for (int k = 0; k < 2; k++) {
             double[][] t = facet.tangent(k);
             double largest = 0;
@@ -160,6 +163,30 @@ final class Panel {
                 bend[k][1] = Math.max(bend[k][1], Math.sqrt(d1 / largest));
             }
         }
+    }
+
+    private static final double UNEVEN = 3e-3;
+
+    /** A needle's tip is so small a part of its box that no rule over the whole of it would see it. */
+    private static boolean isUneven(double[][] t, int along, int across) {
+        for (int j = 0; j < 3; j++) {
+            double first = turned(t, j * across, j * across + along);
+            double second = turned(t, j * across + along, j * across + 2 * along);
+            if (Math.max(first, second) > 1 && Math.min(first, second) < UNEVEN * Math.max(first, second)) {
+                return true;
+            }
+        }
+        return false;
+    }
+
+    /** Square of the difference of two tangents' directions. */
+    private static double turned(double[][] t, int i, int j) {
+        double a = Math.sqrt(square(t, i));
+        double b = Math.sqrt(square(t, j));
+        double x = t[0][i] / a - t[0][j] / b;
+        double y = t[1][i] / a - t[1][j] / b;
+        double z = t[2][i] / a - t[2][j] / b;
+        return x * x + y * y + z * z;
     }
 
     /** Of a volume bend[k][k] alone: the largest change of any tangent along k. */

@@ -28,6 +28,7 @@ final class Paver {
     private final boolean potential;
     private final Workspace space;
     private double roughness;
+    private double rimError;
 
     /** Part of the answer that is lost to the rounding of the place itself: near lines, eps·size/gap. */
     double roughness() {
@@ -36,6 +37,11 @@ final class Paver {
 
     boolean isPotential() {
         return potential;
+    }
+
+    /** Error of the field by the rounding of places, kernel units: beside a rim the field of a surface grows as 2σ ln(1/distance). */
+    double rimError() {
+        return rimError;
     }
 
     Paver(boolean potential, Workspace space) {
@@ -282,10 +288,25 @@ final class Paver {
         for (Piece piece : pieces.subList(first, pieces.size())) {
             Pieces.Base f = (Pieces.Base) piece.integrand();
             if (f != last && f.anchor != base) {
-                f.rebase(base, b);
+                f.rebase(nearestTurn(sampler, base, f.anchor), b);
             }
             last = f;
         }
+    }
+
+    /** The anchor itself or, where a full turn begins and ends, its other end when that is nearer: an angle less a whole turn loses its digits. */
+    private static Chart.Anchor nearestTurn(Sampler s, Chart.Anchor base, Chart.Anchor from) {
+        double[] u = base.u().clone();
+        boolean moved = false;
+        for (int depth : s.facet.axes) {
+            double other = 1 - u[depth];
+            boolean seam = u[depth] == 0 || u[depth] == 1;
+            if (seam && Math.abs(from.u()[depth] - other) < 0.5 && s.chart.isFullTurn(depth)) {
+                u[depth] = other;
+                moved = true;
+            }
+        }
+        return moved ? s.chart.anchor(u) : base;
     }
 
     private static void endlessCuts(Chart chart, int k, double[][] cuts, boolean[][] tail) {
@@ -544,6 +565,10 @@ final class Paver {
         double[][] bends = panel.bend;
         double bend0 = Math.max(bends[0][0], bends[1][0]);
         double bend1 = Math.max(bends[0][1], bends[1][1]);
+        if (panel.uneven >= 0 && depth < DEEPEST) {
+            split(s, panel, panel.uneven, depth);
+            return;
+        }
         if (Math.hypot(least, lift) > FAR * size && Math.max(bend0, bend1) < 2.5) {
             double distance = Math.hypot(Math.max(0.5 * least, least - size / 4), lift);
             pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length[0], bend0, 6), order(distance, length[1], bend1, 6)));
@@ -743,6 +768,7 @@ final class Paver {
             double[] a = {corners[k][0] - at[0], corners[k][1] - at[1]};
             double[] c = {corners[(k + 1) % corners.length][0] - at[0], corners[(k + 1) % corners.length][1] - at[1]};
             Pieces.Triangle triangle = new Pieces.Triangle(s, at, a, c, metric, height, pole);
+            besideRim(s, foot, triangle.toSide(), corners[k], corners[(k + 1) % corners.length]);
             if (triangle.isEmpty()) {
                 continue;
             }
@@ -752,6 +778,29 @@ final class Paver {
             add(triangle, height > 0 ? triangle.spanW() : 1, triangle.spanV(), 8, 8);
         }
         return true;
+    }
+
+    private void besideRim(Sampler s, Chart.Anchor foot, double distance, double[] corner, double[] next) {
+        double rounding = touching(s, foot) / 4;
+        if (potential || !(s instanceof Sampler.Coulomb) || !(rounding > 1e-14 * distance) || !(distance > 0) || !isRim(s, corner, next)) {
+            return;
+        }
+        double[] unit = s.mapped(1, 0, 0);
+        rimError += 2 * Math.abs(s.densityAt(foot)) * norm(unit) * rounding / distance;
+    }
+
+    /** Whether a side between two corners, in parameters, is an edge of the patch. */
+    private static boolean isRim(Sampler s, double[] corner, double[] next) {
+        if (s.patch.triangle()) {
+            return true;
+        }
+        for (int j = 0; j < 2; j++) {
+            boolean end = corner[j] == next[j] && (corner[j] == 0 || corner[j] == 1);
+            if (end && !s.chart.isFullTurn(s.facet.axes[j])) {
+                return true;
+            }
+        }
+        return false;
     }
 
     private static double dot(double[] a, double[] b) {

@@ -283,6 +283,12 @@ final class Pieces {
             return !(cross > 0) || !(distance > 0);
         }
 
+        /** From the place to the side. */
+        double toSide() {
+            double beyond = Math.max(0, Math.max(yA, -yB));
+            return Math.sqrt(scale * scale + beyond * beyond);
+        }
+
         /** Largest extent in w, and extent in v: how many pieces it takes. */
         double spanW() {
             return radius.span(Math.sqrt(distance * distance + Math.max(yA * yA, yB * yB)));

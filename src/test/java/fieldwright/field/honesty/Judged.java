@@ -30,11 +30,13 @@ record Judged(int number, int side, double[] value, double fieldError, double po
                 value[c] = b.value()[c] * COULOMB;
             }
             double field = COULOMB * (2 * a.fieldDifference(b) + 16 * Answer.EPS * b.fieldMagnitude());
-            if (p.gap() == 0) {
-                // The place lies on the charge to rounding only, and the field changes over the thickness.
-                field += 8 * Answer.EPS * p.size() / p.thickness() * COULOMB * b.fieldMagnitude();
-            }
-            double potential = COULOMB * (2 * Math.abs(a.value()[3] - b.value()[3]) + 16 * Answer.EPS * b.magnitude()[3]);
+            // On the charge the place lies to rounding only, and the field changes over the thickness; a ray through a thin body is
+            // the difference of two distances.
+            double thin = p.gap() == 0 ? 8 : p.dimension() == 3 && p.gap() < 10 * p.size() ? 4 : 0;
+            double rounding = thin * Answer.EPS * p.size() / p.thickness();
+            field += rounding * COULOMB * b.fieldMagnitude();
+            double potential = COULOMB * (2 * Math.abs(a.value()[3] - b.value()[3])
+                    + (16 * Answer.EPS + (p.dimension() == 3 ? rounding : 0)) * b.magnitude()[3]);
             both.add(new Judged(p.number(), side, value, field, potential, COULOMB * b.fieldMagnitude(), COULOMB * b.magnitude()[3],
                     p.toString().hashCode()));
         }

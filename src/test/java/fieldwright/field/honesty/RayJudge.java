@@ -10,6 +10,9 @@ import java.util.List;
  */
 final class RayJudge {
     private static final double TWO_PI = 2 * Math.PI;
+    private static final double QUARTER = Math.PI / 2;
+    /** What the double above is short of π/2. */
+    private static final double QUARTER_REST = 6.123233995736766e-17;
 
     private final RayBody body;
     private final SmoothDensity density;
@@ -22,6 +25,8 @@ final class RayJudge {
     private final double[] polars = new double[64];
     private final double[] inner = new double[4];
     private final double[] innerMagnitude = new double[4];
+    private double low;
+    private double high;
     private double cosA;
     private double sinA;
     private final double[] direction = new double[3];
@@ -89,19 +94,23 @@ final class RayJudge {
         sinA = Math.sin(angle);
         int n = body.polars(cosA, sinA, polars);
         polars[n++] = 0;
+        polars[n++] = QUARTER;
         polars[n++] = Math.PI;
         Arrays.sort(polars, 0, n);
         Arrays.fill(inner, 0);
         Arrays.fill(innerMagnitude, 0);
         for (int k = 0; k + 1 < n; k++) {
+            low = polars[k];
+            high = polars[k + 1];
             polar.add(this::ray, polars[k], polars[k + 1], inner, innerMagnitude);
         }
         System.arraycopy(inner, 0, out, 0, 4);
     }
 
     private void ray(double theta, double fromA, double toB, double[] out) {
-        double sinT = Math.sin(theta);
-        double cosT = Math.cos(theta);
+        // Near the equator and the poles of the directions the distances from there keep the digits that theta has lost.
+        double sinT = low == 0 ? Math.sin(fromA) : high == Math.PI ? Math.sin(toB) : Math.sin(theta);
+        double cosT = high <= QUARTER ? Math.sin(QUARTER - high + QUARTER_REST + toB) : -Math.sin(low - QUARTER - QUARTER_REST + fromA);
         int n = body.crossings(sinT, cosT, cosA, sinA, crossings);
         double charge = 0;
         double moment = 0;
