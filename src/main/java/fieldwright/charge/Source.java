@@ -1,7 +1,7 @@
 package fieldwright.charge;
 
 /** Something that makes a field. */
-public sealed interface Source permits Charge, PointCharge, Sources {
+public sealed interface Source permits Charge, PointCharge, PointCloud, ChargedPolyline, Sources {
     /** What stands around it; null when that was never stated. */
     Surroundings around();
 

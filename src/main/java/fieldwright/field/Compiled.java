@@ -9,7 +9,9 @@ import java.util.Set;
 import javax.measure.Dimension;
 
 import fieldwright.charge.Charge;
+import fieldwright.charge.ChargedPolyline;
 import fieldwright.charge.PointCharge;
+import fieldwright.charge.PointCloud;
 import fieldwright.charge.Source;
 import fieldwright.charge.Sources;
 import fieldwright.formula.BlockFunction;
@@ -38,10 +40,21 @@ final class Compiled {
     final List<Patch> patches = new ArrayList<>();
     final List<PointCharge> points = new ArrayList<>();
     final List<Charge> charges = new ArrayList<>();
+    final List<Crowd> crowds = new ArrayList<>();
+    private List<Crowd> given;
 
     static Compiled of(Source source) {
         Compiled c = new Compiled();
         c.add(source);
+        return c;
+    }
+
+    /** With these in place of the source's own crowds. */
+    static Compiled of(Source source, List<Crowd> crowds) {
+        Compiled c = new Compiled();
+        c.given = crowds;
+        c.add(source);
+        c.crowds.addAll(crowds);
         return c;
     }
 
@@ -50,6 +63,10 @@ final class Compiled {
             many.parts().forEach(this::add);
         } else if (source instanceof PointCharge point) {
             points.add(point);
+        } else if (source instanceof PointCloud cloud && given == null) {
+            crowds.add(Crowd.of(cloud));
+        } else if (source instanceof ChargedPolyline line && given == null) {
+            crowds.add(Crowd.of(line));
         } else if (source instanceof Charge charge) {
             charges.add(charge);
             add(charge.region(), charge.density(), charge.region().dimension(), Frame.OWN);

@@ -43,15 +43,20 @@ public final class FieldSolver {
     private boolean checked;
     private int evaluations;
 
-    private FieldSolver(Source source, Accuracy accuracy) {
+    private FieldSolver(Source source, Accuracy accuracy, Compiled compiled) {
         this.source = source;
         this.accuracy = accuracy;
-        compiled = Compiled.of(source);
+        this.compiled = compiled;
     }
 
     /** Compiles the source once for many questions. */
     public static FieldSolver of(Source source, Accuracy accuracy) {
-        return new FieldSolver(source, accuracy);
+        return new FieldSolver(source, accuracy, Compiled.of(source));
+    }
+
+    /** With the sets of very many charges as they were prepared for the places to come. */
+    static FieldSolver of(Source source, Accuracy accuracy, List<Crowd> crowds) {
+        return new FieldSolver(source, accuracy, Compiled.of(source, crowds));
     }
 
     public static Vector electricField(Source source, Place at, Accuracy accuracy) {
@@ -104,6 +109,9 @@ public final class FieldSolver {
         }
         for (PointCharge point : compiled.points) {
             sum = sum.plus(point.charge());
+        }
+        for (Crowd crowd : compiled.crowds) {
+            sum = sum.plus(crowd.total());
         }
         return sum;
     }
@@ -199,6 +207,18 @@ public final class FieldSolver {
             }
             smooth(patch, far ? view.far() : view.green(), paver, error);
         }
+        for (Crowd crowd : compiled.crowds) {
+            see(crowd, view, at, paver, error);
+        }
+    }
+
+    private void see(Crowd crowd, View view, double[] at, Paver paver, double[] error) {
+        boolean far = view.far() != null && isFar(view, at, crowd.centre(), crowd.radius());
+        for (Probe probe : far ? List.<Probe>of() : view.probes()) {
+            crowd.see(probe, paver, error);
+            evaluations += crowd.size();
+        }
+        crowd.smooth(far ? view.far() : view.green(), paver, error);
     }
 
     private static boolean isFar(View view, double[] at, double[] centre, double radius) {
@@ -533,6 +553,12 @@ public final class FieldSolver {
         }
         for (Patch patch : compiled.patches) {
             check(around, patch);
+        }
+        for (Crowd crowd : compiled.crowds) {
+            double[] wrong = crowd.behind(around);
+            if (wrong != null) {
+                throw wrongSide(around, "charge", wrong);
+            }
         }
     }
 
