@@ -449,6 +449,9 @@ final class Paver {
         if (!s.patch.kernel().isEndless() && s.steepness() > 0) {
             roughness = Math.max(roughness, (potential ? 0.1 : 1) * s.steepness() * Sampler.EPS * (norm(s.seen) + norm(foot.position())) / height);
         }
+        if (isEdge && s.patch.dimension() == 2) {
+            besideRim(s, foot, height);
+        }
         if (!isEdge && !(height > touching(s, foot))) {
             height = 0;
             double sigma = s.densityAt(foot);
@@ -783,7 +786,9 @@ final class Paver {
             double[] a = {corners[k][0] - at[0], corners[k][1] - at[1]};
             double[] c = {corners[(k + 1) % corners.length][0] - at[0], corners[(k + 1) % corners.length][1] - at[1]};
             Pieces.Triangle triangle = new Pieces.Triangle(s, at, a, c, metric, height, pole);
-            besideRim(s, foot, triangle.toSide(), corners[k], corners[(k + 1) % corners.length]);
+            if (s instanceof Sampler.Coulomb && isRim(s, corners[k], corners[(k + 1) % corners.length])) {
+                besideRim(s, foot, triangle.toSide());
+            }
             if (triangle.isEmpty()) {
                 continue;
             }
@@ -795,9 +800,9 @@ final class Paver {
         return true;
     }
 
-    private void besideRim(Sampler s, Chart.Anchor foot, double distance, double[] corner, double[] next) {
+    private void besideRim(Sampler s, Chart.Anchor foot, double distance) {
         double rounding = touching(s, foot) / 4;
-        if (potential || !(s instanceof Sampler.Coulomb) || !(rounding > 1e-14 * distance) || !(distance > 0) || !isRim(s, corner, next)) {
+        if (potential || !(rounding > 1e-14 * distance) || !(distance > 0)) {
             return;
         }
         double[] unit = s.mapped(1, 0, 0);

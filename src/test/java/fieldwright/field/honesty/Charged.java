@@ -31,8 +31,13 @@ sealed interface Charged {
         return polynomial ? 9 : 26;
     }
 
-    /** Straight along z. */
-    record Rod(double from, double to) implements Charged {
+    /** Straight along an axis (0 x, 1 y, 2 z) through a point. */
+    record Rod(int axis, double[] through, double from, double to) implements Charged {
+        /** Along z. */
+        Rod(double from, double to) {
+            this(2, new double[3], from, to);
+        }
+
         @Override
         public int dimension() {
             return 1;
@@ -52,8 +57,10 @@ sealed interface Charged {
         public Answer judge(SmoothDensity density, boolean polynomial, Exact.Position place, double[] push,
                 DoubleExponential.Setting setting) {
             double[] p = place.doubles();
-            double nearest = Math.max(from, Math.min(to, p[2]));
-            double distance = Math.sqrt(p[0] * p[0] + p[1] * p[1] + (p[2] - nearest) * (p[2] - nearest));
+            double nearest = Math.max(from, Math.min(to, p[axis]));
+            double[] foot = through.clone();
+            foot[axis] = nearest;
+            double distance = Charged.distance(foot, p);
             LineJudge.Curve curve = new LineJudge.Curve() {
                 @Override
                 public double speed(double q) {
@@ -62,17 +69,38 @@ sealed interface Charged {
 
                 @Override
                 public BigDecimal[] exact(double q) {
-                    return new BigDecimal[] {BigDecimal.ZERO, BigDecimal.ZERO, Exact.of(q)};
+                    BigDecimal[] e = {Exact.of(through[0]), Exact.of(through[1]), Exact.of(through[2])};
+                    e[axis] = Exact.of(q);
+                    return e;
                 }
 
                 @Override
                 public void step(double q, double dq, double[] out) {
                     out[0] = 0;
                     out[1] = 0;
-                    out[2] = dq;
+                    out[2] = 0;
+                    out[axis] = dq;
                 }
             };
             return LineJudge.judge(curve, density, new double[] {from - nearest, to - nearest}, place, nearest, distance, setting);
+        }
+    }
+
+    /** Several of one dimension, charged alike. */
+    record Several(List<Charged> parts, double size, double thickness) implements Charged {
+        @Override
+        public int dimension() {
+            return parts.get(0).dimension();
+        }
+
+        @Override
+        public Answer judge(SmoothDensity density, boolean polynomial, Exact.Position place, double[] push,
+                DoubleExponential.Setting setting) {
+            Answer sum = Answer.zero();
+            for (Charged part : parts) {
+                sum = sum.plus(part.judge(density, polynomial, place, push, setting));
+            }
+            return sum;
         }
     }
 
@@ -549,6 +577,68 @@ sealed interface Charged {
         }
     }
 
+    /** Surface of a torus about z: radius of the centre line, radius of the tube. */
+    record Torus(double major, double minor) implements Charged {
+        @Override
+        public int dimension() {
+            return 2;
+        }
+
+        @Override
+        public double size() {
+            return 2 * (major + minor);
+        }
+
+        @Override
+        public double thickness() {
+            return minor;
+        }
+
+        @Override
+        public Answer judge(SmoothDensity density, boolean polynomial, Exact.Position place, double[] push,
+                DoubleExponential.Setting setting) {
+            double[] p = place.doubles();
+            double nearest = Math.atan2(p[2], Math.sqrt(p[0] * p[0] + p[1] * p[1]) - major);
+            RevolutionJudge.Profile profile = new RevolutionJudge.Profile() {
+                @Override
+                public double from() {
+                    return nearest - Math.PI;
+                }
+
+                @Override
+                public double to() {
+                    return nearest + Math.PI;
+                }
+
+                @Override
+                public double speed(double q) {
+                    return minor;
+                }
+
+                @Override
+                public BigDecimal exactRho(double q) {
+                    return Exact.of(major).add(Exact.of(minor).multiply(Exact.cos(Exact.of(q))));
+                }
+
+                @Override
+                public BigDecimal exactZ(double q) {
+                    return Exact.of(minor).multiply(Exact.sin(Exact.of(q)));
+                }
+
+                @Override
+                public double rhoStep(double q, double dq) {
+                    return -2 * minor * Math.sin(q + dq / 2) * Math.sin(dq / 2);
+                }
+
+                @Override
+                public double zStep(double q, double dq) {
+                    return 2 * minor * Math.cos(q + dq / 2) * Math.sin(dq / 2);
+                }
+            };
+            return onProfile(profile, null, density, place, push, nearest, size(), setting);
+        }
+    }
+
     private static Answer onProfile(RevolutionJudge.Profile profile, double[] arc, SmoothDensity density, Exact.Position place,
             double[] push, double nearest, double size, DoubleExponential.Setting setting) {
         BigDecimal rho0 = Exact.hypot(place.x(), place.y());
@@ -677,6 +767,16 @@ sealed interface Charged {
                 }
             }
             return new Round(faces, rims, !upper, 2 * outer, outer - inner);
+        }
+
+        /** Part of a ball about the origin between two heights. */
+        static Round slice(double radius, double z1, double z2) {
+            List<RayBody.Rim> rims = new ArrayList<>();
+            for (double z : new double[] {z1, z2}) {
+                rims.add(new RayBody.Rim(Math.sqrt((radius - z) * (radius + z)), z));
+            }
+            return new Round(List.of(RayBody.Quadric.sphere(radius, false), RayBody.Quadric.above(z1), RayBody.Quadric.below(z2)), rims, false,
+                    2 * radius, z2 - z1);
         }
 
         /** Solid cone, apex at the origin, from z1 to z2, slope = radius over height. */

@@ -83,7 +83,7 @@ record Problem(int number, String kind, Where where, RegionSpec spec, String den
         if (dice < 95) {
             return shape.rim() != null ? Where.RIM : Where.MID;
         }
-        return shape.charged() instanceof Charged.Rod ? Where.FAR : Where.AXIS;
+        return shape.charged() instanceof Charged.Rod || shape.charged() instanceof Charged.Several ? Where.FAR : Where.AXIS;
     }
 
     private static final class Drawn {

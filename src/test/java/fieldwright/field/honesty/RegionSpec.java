@@ -4,17 +4,19 @@ import fieldwright.charge.Charge;
 import fieldwright.charge.Surroundings;
 import fieldwright.formula.Formula;
 import fieldwright.formula.Scope;
+import fieldwright.geometry.Bodies;
 import fieldwright.geometry.CoordinateRegion;
 import fieldwright.geometry.CoordinateSystem;
 import fieldwright.geometry.ParametricRegion;
 import fieldwright.geometry.Region;
+import fieldwright.quantity.Place;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Locale;
 import java.util.Set;
 
-/** A region as an author would type it: a system with limits, or three formulas with one parameter. */
+/** A region as an author would type it: a system with limits, three formulas with parameters, or corners of a polyline or polygon. */
 record RegionSpec(String system, List<String[]> entries) {
     /** Coordinates between limits {name, from, to} or held fixed {name, at}. */
     static RegionSpec of(String system, String[]... entries) {
@@ -42,7 +44,28 @@ record RegionSpec(String system, List<String[]> entries) {
         return Formula.parse(text).bind(Scope.EMPTY);
     }
 
+    /** Corners in order, m; each of three numbers. */
+    static RegionSpec corners(String system, double[]... corners) {
+        List<String[]> all = new ArrayList<>();
+        for (double[] c : corners) {
+            all.add(new String[] {"at", c[0] + " m", c[1] + " m", c[2] + " m"});
+        }
+        return new RegionSpec(system, all);
+    }
+
+    private Place corner(String[] e) {
+        double[] c = new double[3];
+        for (int i = 0; i < 3; i++) {
+            c[i] = Double.parseDouble(e[i + 1].replace(" m", ""));
+        }
+        return new Place(c[0], c[1], c[2]);
+    }
+
     Region region() {
+        if (system.equals("polyline") || system.equals("polygon")) {
+            List<Place> corners = entries.stream().map(this::corner).toList();
+            return system.equals("polyline") ? Bodies.polyline(corners) : Bodies.polygon(corners);
+        }
         if (system.equals("parametric")) {
             Set<String> free = new HashSet<>();
             entries.subList(3, entries.size()).forEach(e -> free.add(e[0]));
@@ -79,7 +102,7 @@ record RegionSpec(String system, List<String[]> entries) {
     public String toString() {
         List<String> parts = new ArrayList<>();
         for (String[] e : entries) {
-            parts.add(e.length == 2 ? "." + e[0] + "(\"" + e[1] + "\")" : "." + e[0] + "(\"" + e[1] + "\", \"" + e[2] + "\")");
+            parts.add(e.length == 4 ? ".at(\"" + e[1] + "\", \"" + e[2] + "\", \"" + e[3] + "\")" : e.length == 2 ? "." + e[0] + "(\"" + e[1] + "\")" : "." + e[0] + "(\"" + e[1] + "\", \"" + e[2] + "\")");
         }
         return system + "()" + String.join("", parts);
     }

@@ -28,7 +28,7 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
         boolean flat = random.nextBoolean();
         double a = flat ? size : size * ratio;
         double b = flat ? size * ratio : size;
-        return switch (random.nextInt(22)) {
+        return switch (random.nextInt(25)) {
             case 0, 1 -> rod(size, random);
             case 2 -> arc(size, random, true);
             case 3 -> arc(size, random, false);
@@ -48,6 +48,9 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
             case 18 -> ball(size, random);
             case 19 -> shell(size * (1 - ratio * 0.9), size, random.nextBoolean(), random);
             case 20 -> cone(a, b, random);
+            case 21 -> polyline(a, b, random);
+            case 22 -> polygon(a, b, random);
+            case 23 -> torus(size, 0.9 * size * ratio, random);
             default -> heap(a, b, random);
         };
     }
@@ -116,7 +119,57 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
                 }, r -> new double[][] {whole.at(to), about(1, to, 0)}, null);
     }
 
+    /** Up z, then along x. */
+    private static Shape polyline(double a, double b, Random random) {
+        double low = uniform(random, -1, 0) * b;
+        double top = low + b;
+        Charged.Rod up = new Charged.Rod(low, top);
+        Charged.Rod along = new Charged.Rod(0, new double[] {0, 0, top}, 0, a);
+        return new Shape("polyline", RegionSpec.corners("polyline", new double[] {0, 0, low}, new double[] {0, 0, top}, new double[] {a, 0, top}),
+                new Charged.Several(List.of(up, along), Math.max(a, b), Math.min(a, b)), new double[] {a, a, b}, null,
+                r -> {
+                    if (r.nextBoolean()) {
+                        return new double[][] {{0, 0, uniform(r, low, top)}, about(1, uniform(r, 0.5, 1.5) * Math.PI, 0)};
+                    }
+                    double[] n = about(1, uniform(r, 0, 1) * Math.PI, 0);
+                    return new double[][] {{uniform(r, 0, a), 0, top}, {0, n[0], n[1]}};
+                }, r -> r.nextBoolean() ? new double[][] {{0, 0, top}, {-0.6, 0, 0.8}} : new double[][] {{a, 0, top}, {0.8, 0.6, 0}}, null);
+    }
+
     // ---- surfaces
+
+    /** An angle of two rectangles that meet in a corner turned inwards. */
+    private static Shape polygon(double a, double b, Random random) {
+        double x = uniform(random, 0.2, 0.8) * a;
+        double y = uniform(random, 0.2, 0.8) * b;
+        return new Shape("polygon", RegionSpec.corners("polygon", new double[] {0, 0, 0}, new double[] {a, 0, 0}, new double[] {a, y, 0},
+                new double[] {x, y, 0}, new double[] {x, b, 0}, new double[] {0, b, 0}),
+                new Charged.Several(List.of(new Charged.Rectangle(0, a, 0, y), new Charged.Rectangle(0, x, y, b)), Math.max(a, b),
+                        Math.min(Math.min(x, a - x), Math.min(y, b - y))), new double[] {a, b, a}, null,
+                r -> {
+                    double[] p = r.nextBoolean() ? new double[] {uniform(r, 0, a), uniform(r, 0, y), 0} : new double[] {uniform(r, 0, x), uniform(r, y, b), 0};
+                    return new double[][] {p, {0, 0, r.nextBoolean() ? 1 : -1}};
+                },
+                r -> switch (r.nextInt(3)) {
+                    case 0 -> new double[][] {{x, y, 0}, {0.48, 0.36, 0.8}};
+                    case 1 -> new double[][] {{a, 0, 0}, {0.6, 0, 0.8}};
+                    default -> new double[][] {{x, uniform(r, y, b), 0}, {0.8, 0, 0.6}};
+                }, null);
+    }
+
+    private static Shape torus(double major, double minor, Random random) {
+        String distance = "(" + m(major) + "+" + m(minor) + "*cos(beta))";
+        return new Shape("torus surface", RegionSpec.of("parametric", fixed("x", distance + "*cos(alpha)"), fixed("y", distance + "*sin(alpha)"),
+                fixed("z", m(minor) + "*sin(beta)"), between("alpha", "0", TURN), between("beta", "0", TURN)), new Charged.Torus(major, minor),
+                new double[] {major, major, minor}, null,
+                r -> {
+                    double p = angle(r);
+                    double q = angle(r);
+                    int s = r.nextBoolean() ? 1 : -1;
+                    double[] n = about(s * Math.cos(q), p, s * Math.sin(q));
+                    return new double[][] {about(major + minor * Math.cos(q), p, minor * Math.sin(q)), n};
+                }, null, null);
+    }
 
     private static Shape rectangle(double a, double b, Random random) {
         double x1 = uniform(random, -1, 0) * a;
@@ -328,6 +381,10 @@ record Shape(String kind, RegionSpec spec, Charged charged, double[] lengths, Cu
                 : RegionSpec.of("spherical", between("r", "0 m", m(radius)), between("theta", "0", "pi"), between("phi", "0", TURN));
         Cut cut = cartesian ? null : new Cut("r^2", " (m^2)", c, (x, y, z) -> x * x + y * y + z * z,
                 Charged.Round.shell(0, edge, false), Charged.Round.shell(edge, radius, false));
+        if (random.nextInt(3) == 0) {
+            double plane = uniform(random, -0.6, 0.6) * radius;
+            cut = new Cut("z", " m", plane, (x, y, z) -> z, Charged.Round.slice(radius, -radius, plane), Charged.Round.slice(radius, plane, radius));
+        }
         return new Shape(cartesian ? "ball in xyz" : "ball", spec, Charged.Round.shell(0, radius, false), new double[] {radius, radius, radius},
                 cut, r -> {
                     double[] d = direction(r);
