@@ -15,9 +15,9 @@ final class ItemsLook {
                 continue;
             }
             Item.Parsed parsed = item.parsed(args.length > 0 ? Integer.parseInt(args[0]) : 0);
-            double fresh = args.length > 2 && args[2].equals("kept") ? 1 : time(parsed, false);
-            double kept = args.length > 2 && args[2].equals("new") ? 1 : time(parsed, true);
-            FieldSolver solver = FieldSolver.of(parsed.source(), Accuracy.DEFAULT);
+            double fresh = time(parsed, false);
+            double kept = time(parsed, true);
+            FieldSolver solver = FieldSolver.of(parsed.source(), Accuracy.PANELS);
             Vector v = solver.electricField(parsed.place(0, 0));
             logNew += Math.log(item.peer / fresh);
             logKept += Math.log(item.peer / kept);
@@ -31,14 +31,14 @@ final class ItemsLook {
 
     private static double time(Item.Parsed parsed, boolean kept) {
         Random random = new Random(1);
-        FieldSolver solver = FieldSolver.of(parsed.source(), Accuracy.DEFAULT);
+        FieldSolver solver = FieldSolver.of(parsed.source(), Accuracy.PANELS);
         double best = Double.POSITIVE_INFINITY;
         for (int round = 0; round < 12; round++) {
             int count = 0;
             long start = System.nanoTime();
             while (System.nanoTime() - start < 150_000_000) {
                 Place place = parsed.place(2 * random.nextDouble() - 1, 2 * random.nextDouble() - 1);
-                FieldSolver s = kept ? solver : FieldSolver.of(parsed.source(), Accuracy.DEFAULT);
+                FieldSolver s = kept ? solver : FieldSolver.of(parsed.source(), Accuracy.PANELS);
                 sink += s.electricField(place).x().si();
                 count++;
             }

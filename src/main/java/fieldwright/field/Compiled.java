@@ -37,21 +37,30 @@ import fieldwright.quantity.Units;
 final class Compiled {
     private static final int GRID = 16;
 
+    /** All charge that is spread, and the same body by body. */
     final List<Patch> patches = new ArrayList<>();
+    final List<SpreadBody> bodies = new ArrayList<>();
     final List<PointCharge> points = new ArrayList<>();
     final List<Charge> charges = new ArrayList<>();
     final List<Crowd> crowds = new ArrayList<>();
     private List<Crowd> given;
 
-    static Compiled of(Source source) {
-        Compiled c = new Compiled();
+    private final ClosedForms closedForms;
+
+    private Compiled(ClosedForms closedForms) {
+        this.closedForms = closedForms;
+    }
+
+    /** Errors: AuthorException where closed forms alone are asked for and there are none. */
+    static Compiled of(Source source, ClosedForms closedForms) {
+        Compiled c = new Compiled(closedForms);
         c.add(source);
         return c;
     }
 
     /** With these in place of the source's own crowds. */
-    static Compiled of(Source source, List<Crowd> crowds) {
-        Compiled c = new Compiled();
+    static Compiled of(Source source, ClosedForms closedForms, List<Crowd> crowds) {
+        Compiled c = new Compiled(closedForms);
         c.given = crowds;
         c.add(source);
         c.crowds.addAll(crowds);
@@ -76,8 +85,30 @@ final class Compiled {
     private void add(Region region, Formula density, int dimension, Frame frame) {
         if (region instanceof PlacedRegion placed) {
             add(placed.inner(), density, dimension, placed.frame().then(frame));
-        } else if (region instanceof RegionParts parts) {
+        } else if (region instanceof RegionParts parts && !ClosedShapes.isPolygon(parts)) {
             parts.parts().forEach(p -> add(p, density, dimension, frame));
+        } else {
+            int first = patches.size();
+            pave(region, density, dimension, frame);
+            List<Patch> own = List.copyOf(patches.subList(first, patches.size()));
+            ClosedShapes.Found found = closedForms == ClosedForms.OFF ? ClosedShapes.Found.none("") : closedForms(region, own, frame);
+            if (closedForms == ClosedForms.ONLY && found.forms().isEmpty()) {
+                throw new AuthorException("closedForms(\"only\"): a charge of density " + density.text() + " has no closed form here: "
+                    + found.whyNot() + ". Leave the word out, or write closedForms(\"auto\").");
+            }
+            bodies.add(new SpreadBody(found.forms(), first, own));
+        }
+    }
+
+    private static ClosedShapes.Found closedForms(Region region, List<Patch> patches, Frame frame) {
+        Formula density = patches.get(0).density();
+        return patches.stream().allMatch(p -> p.density().equals(density)) ? ClosedShapes.of(region, density, frame)
+            : ClosedShapes.Found.none("its density has a bend or a jump");
+    }
+
+    private void pave(Region region, Formula density, int dimension, Frame frame) {
+        if (region instanceof RegionParts parts) {
+            parts.parts().forEach(p -> pave(p, density, dimension, frame));
         } else {
             Kernel kernel = Kernel.POINT;
             Region reduced = region;
@@ -311,6 +342,17 @@ final class Compiled {
             balls[i] = Ball.of(patches.get(i), space);
         }
         return balls[i];
+    }
+
+    /** Whether the balls about all parts of a body are far in this sense; never for endless ones. */
+    boolean isFar(SpreadBody body, Workspace space, java.util.function.Predicate<Ball> isFar) {
+        for (int i = 0; i < body.patches().size(); i++) {
+            Patch patch = body.patches().get(i);
+            if (patch.kernel().isEndless() || patch.chart().isEndless() || !isFar.test(ball(body.first() + i, space))) {
+                return false;
+            }
+        }
+        return true;
     }
 
     boolean hasEndlessKernel() {

@@ -39,6 +39,11 @@ final class Contact {
         }
     }
 
+    /** Whether anything was touched so far. */
+    boolean isTouched() {
+        return normal != null || unbounded != null;
+    }
+
     /** Why the field has no bound here, or null. */
     String unboundedReason() {
         if (unbounded != null) {

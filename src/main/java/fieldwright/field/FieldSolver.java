@@ -36,11 +36,15 @@ public final class FieldSolver {
     /** Relative rounding of long chains of maps, measured on places 1e2 sizes away: 1.5e-14. */
     private static final double ROUNDING = 120 * Sampler.EPS;
 
+    private static final Standing LOST_DIGITS = Standing.notConverged("closed forms alone: one of them lost more digits at this place than the accuracy"
+        + " allows. Write closedForms(\"auto\"), so that panels help out");
+
     private final Source source;
     private final Accuracy accuracy;
     private final Compiled compiled;
     private final Workspace space = new Workspace();
     private boolean checked;
+    private boolean lostDigits;
     private int evaluations;
 
     private FieldSolver(Source source, Accuracy accuracy, Compiled compiled) {
@@ -51,12 +55,12 @@ public final class FieldSolver {
 
     /** Compiles the source once for many questions. */
     public static FieldSolver of(Source source, Accuracy accuracy) {
-        return new FieldSolver(source, accuracy, Compiled.of(source));
+        return new FieldSolver(source, accuracy, Compiled.of(source, accuracy.closedForms()));
     }
 
     /** With the sets of very many charges as they were prepared for the places to come. */
     static FieldSolver of(Source source, Accuracy accuracy, List<Crowd> crowds) {
-        return new FieldSolver(source, accuracy, Compiled.of(source, crowds));
+        return new FieldSolver(source, accuracy, Compiled.of(source, accuracy.closedForms(), crowds));
     }
 
     public static Vector electricField(Source source, Place at, Accuracy accuracy) {
@@ -198,15 +202,17 @@ public final class FieldSolver {
             }
             smooth(point, far ? view.far() : view.green(), paver, error);
         }
-        for (int i = 0; i < compiled.patches.size(); i++) {
-            Patch patch = compiled.patches.get(i);
-            boolean far = view.far() != null && !patch.kernel().isEndless() && !patch.chart().isEndless()
-                && isFar(view, at, compiled.ball(i, space).centre(), compiled.ball(i, space).radius());
+        ClosedSum closed = new ClosedSum(paver, accuracy, error);
+        for (SpreadBody body : compiled.bodies) {
+            boolean far = view.far() != null && compiled.isFar(body, space, ball -> isFar(view, at, ball.centre(), ball.radius()));
             for (Probe probe : far ? List.<Probe>of() : view.probes()) {
-                paver.pave(patch, probe);
+                closed.see(body, probe);
             }
-            smooth(patch, far ? view.far() : view.green(), paver, error);
+            body.patches().forEach(patch -> smooth(patch, far ? view.far() : view.green(), paver, error));
         }
+        closed.finish();
+        evaluations += closed.evaluations();
+        lostDigits = closed.hasLostDigits();
         for (Crowd crowd : compiled.crowds) {
             see(crowd, view, at, paver, error);
         }
@@ -508,7 +514,7 @@ public final class FieldSolver {
     private Cubature.Result integrate(Paver paver, int components, boolean grouped, double scale) {
         double relative = Math.max(0.5 * accuracy.relative(), 0.5 * paver.roughness());
         Cubature.Goal goal = new Cubature.Goal(relative, 1e-3, accuracy.absoluteFloor() / Math.abs(scale), accuracy.maxEvaluations());
-        Cubature.Result r = Cubature.integrate(paver.pieces, components, grouped, goal, paver.start, space.cubature);
+        Cubature.Result r = Cubature.integrate(paver.pieces, components, grouped, goal, paver.start);
         evaluations += r.evaluations();
         return r;
     }
@@ -517,6 +523,9 @@ public final class FieldSolver {
         String unit) {
         if (r.status() == Estimate.Status.NOT_A_NUMBER) {
             return Standing.notConverged(what + ": a number came out that is none; the integral has no finite value here, or the density is infinite near by");
+        }
+        if (lostDigits) {
+            return LOST_DIGITS;
         }
         double relative = Math.max(accuracy.relative(), 4 * roughness);
         double allowed = Math.max(accuracy.absoluteFloor() / Math.abs(scale), relative * Math.max(size, 1e-3 * magnitude));

@@ -57,7 +57,7 @@ public final class ManyPlaces {
     }
 
     private List<Crowd> crowds(List<Place> places, Place zero, boolean potential) {
-        List<Crowd> crowds = Compiled.of(source).crowds;
+        List<Crowd> crowds = Compiled.of(source, accuracy.closedForms()).crowds;
         if (crowds.isEmpty() || places.size() < FEW) {
             return crowds;
         }

@@ -47,7 +47,7 @@ class FieldSolverTest {
     }
 
     private static Vector e(Source s, double x, double y, double z) {
-        return FieldSolver.electricField(s, new Place(x, y, z), Accuracy.DEFAULT);
+        return FieldSolver.electricField(s, new Place(x, y, z), Accuracy.PANELS);
     }
 
     private static void near(double expected, Amount found, double relative) {
@@ -76,7 +76,7 @@ class FieldSolverTest {
     void onALineTheFieldIsUnbounded() {
         Vector v = e(free(Bodies.ring(m(1)), "1e-9"), 0, 1, 0);
         assertEquals(Standing.Kind.UNBOUNDED, v.standing().kind());
-        Amount potential = FieldSolver.potential(free(Bodies.ring(m(1)), "1e-9"), new Place(1, 0, 0), Accuracy.DEFAULT);
+        Amount potential = FieldSolver.potential(free(Bodies.ring(m(1)), "1e-9"), new Place(1, 0, 0), Accuracy.PANELS);
         assertEquals(Standing.Kind.UNBOUNDED, potential.standing().kind());
     }
 
@@ -176,11 +176,11 @@ class FieldSolverTest {
     void endlessLine() {
         Source s = free(cartesian().fixed("x", m(0)).fixed("y", m(0)).limits("z", MINUS_INF, INF), "2e-9");
         near(2e-9 / (2 * Math.PI * EPS0 * 0.5), e(s, 0.3, 0.4, 7).rho(), 1e-12);
-        AuthorException x = assertThrows(AuthorException.class, () -> FieldSolver.potential(s, new Place(1, 0, 0), Accuracy.DEFAULT));
+        AuthorException x = assertThrows(AuthorException.class, () -> FieldSolver.potential(s, new Place(1, 0, 0), Accuracy.PANELS));
         assertTrue(x.getMessage().contains("zeroAt"), x.getMessage());
-        Amount v = FieldSolver.of(s, Accuracy.DEFAULT).potential(new Place(0.5, 0, 0), new Place(0, 2, 1));
+        Amount v = FieldSolver.of(s, Accuracy.PANELS).potential(new Place(0.5, 0, 0), new Place(0, 2, 1));
         near(2e-9 / (2 * Math.PI * EPS0) * Math.log(4), v, 1e-12);
-        assertThrows(AuthorException.class, () -> FieldSolver.totalCharge(s, Accuracy.DEFAULT));
+        assertThrows(AuthorException.class, () -> FieldSolver.totalCharge(s, Accuracy.PANELS));
     }
 
     @Test
@@ -190,7 +190,7 @@ class FieldSolverTest {
         near(-1e-9 / (2 * EPS0), e(s, 5, 5, 0.5).z(), 1e-12);
         Vector on = e(s, 5, 5, 1);
         near(1e-9 / (2 * EPS0), on.onSide("+z").z(), 1e-12);
-        Vector d = FieldSolver.fluxDensity(s, new Place(0, 0, 9), Accuracy.DEFAULT);
+        Vector d = FieldSolver.fluxDensity(s, new Place(0, 0, 9), Accuracy.PANELS);
         near(0.5e-9, d.z(), 1e-12);
     }
 
@@ -221,8 +221,8 @@ class FieldSolverTest {
         near(-2e-9 / (4 * Math.PI * EPS0 * 4), face.onSide("+z").z(), 1e-12);
         assertEquals(0, face.onSide("-z").magnitude().si());
         assertEquals(0, e(s, 0.3, 0, -1).magnitude().si());
-        assertEquals(0, FieldSolver.potential(s, new Place(1, 1, 0), Accuracy.DEFAULT).si());
-        near(1e-9 / (4 * Math.PI * EPS0) * (1 - 1.0 / 3), FieldSolver.potential(s, new Place(0, 0, 1), Accuracy.DEFAULT), 1e-12);
+        assertEquals(0, FieldSolver.potential(s, new Place(1, 1, 0), Accuracy.PANELS).si());
+        near(1e-9 / (4 * Math.PI * EPS0) * (1 - 1.0 / 3), FieldSolver.potential(s, new Place(0, 0, 1), Accuracy.PANELS), 1e-12);
     }
 
     @Test
@@ -248,7 +248,7 @@ class FieldSolverTest {
     @Test
     void dielectricFaceKeepsTheNormalFluxDensity() {
         Source s = new PointCharge(new Place(0, 0, 1), Amount.of(1, "nC"), new Surroundings.DielectricHalfSpace("z", 0, 1, 1, 4));
-        Vector d = FieldSolver.fluxDensity(s, new Place(0.3, 0, 0), Accuracy.DEFAULT);
+        Vector d = FieldSolver.fluxDensity(s, new Place(0.3, 0, 0), Accuracy.PANELS);
         near(d.onSide("-z").z().si(), d.onSide("+z").z(), 1e-12);
         Vector e = e(s, 0.3, 0, 0);
         near(e.onSide("-z").x().si(), e.onSide("+z").x(), 1e-12);

@@ -22,7 +22,7 @@ final class HonestyLook {
             RandomProblems.Problem p = problems.next();
             String kind = p.text().replaceAll(" [A-Z].*", "");
             double[] s = perKind.computeIfAbsent(kind, x -> new double[8]);
-            FieldSolver solver = FieldSolver.of(p.source(), Accuracy.DEFAULT);
+            FieldSolver solver = FieldSolver.of(p.source(), Accuracy.PANELS);
             s[0]++;
             try {
                 long t = System.nanoTime();

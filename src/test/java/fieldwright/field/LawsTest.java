@@ -47,7 +47,7 @@ class LawsTest {
     }
 
     private static Vector e(Source s, double x, double y, double z) {
-        Vector v = FieldSolver.electricField(s, new Place(x, y, z), Accuracy.DEFAULT);
+        Vector v = FieldSolver.electricField(s, new Place(x, y, z), Accuracy.PANELS);
         return v.isSided() ? v.mean() : v;
     }
 
@@ -55,7 +55,7 @@ class LawsTest {
     @Test
     void gauss() {
         for (Source s : some()) {
-            FieldSolver solver = FieldSolver.of(s, Accuracy.DEFAULT);
+            FieldSolver solver = FieldSolver.of(s, Accuracy.PANELS);
             GaussLegendre theta = GaussLegendre.of(24);
             double flux = 0;
             double r = 4;
@@ -78,7 +78,7 @@ class LawsTest {
     void fieldIsMinusTheGradientOfThePotential() {
         Random random = new Random(7);
         for (Source s : some()) {
-            FieldSolver solver = FieldSolver.of(s, Accuracy.relative(1e-12));
+            FieldSolver solver = FieldSolver.of(s, Accuracy.PANELS.withRelative(1e-12));
             double x = 1.5 * random.nextDouble() - 0.4;
             double y = 1.5 * random.nextDouble() - 0.4;
             double z = 0.5 + random.nextDouble();

@@ -25,7 +25,7 @@ class ReactionTest {
     private static final Surroundings PLANE = new Surroundings.GroundPlane("z", 0.1, 1);
 
     private static FieldSolver point(double x, double y, double z, Surroundings around) {
-        return FieldSolver.of(new PointCharge(new Place(x, y, z), Amount.si(1e-9, 0, Units.CHARGE), around), Accuracy.DEFAULT);
+        return FieldSolver.of(new PointCharge(new Place(x, y, z), Amount.si(1e-9, 0, Units.CHARGE), around), Accuracy.PANELS);
     }
 
     private static void near(double expected, Amount found) {
@@ -67,16 +67,16 @@ class ReactionTest {
     @ParameterizedTest
     @MethodSource("cases")
     void ownFieldAndReactionMakeTheWhole(Case c) {
-        FieldSolver whole = FieldSolver.of(c.source, Accuracy.DEFAULT);
+        FieldSolver whole = FieldSolver.of(c.source, Accuracy.PANELS);
         Source alone = c.source.with(new Surroundings.Medium(c.source.around().permittivity()));
-        Vector own = FieldSolver.electricField(alone, c.at, Accuracy.DEFAULT);
+        Vector own = FieldSolver.electricField(alone, c.at, Accuracy.PANELS);
         Vector reaction = whole.reactionField(c.at);
         Vector e = whole.electricField(c.at);
         double size = own.magnitude().si();
         assertEquals(e.x().si(), own.x().si() + reaction.x().si(), 3e-9 * size);
         assertEquals(e.y().si(), own.y().si() + reaction.y().si(), 3e-9 * size);
         assertEquals(e.z().si(), own.z().si() + reaction.z().si(), 3e-9 * size);
-        Amount v = FieldSolver.potential(alone, c.at, Accuracy.DEFAULT);
+        Amount v = FieldSolver.potential(alone, c.at, Accuracy.PANELS);
         assertEquals(whole.potential(c.at).si(), v.si() + whole.reactionPotential(c.at).si(), 3e-9 * v.si());
     }
 
@@ -85,7 +85,7 @@ class ReactionTest {
     void withinAConductorTheReactionUndoesTheField() {
         FieldSolver solver = point(0, 0, 0.4, PLANE);
         Vector free = FieldSolver.electricField(new PointCharge(new Place(0, 0, 0.4), Amount.si(1e-9, 0, Units.CHARGE), Surroundings.FREE_SPACE),
-            new Place(0.2, 0, 0.1), Accuracy.DEFAULT);
+            new Place(0.2, 0, 0.1), Accuracy.PANELS);
         Vector on = solver.reactionField(new Place(0.2, 0, 0.1));
         near(-free.z().si(), on.onSide("-z").z());
         near(free.z().si(), on.onSide("+z").z());

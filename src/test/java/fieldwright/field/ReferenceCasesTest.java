@@ -33,7 +33,7 @@ class ReferenceCasesTest {
     }
 
     static Amount ask(ReferenceCases.Case c) {
-        return ask(c, FieldSolver.of(c.source(), Accuracy.DEFAULT));
+        return ask(c, FieldSolver.of(c.source(), Accuracy.PANELS));
     }
 
     static Amount ask(ReferenceCases.Case c, FieldSolver solver) {
@@ -72,7 +72,7 @@ class ReferenceCasesTest {
         System.out.println("eps0 " + Constants.EPS0);
         for (ReferenceCases.Case c : cases()) {
             try {
-                FieldSolver solver = FieldSolver.of(c.source(), Accuracy.DEFAULT);
+                FieldSolver solver = FieldSolver.of(c.source(), Accuracy.PANELS);
                 Amount a = null;
                 long best = Long.MAX_VALUE;
                 int runs = args.length > 0 ? Integer.parseInt(args[0]) : 1;

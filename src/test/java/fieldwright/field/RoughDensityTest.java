@@ -82,7 +82,7 @@ class RoughDensityTest {
         Random random = new Random(SEED);
         List<String> broken = new ArrayList<>();
         WITHIN.entrySet().stream().sorted(Map.Entry.comparingByKey()).forEach(entry -> {
-            FieldSolver solver = FieldSolver.of(ball(entry.getKey()), Accuracy.DEFAULT);
+            FieldSolver solver = FieldSolver.of(ball(entry.getKey()), Accuracy.PANELS);
             for (int i = 0; i < 10; i++) {
                 Place p = place(random, i);
                 double d = Math.sqrt(p.x() * p.x() + p.y() * p.y() + p.z() * p.z());
@@ -101,9 +101,9 @@ class RoughDensityTest {
 
     @Test
     void absoluteHeightAgreesInTwoDescriptions() {
-        FieldSolver spherical = FieldSolver.of(ball("abs(z)/(1 m)"), Accuracy.DEFAULT);
+        FieldSolver spherical = FieldSolver.of(ball("abs(z)/(1 m)"), Accuracy.PANELS);
         FieldSolver cylindrical = FieldSolver.of(in(CoordinateSystem.CYLINDRICAL, "max(z, -z)/(1 m)", "z", "-1 m", "1 m", "rho", "0 m",
-            "sqrt((1 m)^2-z^2)", "phi", "0", "2*pi"), Accuracy.DEFAULT);
+            "sqrt((1 m)^2-z^2)", "phi", "0", "2*pi"), Accuracy.PANELS);
         Random random = new Random(SEED + 1);
         List<String> broken = new ArrayList<>();
         for (int i = 0; i < 24; i++) {
@@ -121,7 +121,7 @@ class RoughDensityTest {
     void rootOfDistanceFromTheAxis() {
         GaussLegendre rule = GaussLegendre.of(64);
         List<String> broken = new ArrayList<>();
-        FieldSolver solver = FieldSolver.of(cylinder("sqrt(rho/(1 m))"), Accuracy.DEFAULT);
+        FieldSolver solver = FieldSolver.of(cylinder("sqrt(rho/(1 m))"), Accuracy.PANELS);
         for (double h : new double[] {0.3, 1, 20}) {
             double sum = 0;
             for (int i = 0; i < 64; i++) {
@@ -168,7 +168,7 @@ class RoughDensityTest {
     private static void sum(String what, Place p, Source[] wholeAndParts, List<String> broken) {
         Vector[] e = new Vector[3];
         for (int k = 0; k < 3; k++) {
-            FieldSolver solver = FieldSolver.of(wholeAndParts[k], Accuracy.DEFAULT);
+            FieldSolver solver = FieldSolver.of(wholeAndParts[k], Accuracy.PANELS);
             e[k] = solver.electricField(p);
             assertTrue(e[k].standing().isConverged(), () -> what + " at " + p);
             assertTrue(solver.evaluations() < 60_000, () -> what + " at " + p + ": " + solver.evaluations() + " evaluations");

@@ -33,7 +33,7 @@ class SeamTest {
         Formula density = Formula.constant(Amount.of(4.599, "nC/m^2"));
         Charge disc = new Charge(Bodies.disc(Formula.constant(Amount.of(RADIUS, "m"))), density, new Surroundings.FreeSpace());
         Place at = new Place(FROM_AXIS * Math.cos(phi), FROM_AXIS * Math.sin(phi), HEIGHT);
-        Amount normal = FieldSolver.electricField(disc, at, Accuracy.DEFAULT).z();
+        Amount normal = FieldSolver.electricField(disc, at, Accuracy.PANELS).z();
         assertTrue(normal.isConverged());
         assertEquals(EXPECTED, normal.si(), 2e-11 * EXPECTED);
     }
@@ -54,7 +54,7 @@ class SeamTest {
         CoordinateRegion disc = CoordinateRegion.in(CoordinateSystem.CYLINDRICAL).limits("rho", Formula.parse("0 m"), Formula.parse("0.3 m"))
             .limits("phi", Formula.parse(from), Formula.parse(to)).fixed("z", Formula.parse("0 m"));
         return FieldSolver.electricField(new Charge(disc, Formula.parse("1 (nC/m^2)*(1.5+0.5*sin(4*y/(0.3 m)))"), Surroundings.FREE_SPACE), at,
-            Accuracy.relative(1e-13));
+            Accuracy.PANELS.withRelative(1e-13));
     }
 
     /** The tip of a needle is a thousandth of its length: seen from aside no rule over the whole notices it. Parts: tip and rest. */
@@ -75,6 +75,6 @@ class SeamTest {
         CoordinateRegion bowl = CoordinateRegion.in(CoordinateSystem.CYLINDRICAL).limits("rho", Formula.parse(from), Formula.parse(to))
             .limits("phi", Formula.parse("0"), Formula.parse("2*pi")).fixed("z", Formula.parse("2.8e6 (1/m)*rho^2"));
         return FieldSolver.electricField(new Charge(bowl, Formula.parse("1 (nC/m^2)*exp(0.4*x/(1.9e-4 m)-20*z/(1 m))"), Surroundings.FREE_SPACE), at,
-            Accuracy.relative(1e-11));
+            Accuracy.PANELS.withRelative(1e-11));
     }
 }

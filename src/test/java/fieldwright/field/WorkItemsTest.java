@@ -43,14 +43,14 @@ class WorkItemsTest {
     @EnumSource(value = Item.class, names = "F", mode = EnumSource.Mode.EXCLUDE)
     void item(Item item) {
         Item.Parsed parsed = item.parsed(0);
-        Vector e = FieldSolver.electricField(parsed.source(), parsed.place(0, 0), Accuracy.DEFAULT);
+        Vector e = FieldSolver.electricField(parsed.source(), parsed.place(0, 0), Accuracy.PANELS);
         check(e, REFERENCE.get(item), 1e-9);
     }
 
     /** Rows 33 and 66 of the map lie on the end faces. */
     @Test
     void map() throws Exception {
-        FieldSolver solver = FieldSolver.of(Item.F.parsed(0).source(), Accuracy.relative(1e-6));
+        FieldSolver solver = FieldSolver.of(Item.F.parsed(0).source(), Accuracy.PANELS.withRelative(1e-6));
         List<String> rows;
         try (var in = new BufferedReader(new InputStreamReader(WorkItemsTest.class.getResourceAsStream("cylinder-map.tsv"), StandardCharsets.UTF_8))) {
             rows = in.lines().filter(l -> l.matches("[0-9].*")).toList();

@@ -26,7 +26,7 @@ record Finding(Problem problem, String quantity, Outcome outcome, double excess,
         Place at = new Place(p.at()[0], p.at()[1], p.at()[2]);
         FieldSolver solver;
         try {
-            solver = FieldSolver.of(p.charge(), Accuracy.DEFAULT);
+            solver = FieldSolver.of(p.charge(), Accuracy.PANELS);
         } catch (RuntimeException e) {
             found.add(failed(p, "E", e));
             return found;

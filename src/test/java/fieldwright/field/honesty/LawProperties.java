@@ -22,7 +22,7 @@ import net.jqwik.api.constraints.IntRange;
 class LawProperties {
     private static final String SEED = "20261201";
     private static final long PROBLEMS = 4;
-    private static final Accuracy ACCURACY = Accuracy.DEFAULT;
+    private static final Accuracy ACCURACY = Accuracy.PANELS;
 
     private static Problem problem(int number, int dimension) {
         for (int k = number; ; k += 100_000) {
