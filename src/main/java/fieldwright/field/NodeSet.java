@@ -9,8 +9,8 @@ record NodeSet(double[][] offset, double[][] carried, double[] rounding, double[
         return new NodeSet(nodes.offset, new double[3][Workspace.BLOCK], nodes.rounding, nodes.relative);
     }
 
-    /** A copy of the first n nodes. */
-    NodeSet kept(int n, int vectors) {
+    /** A copy of the first n nodes; where positions are exact their rounding is nothing. */
+    NodeSet kept(int n, int vectors, boolean exact) {
         double[][] o = new double[3][];
         double[][] c = new double[vectors][];
         for (int a = 0; a < 3; a++) {
@@ -18,6 +18,9 @@ record NodeSet(double[][] offset, double[][] carried, double[] rounding, double[
         }
         for (int a = 0; a < vectors; a++) {
             c[a] = java.util.Arrays.copyOf(carried[a], n);
+        }
+        if (exact) {
+            return new NodeSet(o, c, Workspace.ZEROS, Workspace.ZEROS);
         }
         return new NodeSet(o, c, java.util.Arrays.copyOf(rounding, n), java.util.Arrays.copyOf(relative, n));
     }

@@ -104,7 +104,7 @@ final class Panel {
             }
             facet.place(anchor, space.du, n);
             facet.carry(anchor, space.jacobian, n, space.set);
-            known[m] = space.set.kept(n, facet.vectors());
+            known[m] = space.set.kept(n, facet.vectors(), facet.chart.hasExactOffsets());
         }
         nodes.put(rule, known);
         return known;

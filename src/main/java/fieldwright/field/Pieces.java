@@ -250,9 +250,9 @@ final class Pieces {
         private final double vB;
         private final Radius radius;
         private final double[][] pole;
-        private final double[] rMax = new double[Workspace.BLOCK];
-        private final double[] angle = new double[Workspace.BLOCK];
-        private final double[] along = new double[Workspace.BLOCK];
+        private final double[] rMax;
+        private final double[] angle;
+        private final double[] along;
 
         /**
          * {@code a}, {@code c}: ends of the side minus the nearest point, in parameters; {@code metric}: tangent-plane vectors of the two
@@ -277,6 +277,9 @@ final class Pieces {
             radius = new Radius(height);
             touching(height);
             this.pole = pole;
+            rMax = pole == null ? null : new double[Workspace.BLOCK];
+            angle = pole == null ? null : new double[Workspace.BLOCK];
+            along = pole == null ? null : new double[Workspace.BLOCK];
         }
 
         boolean isEmpty() {

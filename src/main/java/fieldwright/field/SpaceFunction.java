@@ -26,7 +26,7 @@ final class SpaceFunction {
         this.function = function;
         this.used = used;
         this.degree = degree;
-        scratch = new double[used.size()][256];
+        scratch = new double[used.size()][fieldwright.geometry.Nodes.BLOCK];
         double[] one = new double[1];
         if (used.isEmpty()) {
             function.evaluate(new double[0][], 1, one);

@@ -26,6 +26,31 @@ public final class Formula {
     private final Node written;
     private final String text;
     private final Integrator integrator;
+    /** What was worked out from the tree before; it never changes, so that stays true. */
+    private volatile Map<Object, Object> known;
+
+    private record Compiled(List<String> variables) { }
+
+    private record Slope(String variable) { }
+
+    private record Degree(String variable) { }
+
+    @SuppressWarnings("unchecked")
+    private <T> T once(Object question, java.util.function.Supplier<T> work) {
+        Map<Object, Object> answers = known;
+        if (answers == null) {
+            synchronized (this) {
+                answers = known == null ? new java.util.concurrent.ConcurrentHashMap<>(8) : known;
+                known = answers;
+            }
+        }
+        Object answer = answers.get(question);
+        if (answer == null) {
+            answer = work.get();
+            answers.put(question, answer);
+        }
+        return (T) answer;
+    }
 
     private Formula(Node tree, Node written, String text, Integrator integrator) {
         this.tree = Objects.requireNonNull(tree);
@@ -120,12 +145,12 @@ public final class Formula {
 
     /** Free names: before binding all names, after it coordinates and arguments. */
     public Set<String> variables() {
-        return Collections.unmodifiableSet(Trees.free(tree));
+        return once("variables", () -> Collections.unmodifiableSet(Trees.free(tree)));
     }
 
     /** True when the formula is a bare 0 or inf, which fits any unit. */
     public boolean fitsAnyUnit() {
-        return new UnitCheck(text, Coordinates.DIMENSIONS).of(tree) == null;
+        return once("fits any unit", () -> new UnitCheck(text, Coordinates.DIMENSIONS).of(tree) == null);
     }
 
     /**
@@ -149,7 +174,7 @@ public final class Formula {
 
     /** Code over blocks; arguments in the order of {@code variables}. Check units first. Integrals that do not converge give NaN. */
     public BlockFunction compile(List<String> variables) {
-        return Compiler.compile(tree, variables, text, integrator);
+        return once(new Compiled(variables), () -> Compiler.compile(tree, variables, text, integrator));
     }
 
     /** The value of a formula without free names, units checked, with its numerical error. */
@@ -183,21 +208,20 @@ public final class Formula {
 
     /** The symbolic derivative with respect to a free name, simplified. At a kink it is that of one side. */
     public Formula derivative(String variable) {
-        Node d = Simplifier.simplified(new Derivative(variable, text).of(tree));
-        return built(d, integrator);
+        return once(new Slope(variable), () -> built(Simplifier.simplified(new Derivative(variable, text).of(tree)), integrator));
     }
 
     /** The polynomial degree in a free name, an upper bound where terms cancel; empty when the formula is no polynomial in it. */
     public OptionalInt degree(String variable) {
-        int degree = new Derivative(variable, text).degree(tree);
-        return degree < 0 ? OptionalInt.empty() : OptionalInt.of(degree);
+        return once(new Degree(variable), () -> {
+            int degree = new Derivative(variable, text).degree(tree);
+            return degree < 0 ? OptionalInt.empty() : OptionalInt.of(degree);
+        });
     }
 
     /** Formulas on whose zero sets this one, or a derivative of it, jumps: from abs, sign, min, max, floor, when, … */
     public List<Formula> kinks() {
-        List<Formula> found = new ArrayList<>();
-        Kinks.of(tree).forEach(k -> found.add(built(k, integrator)));
-        return found;
+        return once("kinks", () -> Kinks.of(tree).stream().map(k -> built(k, integrator)).toList());
     }
 
     public Formula simplified() {
@@ -282,6 +306,9 @@ public final class Formula {
 
     /** Free names replaced by formulas; variables of integration inside are renamed where they would clash. */
     public Formula substitute(Map<String, Formula> values) {
+        if (Collections.disjoint(variables(), values.keySet())) {
+            return this;
+        }
         Map<String, Node> trees = new LinkedHashMap<>();
         values.forEach((name, f) -> trees.put(name, f.tree));
         Integrator any = integrator;

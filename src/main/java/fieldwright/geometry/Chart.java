@@ -194,11 +194,7 @@ public final class Chart {
     }
 
     private void chooseAlgebra() {
-        boolean numbers = !hasFixedFormula();
-        for (int k = 0; k < dimension; k++) {
-            numbers &= hasConstantLimits(k);
-        }
-        if (numbers) {
+        if (hasOnlyNumbers()) {
             return;
         }
         algebraic = Algebraic.of(nest, new Algebraic.Ends() {
@@ -426,7 +422,7 @@ public final class Chart {
 
     /** Whether some deeper limit or fixed coordinate leaves this end of depth k like a square root. */
     private boolean hasRoot(int k, boolean high) {
-        if (dimension < 2 && !hasFixedFormula()) {
+        if (hasOnlyNumbers()) {
             return false;
         }
         double e = 1e-8;
@@ -481,7 +477,19 @@ public final class Chart {
         return values;
     }
 
+    /** Whether all limits and fixed values are numbers. */
+    private boolean hasOnlyNumbers() {
+        boolean numbers = !hasFixedFormula();
+        for (int k = 0; k < dimension; k++) {
+            numbers &= hasConstantLimits(k);
+        }
+        return numbers;
+    }
+
     private void checkOrder() {
+        if (hasOnlyNumbers()) {
+            return;   // checkConstants saw them all
+        }
         double[] at = {0.013, 0.25, 0.51, 0.77, 0.99};
         int count = 1;
         for (int k = 0; k < dimension; k++) {

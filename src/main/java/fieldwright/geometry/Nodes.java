@@ -2,7 +2,7 @@ package fieldwright.geometry;
 
 /** Scratch space for one block of nodes of a {@link Chart}; filled by {@link Chart#evaluate}. Not shared between threads. */
 public final class Nodes {
-    public static final int BLOCK = 256;
+    public static final int BLOCK = 64;
 
     /** Coordinates by the chart's names: c[m][i]; delta is the difference to the anchor's, without cancellation where limits are constant. */
     public final double[][] c = new double[3][BLOCK];

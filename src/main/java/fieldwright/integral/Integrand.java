@@ -37,5 +37,5 @@ public interface Integrand {
         return true;
     }
 
-    int BLOCK = 256;
+    int BLOCK = 64;
 }
