@@ -137,6 +137,7 @@ final class Compiled {
         Formula density = stated.isGuarded() ? holdingEverywhere(stated, plain, triangle) : stated;
         Chart chart = plain.dimension() == 3 ? suited(plain, density) : plain;
         NodeFunction weight = NodeFunction.of(density, chart);
+        checkNumbers(chart, density, weight);
         SpaceFunction inSpace = chart.dimension() == 3 && kernel == Kernel.POINT ? SpaceFunction.of(density) : null;
         double[][] breaks = RegionIntegral.breaks(chart, density);
         Polynomial polynomial = kernel == Kernel.POINT && (inSpace != null || triangle || chart.isFlat()) ? polynomial(density, chart, weight, triangle) : null;
@@ -241,12 +242,34 @@ final class Compiled {
         return Math.min(1 - margin, Math.max(margin, i / (side - 1.0)));
     }
 
+    /** Errors: AuthorException for a density that is no finite number, and for sizes whose squares leave the range of numbers. */
+    private static void checkNumbers(Chart chart, Formula density, NodeFunction weight) {
+        if (weight.isConstant() && !Double.isFinite(weight.constant())) {
+            throw new AuthorException("density " + density.text() + " is " + weight.constant() + " (SI), not a finite number. Check roots, logarithms and divisions in it.");
+        }
+        double reach = 0;
+        int corners = 1 << chart.dimension();
+        for (int i = 0; i < corners; i++) {
+            double[] u = new double[chart.dimension()];
+            for (int k = 0; k < u.length; k++) {
+                u[k] = chart.isEndless(k) ? 0.5 : i >> k & 1;
+            }
+            for (double c : chart.anchor(u).position()) {
+                reach = Math.max(reach, Double.isNaN(c) ? Double.POSITIVE_INFINITY : Math.abs(c));
+            }
+        }
+        if (reach > Images.LONGEST || reach > 0 && reach < 1 / Images.LONGEST) {
+            throw new AuthorException("region of size " + reach + " m: lengths must be 0 or lie between " + 1 / Images.LONGEST + " and " + Images.LONGEST
+                + " m, or their squares leave the range of numbers. Check the unit prefix; what has no end is written -inf or inf.");
+        }
+    }
+
     private static void checkUnit(Chart chart, Formula density, int dimension) {
         Map<String, Dimension> known = new LinkedHashMap<>(Coordinates.DIMENSIONS);
         for (String name : chart.coordinates()) {
             known.putIfAbsent(name, chart.coordinateDimension(name));
         }
-        if (density.variables().isEmpty() && density.fitsAnyUnit()) {
+        if (Coordinates.NAMES.containsAll(density.variables()) && density.fitsAnyUnit()) {
             return;
         }
         Dimension found = density.dimension(known);

@@ -535,10 +535,11 @@ public final class FieldSolver {
         return notConverged(what, r.evaluations(), scale * error, scale * allowed, unit);
     }
 
-    private static Standing notConverged(String what, int evaluations, double error, double allowed, String unit) {
+    private Standing notConverged(String what, int evaluations, double error, double allowed, String unit) {
+        String remedy = hasEndless() ? "The charge is endless: unless its density falls off fast enough, there is no value to find"
+            : "Loosen the accuracy, or split the region where the density bends";
         return Standing.notConverged(String.format(java.util.Locale.ROOT,
-            "%s: %d evaluations, estimated error %.2g %s > tolerance %.2g %s. Loosen the accuracy, or split the region where the density bends",
-            what, evaluations, error, unit, allowed, unit));
+            "%s: %d evaluations, estimated error %.2g %s > tolerance %.2g %s. %s", what, evaluations, error, unit, allowed, unit, remedy));
     }
 
     /** Charge must be on the right side of a conductor or interface; looked at on a grid of each part. */

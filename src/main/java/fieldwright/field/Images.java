@@ -14,8 +14,18 @@ final class Images {
     private Images() {
     }
 
-    /** Errors: AuthorException when the surroundings were not stated. */
+    /** Squares and cubes of longer lengths leave the range of doubles. */
+    static final double LONGEST = 1e90;
+
+    /** Errors: AuthorException when the surroundings were not stated, or the place is missing or beyond all reach. */
     static Question question(Surroundings around, Place p) {
+        if (p == null) {
+            throw new AuthorException("the place is missing (null). Give one, for example at(\"0\", \"0\", \"0.5 m\").");
+        }
+        if (!(Math.abs(p.x()) <= LONGEST && Math.abs(p.y()) <= LONGEST && Math.abs(p.z()) <= LONGEST)) {
+            throw new AuthorException("place (" + p.x() + ", " + p.y() + ", " + p.z() + ") m is more than " + LONGEST
+                + " m away, where squares of distances leave the range of numbers. Check the unit prefix.");
+        }
         if (around == null) {
             throw new AuthorException("surroundings not stated: say what stands around the charge, for example .inFreeSpace(), .inMedium(\"2.3\") or "
                 + ".above(groundPlane(\"z\", \"0\")). Leaving out a grounded wall errs to the unsafe side.");

@@ -3,6 +3,7 @@ package fieldwright.words;
 import fieldwright.charge.Source;
 import fieldwright.charge.Surroundings;
 import fieldwright.field.Accuracy;
+import fieldwright.field.ClosedForms;
 import fieldwright.field.FieldSolver;
 import fieldwright.output.Output;
 import fieldwright.quantity.Amount;
@@ -22,16 +23,28 @@ public final class Distribution {
     private final Source source;
     private final String assumption;
     private final Place zero;
+    private final Asked asked;
 
-    private Distribution(String kind, Source source, String assumption, Place zero) {
+    /** What is asked of numbers here; null stands for what the sheet asks. */
+    private record Asked(Double relative, ClosedForms closedForms) {
+        static final Asked AS_THE_SHEET = new Asked(null, null);
+
+        Accuracy of(Accuracy sheet) {
+            Accuracy a = relative == null ? sheet : sheet.withRelative(relative);
+            return closedForms == null ? a : a.with(closedForms);
+        }
+    }
+
+    private Distribution(String kind, Source source, String assumption, Place zero, Asked asked) {
         this.kind = kind;
         this.source = source;
         this.assumption = assumption;
         this.zero = zero;
+        this.asked = asked;
     }
 
     static Distribution of(String kind, Source source) {
-        return new Distribution(kind, source, null, null);
+        return new Distribution(kind, source, null, null, Asked.AS_THE_SHEET);
     }
 
     /** Several together; surroundings are theirs when all have them, and then one and the same. */
@@ -41,7 +54,7 @@ public final class Distribution {
         }
         Source all = new fieldwright.charge.Sources(parts.stream().map(p -> p.source).toList());
         boolean stated = parts.stream().allMatch(p -> p.assumption != null);
-        return new Distribution("charge of sources(…)", all, stated ? parts.get(0).assumption : null, null);
+        return new Distribution("charge of sources(…)", all, stated ? parts.get(0).assumption : null, null, Asked.AS_THE_SHEET);
     }
 
     // Surroundings
@@ -161,14 +174,14 @@ public final class Distribution {
                     + ".above(groundPlane(\"z\", \"0\")) or .outside(floatingSphere(centre, radius)) before it.");
         }
         String text = assumption + "; uniform field (" + Given.text(x) + ", " + Given.text(y) + ", " + Given.text(z) + ") applied from far away";
-        return new Distribution(kind, source.with(new Surroundings.Applied(source.around(), ex, ey, ez)), text, zero);
+        return new Distribution(kind, source.with(new Surroundings.Applied(source.around(), ex, ey, ez)), text, zero, asked);
     }
 
     private Distribution in(Surroundings around, String text) {
         if (assumption != null) {
             throw new AuthorException(kind + ": its surroundings are stated twice, '" + assumption + "' and '" + text + "'. Keep one.");
         }
-        return new Distribution(kind, source.with(around), text, zero);
+        return new Distribution(kind, source.with(around), text, zero, asked);
     }
 
     private static String described(Object given, double value) {
@@ -180,7 +193,27 @@ public final class Distribution {
 
     /** Potential is counted from this place on; endless charge has no other zero. */
     public Distribution zeroAt(Place place) {
-        return new Distribution(kind, source, assumption, place);
+        if (place == null) {
+            throw new AuthorException("zeroAt: its place is missing (null). Give one, for example at(\"0\", \"0\", \"1 m\").");
+        }
+        return new Distribution(kind, source, assumption, place, asked);
+    }
+
+    /** For the questions after it: another relative tolerance than the sheet's, for example {@code toAccuracy(1e-6)} where 1e-9 takes long. */
+    public Distribution toAccuracy(Object relative) {
+        double tolerance = Given.plain("toAccuracy, relative tolerance", relative);
+        if (!(tolerance >= 1e-14 && tolerance <= 0.1)) {
+            throw new AuthorException("toAccuracy(" + Given.text(relative) + "): a relative tolerance lies between 1e-14 and 0.1, such as 1e-6.");
+        }
+        return new Distribution(kind, source, assumption, zero, new Asked(tolerance, asked.closedForms));
+    }
+
+    /**
+     * For the questions after it: {@code "auto"} takes closed forms where there are any and panels elsewhere, {@code "off"} panels alone,
+     * {@code "only"} closed forms alone. Asked both ways, one answer checks the other.
+     */
+    public Distribution closedForms(String use) {
+        return new Distribution(kind, source, assumption, zero, new Asked(asked.relative, ClosedForms.named(use)));
     }
 
     /** Total charge on the region, in C; charge induced on conductors is not counted. */
@@ -220,13 +253,13 @@ public final class Distribution {
     }
 
     private <T> T ask(Function<FieldSolver, T> question) {
-        return ask(question, Desk.current().accuracy());
+        return ask(question, asked.of(Desk.current().accuracy()));
     }
 
     /** For pictures, which show six digits at most. */
     private <T> T askMany(Function<FieldSolver, T> question) {
-        Accuracy asked = Desk.current().accuracy();
-        return ask(question, new Accuracy(Math.max(asked.relative(), 1e-6), asked.absoluteFloor(), asked.maxEvaluations()));
+        Accuracy accuracy = asked.of(Desk.current().accuracy());
+        return ask(question, accuracy.withRelative(Math.max(accuracy.relative(), 1e-6)));
     }
 
     private <T> T ask(Function<FieldSolver, T> question, Accuracy accuracy) {

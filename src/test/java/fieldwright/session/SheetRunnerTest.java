@@ -243,6 +243,17 @@ class SheetRunnerTest {
     }
 
     @Test
+    void accuracyOfTheSheetIsThatOfItsNumbers() {
+        String cell = "\n:: working\nvar V = volumeCharge(cylinder(\"1 m\", \"1 m\"), \"1 (nC/m^3)*(1 - 0.9*rho/(1 m))\").inFreeSpace()"
+                + ".potential(at(\"2 m\", \"0\", \"0.3 m\"));\n";
+        Value.Scalar loose = scalar(runner.work("fieldwright sheet 1\naccuracy: 1e-3\n" + cell, WorkOptions.RESULTS, progress -> { }), "V");
+        Value.Scalar tight = scalar(runner.work("fieldwright sheet 1\naccuracy: 1e-12\n" + cell, WorkOptions.RESULTS, progress -> { }), "V");
+        assertEquals(tight.value(), loose.value(), loose.numericalError());
+        assertTrue(tight.numericalError() < 1e-12 * tight.value() && loose.numericalError() > 10 * tight.numericalError(),
+                loose.numericalError() + " " + tight.numericalError());
+    }
+
+    @Test
     void labelsStandOnce() {
         RunOutcome outcome = work("working\ncheck(\"same\", Amount.of(1), Amount.of(1), 1e-9);", "working\ncheck(\"same\", Amount.of(2), Amount.of(2), 1e-9);");
         assertEquals(List.of("cell 2, line 6: check 'same' stands in cell 1 and again in cell 2. Give one of them another label."), problems(outcome));

@@ -500,6 +500,30 @@ class WordsTest {
     }
 
     @Test
+    void accuracyAndClosedFormsAreAskedByDistribution() {
+        Amount disc = desk.work(() -> surfaceCharge(disc("R_s"), "sigma_0").inFreeSpace().potential(at(0, "0.3 m", "0.7 m")));
+        Amount panels = desk.work(() -> surfaceCharge(disc("R_s"), "sigma_0").inFreeSpace().closedForms("off").potential(at(0, "0.3 m", "0.7 m")));
+        assertEquals(disc.si(), panels.si(), disc.error() + panels.error());
+        assertTrue(disc.error() != panels.error(), "one and the same method");
+        Amount loose = desk.work(() -> surfaceCharge(disc("R_s"), "sigma_0*sqrt(1 - 0.5*(rho/R_s)^2)").toAccuracy(1e-3).inFreeSpace().potential(at(0, "0.3 m", "0.7 m")));
+        Amount tight = desk.work(() -> surfaceCharge(disc("R_s"), "sigma_0*sqrt(1 - 0.5*(rho/R_s)^2)").inFreeSpace().toAccuracy("1e-11").potential(at(0, "0.3 m", "0.7 m")));
+        assertEquals(tight.si(), loose.si(), loose.error());
+        assertTrue(tight.isConverged() && tight.error() < 1e-11 * tight.si() && loose.error() > 10 * tight.error(), tight.error() + " " + loose.error());
+        assertTrue(complaint(() -> surfaceCharge(disc("R_s"), "sigma_0*rho/R_s").inFreeSpace().closedForms("only").potential(at(0, 0, "1 m")))
+                .contains("not the same all over"));
+        assertTrue(complaint(() -> surfaceCharge(disc("R_s"), "sigma_0").closedForms("maybe")).contains("\"only\""));
+        assertTrue(complaint(() -> surfaceCharge(disc("R_s"), "sigma_0").toAccuracy(2)).contains("between 1e-14 and 0.1"));
+    }
+
+    @Test
+    void aMissingPlaceIsNamed() {
+        assertTrue(complaint(() -> pointCharge(null, "1 nC")).contains("place"));
+        assertTrue(complaint(() -> pointCharge(at(0, 0, 0), "1 nC").inFreeSpace().electricField(null)).contains("place"));
+        assertTrue(complaint(() -> pointCharge(at(0, 0, 0), "1 nC").inFreeSpace().potential(null)).contains("place"));
+        assertTrue(complaint(() -> pointCharge(at(0, 0, 0), "1 nC").inFreeSpace().zeroAt(null)).contains("place"));
+    }
+
+    @Test
     void outsideACellWordsSayso() {
         assertThrows(IllegalStateException.class, () -> calc("1"));
     }
