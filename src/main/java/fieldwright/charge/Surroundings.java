@@ -203,6 +203,35 @@ public sealed interface Surroundings {
         }
     }
 
+    /** Endless grounded circular tube about the line along an axis through (x, y, z), the charge inside. */
+    record GroundedTube(String axis, double x, double y, double z, double radius) implements Surroundings {
+        public GroundedTube {
+            requirePlane(axis, x + y + z, 1);
+            requireRadius("grounded tube", radius);
+        }
+
+        @Override
+        public String title() {
+            return "grounded tube along " + axis + " through (" + number(x) + ", " + number(y) + ", " + number(z) + ") m, radius " + number(radius)
+                + " m, charge inside";
+        }
+    }
+
+    /** Closed grounded drum: circular cylinder about the line along an axis through (x, y, z), with ends; the charge inside. */
+    record GroundedDrum(String axis, double x, double y, double z, double radius, double from, double to) implements Surroundings {
+        public GroundedDrum {
+            requirePlane(axis, x + y + z, 1);
+            requireRadius("grounded drum", radius);
+            requireOrder("grounded drum, " + axis, from, to);
+        }
+
+        @Override
+        public String title() {
+            return "grounded drum along " + axis + " through (" + number(x) + ", " + number(y) + ", " + number(z) + ") m, radius " + number(radius)
+                + " m, " + axis + " from " + number(from) + " to " + number(to) + " m, charge inside";
+        }
+    }
+
     /** With a uniform field (V/m) applied from far away, as it is where the surroundings do not disturb it. */
     record Applied(Surroundings around, double ex, double ey, double ez) implements Surroundings {
         public Applied {
@@ -243,6 +272,12 @@ public sealed interface Surroundings {
         if (!(radius > 0) || !Double.isFinite(radius + x + y + z)) {
             throw new AuthorException(kind + " sphere of radius " + radius + " m about (" + x + ", " + y + ", " + z
                 + ") m: the radius must be > 0 and all numbers finite.");
+        }
+    }
+
+    private static void requireRadius(String what, double radius) {
+        if (!(radius > 0) || !Double.isFinite(radius)) {
+            throw new AuthorException(what + " of radius " + radius + " m: must be finite and > 0.");
         }
     }
 

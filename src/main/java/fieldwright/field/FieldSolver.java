@@ -240,32 +240,23 @@ public final class FieldSolver {
         double[][] s = {{at[0]}, {at[1]}, {at[2]}};
         double[][] out = new double[3][1];
         double q = point.charge().si();
-        double relative = point.charge().error() / Math.abs(q) + green.relativeError() + 4 * Sampler.EPS;
-        double bound = Math.abs(q) * (paver.isPotential() ? green.potentialError() : green.fieldError());
+        double[] doubt = new double[1];
         if (paver.isPotential()) {
-            green.potential(s, 1, out[0]);
+            green.potential(s, 1, out[0], doubt);
         } else {
-            green.field(s, 1, out);
+            green.field(s, 1, out, doubt);
         }
         double size = norm(new double[] {out[0][0], out[1][0], out[2][0]});
+        double relative = point.charge().error() / Math.abs(q) + 4 * Sampler.EPS;
         for (int a = 0; a < paver.start.length; a++) {
             paver.start[a] += q * out[a][0];
-            error[a] += bound + relative * Math.abs(q) * size;
+            error[a] += Math.abs(q) * (doubt[0] + relative * size);
         }
     }
 
     private void smooth(Patch patch, Green green, Paver paver, double[] error) {
-        if (green == null) {
-            return;
-        }
-        Green part = patch.kernel().isEndless() ? green.endless(patch) : green;
-        GreenPiece.add(patch, part, paver, space);
-        double bound = paver.isPotential() ? part.potentialError() : part.fieldError();
-        if (bound > 0) {
-            double most = bound * GreenPiece.charge(patch, space);
-            for (int a = 0; a < error.length; a++) {
-                error[a] += most;
-            }
+        if (green != null) {
+            GreenPiece.add(patch, patch.kernel().isEndless() ? green.endless(patch) : green.forPatch(), paver, space, error);
         }
     }
 
@@ -497,6 +488,48 @@ public final class FieldSolver {
         return potential(q, at);
     }
 
+    /**
+     * Charge per area on a conductor at a place of its surface (C/m²), eps times the field's normal component there: all that stands on
+     * it, induced, applied or its own, with its sign: negative where the field runs into the conductor, as before positive charge. On a
+     * thin shell both faces together; zero on an edge between two walls. The place may be off by 1e-9 of its size.
+     * Errors: AuthorException when there is no conductor, or the place is not on one.
+     */
+    public Amount inducedDensity(Place at) {
+        Question asked = Images.question(source.around(), at);
+        Place on = asked.side() == null ? Images.foot(source.around(), at) : at;
+        double off = Images.distance(on, at);
+        double size = norm(Images.coordinates(on)) + norm(Images.coordinates(at));
+        if (off > 1e-9 * size || Images.clearance(source.around(), Images.coordinates(on)) != 0) {
+            throw new AuthorException("charge on a conductor at " + text(at) + ": the place is " + digits(off) + " m from the surface of the "
+                + source.around().title() + ". The nearest place on it is " + text(on) + ".");
+        }
+        Question q = Images.question(source.around(), on);
+        if (q.side() == null) {
+            return Amount.si(0, 0, Units.SURFACE_DENSITY);
+        }
+        double[] n = q.side();
+        Vector d = field(on, q, true);
+        Amount[] plus = components(d.onSide(n[0], n[1], n[2]));
+        Amount[] minus = components(d.onSide(-n[0], -n[1], -n[2]));
+        Amount sum = Amount.si(0, 0, Units.SURFACE_DENSITY);
+        for (int k = 0; k < 3; k++) {
+            sum = sum.plus(plus[k].minus(minus[k]).times(n[k]));
+        }
+        return sum;
+    }
+
+    private static String text(Place p) {
+        return "(" + digits(p.x()) + ", " + digits(p.y()) + ", " + digits(p.z()) + ") m";
+    }
+
+    private static String digits(double v) {
+        return new java.math.BigDecimal(v).round(new java.math.MathContext(9)).stripTrailingZeros().toString();
+    }
+
+    private static Amount[] components(Vector v) {
+        return new Amount[] {v.x(), v.y(), v.z()};
+    }
+
     /** Whether the potential integral of mapped endless charge settles, from few evaluations. */
     private boolean tailsConverge(View view) {
         Paver paver = new Paver(true, space);
@@ -627,7 +660,7 @@ public final class FieldSolver {
             return axis == null || around instanceof Surroundings.DielectricHalfSpace || Math.abs(direction["xyz".indexOf(axis)]) < 1 - 1e-12;
         }
         if (axis == null) {
-            return around instanceof Surroundings.GroundedBox;
+            return around instanceof Surroundings.GroundedBox || around instanceof Surroundings.GroundedDrum || around instanceof Surroundings.GroundedTube;
         }
         return (patch.kernel().kind == Kernel.Kind.LINE || around instanceof Surroundings.GroundedPair)
             && Math.abs(direction["xyz".indexOf(axis)]) > 1e-12;

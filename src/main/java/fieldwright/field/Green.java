@@ -8,25 +8,22 @@ import fieldwright.quantity.AuthorException;
  * Keeps scratch space: one thread at a time.
  */
 interface Green {
-    /** {@code out[i]} = potential of unit charges at {@code s[0..2][i]}, sheet frame. */
-    void potential(double[][] s, int n, double[] out);
+    /**
+     * {@code out[i]} = potential of unit charges at {@code s[0..2][i]}, sheet frame; {@code doubt[i]} = what it is wrong by at most,
+     * beside the rounding of the places.
+     */
+    void potential(double[][] s, int n, double[] out, double[] doubt);
 
-    /** {@code out[0..2][i]} = field of unit charges, sheet frame. */
-    void field(double[][] s, int n, double[][] out);
-
-    /** What {@link #potential} is wrong by at most beside rounding, for unit charge (1/m). */
-    double potentialError();
-
-    /** What {@link #field} is wrong by at most beside rounding, for unit charge (1/m²). */
-    double fieldError();
-
-    /** What a value is wrong by at most beside the bounds above, as a part of itself. */
-    default double relativeError() {
-        return 0;
-    }
+    /** {@code out[0..2][i]} = field of unit charges, sheet frame; {@code doubt[i]} for each component. */
+    void field(double[][] s, int n, double[][] out, double[] doubt);
 
     /** The same for a patch whose charge is integrated along its endless coordinates. Errors: AuthorException where that is not worked. */
     default Green endless(Patch patch) {
         throw new AuthorException("endless charge in these surroundings: it is not worked. Give the region finite limits.");
+    }
+
+    /** The same, for the many nodes of an integral: with less effort for one source where effort and doubt are exchanged. */
+    default Green forPatch() {
+        return this;
     }
 }

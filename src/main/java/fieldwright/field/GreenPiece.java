@@ -9,6 +9,8 @@ import fieldwright.integral.Integrand;
 
 /** Density times measure times a smooth {@link Green} part over a patch: boxes of parameters as they are. */
 final class GreenPiece implements Integrand {
+    /** Noise is taken as independent from node to node, doubt is not: the root of a usual number of nodes. */
+    private static final double ALIKE = 8;
     private static final int[] ORDERS = {0, 20, 14, 10};
 
     private final Patch patch;
@@ -18,6 +20,7 @@ final class GreenPiece implements Integrand {
     private final Chart.Anchor anchor;
     private final double[][] s = new double[3][BLOCK];
     private final double[] weight = new double[BLOCK];
+    private final double[] doubt = new double[BLOCK];
 
     private GreenPiece(Patch patch, Green green, boolean potential, Workspace space) {
         this.patch = patch;
@@ -30,7 +33,7 @@ final class GreenPiece implements Integrand {
     }
 
     /** Adds the pieces, cut where the density bends; what needs no integral to the start. */
-    static void add(Patch patch, Green green, Paver paver, Workspace space) {
+    static void add(Patch patch, Green green, Paver paver, Workspace space, double[] error) {
         if (patch.weight().isConstant() && patch.weight().constant() == 0) {
             return;
         }
@@ -40,6 +43,7 @@ final class GreenPiece implements Integrand {
             f.evaluate(new double[0][], 1, out, new double[1]);
             for (int c = 0; c < out.length; c++) {
                 paver.start[c] += out[c][0];
+                error[c] += Math.abs(f.weight[0]) * f.doubt[0];
             }
             return;
         }
@@ -81,43 +85,6 @@ final class GreenPiece implements Integrand {
         }
         return all.stream().mapToDouble(Double::doubleValue).toArray();
     }
-
-    /** ∫ |density| over the patch, roughly: a fixed rule. */
-    static double charge(Patch patch, Workspace space) {
-        GreenPiece f = new GreenPiece(patch, ONE, true, space);
-        if (patch.dimension() == 0) {
-            double[][] out = new double[1][1];
-            f.evaluate(new double[0][], 1, out, new double[1]);
-            return Math.abs(out[0][0]);
-        }
-        List<Cubature.Piece> pieces = new java.util.ArrayList<>();
-        add(f, pieces);
-        return Cubature.integrate(pieces, 1, false, new Cubature.Goal(0.1, 1, 0, 2000), null).magnitude()[0];
-    }
-
-    private static final Green ONE = new Green() {
-        @Override
-        public void potential(double[][] s, int n, double[] out) {
-            java.util.Arrays.fill(out, 0, n, 1);
-        }
-
-        @Override
-        public void field(double[][] s, int n, double[][] out) {
-            for (double[] c : out) {
-                java.util.Arrays.fill(c, 0, n, 0);
-            }
-        }
-
-        @Override
-        public double potentialError() {
-            return 0;
-        }
-
-        @Override
-        public double fieldError() {
-            return 0;
-        }
-    };
 
     @Override
     public int dimension() {
@@ -164,16 +131,15 @@ final class GreenPiece implements Integrand {
             }
         }
         if (potential) {
-            green.potential(s, n, out[0]);
+            green.potential(s, n, out[0], doubt);
         } else {
-            green.field(s, n, out);
+            green.field(s, n, out, doubt);
         }
-        double relative = 10 * green.relativeError();
         for (int i = 0; i < n; i++) {
             for (int c = 0; c < components(); c++) {
                 out[c][i] = w[i] == 0 ? 0 : w[i] * out[c][i];
-                noise[i] = Math.max(noise[i], relative * Math.abs(out[c][i]));
             }
+            noise[i] = ALIKE * Math.abs(w[i]) * doubt[i];
         }
     }
 }

@@ -52,6 +52,9 @@ final class Images {
         if (around instanceof Surroundings.GroundedBox b) {
             return between(new double[] {b.x0(), b.y0(), b.z0()}, new double[] {b.x1(), b.y1(), b.z1()}, p);
         }
+        if (around instanceof Surroundings.GroundedTube || around instanceof Surroundings.GroundedDrum) {
+            return inCylinder(cylinder(around), p);
+        }
         if (around instanceof Surroundings.Applied applied) {
             return Applied.question(applied, p);
         }
@@ -82,10 +85,76 @@ final class Images {
             least = Math.min(least, Math.min(p[2] - b.z0(), b.z1() - p[2]));
             return loosely(least, Math.abs(b.x0()) + Math.abs(b.x1()) + Math.abs(b.y0()) + Math.abs(b.y1()) + Math.abs(b.z0()) + Math.abs(b.z1()));
         }
+        if (around instanceof Surroundings.GroundedTube || around instanceof Surroundings.GroundedDrum) {
+            RoundGreen.Cylinder c = cylinder(around);
+            double ends = c.isTube() ? Double.POSITIVE_INFINITY : Math.min(p[c.axis()] - c.from(), c.to() - p[c.axis()]);
+            return loosely(Math.min(c.radius() - c.distance(p), ends), c.radius() + (c.isTube() ? 0 : Math.abs(c.from()) + Math.abs(c.to())));
+        }
         if (around instanceof Surroundings.Applied a) {
             return clearance(a.around(), p);
         }
         return 1;
+    }
+
+    /** The place on a conductor nearest to p. Errors: AuthorException when there is no conductor. */
+    static Place foot(Surroundings around, Place place) {
+        double[] p = coordinates(place);
+        if (around instanceof Surroundings.Applied a) {
+            return foot(a.around(), place);
+        }
+        if (around instanceof Surroundings.ConductingSphere s) {
+            double[] d = {p[0] - s.x(), p[1] - s.y(), p[2] - s.z()};
+            double r = Math.sqrt(d[0] * d[0] + d[1] * d[1] + d[2] * d[2]);
+            return r == 0 ? new Place(s.x(), s.y(), s.z() + s.radius())
+                : new Place(s.x() + s.radius() * (d[0] / r), s.y() + s.radius() * (d[1] / r), s.z() + s.radius() * (d[2] / r));
+        }
+        List<Place> feet = new ArrayList<>();
+        if (around instanceof Surroundings.GroundedTube || around instanceof Surroundings.GroundedDrum) {
+            RoundGreen.Cylinder c = cylinder(around);
+            double r = c.distance(p);
+            double[] q = p.clone();
+            for (int k = 1; k < 3; k++) {
+                int i = (c.axis() + k) % 3;
+                q[i] = c.centre()[i] + (r == 0 ? k == 1 ? c.radius() : 0 : c.radius() * ((p[i] - c.centre()[i]) / r));
+            }
+            feet.add(new Place(q[0], q[1], q[2]));
+            if (!c.isTube()) {
+                feet.add(moved(p, c.axis(), c.from()));
+                feet.add(moved(p, c.axis(), c.to()));
+            }
+        }
+        for (Wall wall : planes(around)) {
+            feet.add(moved(p, axis(wall.axis), wall.offset));
+        }
+        return feet.stream().min(java.util.Comparator.comparingDouble(f -> distance(f, place))).orElseThrow(() -> new AuthorException(
+            "charge on a conductor: there is none in " + around.title() + "."));
+    }
+
+    private static List<Wall> planes(Surroundings around) {
+        if (around instanceof Surroundings.GroundPlane g) {
+            return List.of(new Wall(g));
+        }
+        if (around instanceof Surroundings.GroundedCorner c) {
+            return List.of(new Wall(c.first()), new Wall(c.second()));
+        }
+        if (around instanceof Surroundings.GroundedPair g) {
+            return List.of(new Wall(g.axis(), g.from(), 1), new Wall(g.axis(), g.to(), -1));
+        }
+        if (around instanceof Surroundings.GroundedBox b) {
+            return List.of(new Wall("x", b.x0(), 1), new Wall("x", b.x1(), -1), new Wall("y", b.y0(), 1), new Wall("y", b.y1(), -1),
+                new Wall("z", b.z0(), 1), new Wall("z", b.z1(), -1));
+        }
+        return List.of();
+    }
+
+    private static Place moved(double[] p, int axis, double to) {
+        double[] q = p.clone();
+        q[axis] = to;
+        return new Place(q[0], q[1], q[2]);
+    }
+
+    static double distance(Place a, Place b) {
+        return Math.sqrt((a.x() - b.x()) * (a.x() - b.x()) + (a.y() - b.y()) * (a.y() - b.y()) + (a.z() - b.z()) * (a.z() - b.z()));
     }
 
     private static double loosely(double distance, double scale) {
@@ -154,6 +223,43 @@ final class Images {
         View here = q.here().with(new WalledGreen(p, low, length, false))
             .orFar(new WalledGreen(p, low, length, true), WalledGreen.farBeyond(length));
         return new Question(here, 1, q.side(), q.behind(), 1);
+    }
+
+    private static RoundGreen.Cylinder cylinder(Surroundings around) {
+        if (around instanceof Surroundings.GroundedDrum d) {
+            return new RoundGreen.Cylinder(axis(d.axis()), new double[] {d.x(), d.y(), d.z()}, d.radius(), d.from(), d.to());
+        }
+        Surroundings.GroundedTube t = (Surroundings.GroundedTube) around;
+        return new RoundGreen.Cylinder(axis(t.axis()), new double[] {t.x(), t.y(), t.z()}, t.radius(), Double.NEGATIVE_INFINITY,
+            Double.POSITIVE_INFINITY);
+    }
+
+    /** Within a cylinder: the nearer end as an image, the round wall and the other images as a smooth part. */
+    private static Question inCylinder(RoundGreen.Cylinder c, Place place) {
+        double[] p = coordinates(place);
+        double r = c.distance(p);
+        double size = c.radius() + Math.abs(c.centre()[(c.axis() + 1) % 3]) + Math.abs(c.centre()[(c.axis() + 2) % 3]);
+        boolean onWall = Math.abs(r - c.radius()) <= 4 * EPS * size;
+        if (r > c.radius() && !onWall) {
+            return Question.of(View.GROUNDED, 1);
+        }
+        Question q = Question.of(View.of(List.of(Probe.direct(p[0], p[1], p[2]))), 1);
+        if (!c.isTube()) {
+            boolean upper = p[c.axis()] - c.from() > (c.to() - c.from()) / 2;
+            q = walled(List.of(new Wall("xyz".substring(c.axis(), c.axis() + 1), upper ? c.to() : c.from(), upper ? -1 : 1)), place);
+        }
+        if (q.here().isConductor() || onWall && q.side() != null) {
+            return Question.of(View.GROUNDED, 1);
+        }
+        View here = q.here().with(RoundGreen.rest(c, p, onWall)).orFar(new RoundGreen(c, p, onWall, true), RoundGreen.farBeyond(c));
+        double[] side = q.side();
+        if (onWall) {
+            side = new double[3];
+            for (int k = 0; k < 3; k++) {
+                side[k] = k == c.axis() ? 0 : (c.centre()[k] - p[k]) / r;
+            }
+        }
+        return side == null ? Question.of(here, 1) : Question.on(here, side, View.GROUNDED);
     }
 
     private static int axis(String name) {

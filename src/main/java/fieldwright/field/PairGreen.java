@@ -44,17 +44,8 @@ final class PairGreen implements Green {
     }
 
     @Override
-    public double potentialError() {
-        return 1e-14;
-    }
-
-    @Override
-    public double fieldError() {
-        return 1e-14 / distance;
-    }
-
-    @Override
-    public void potential(double[][] s, int n, double[] out) {
+    public void potential(double[][] s, int n, double[] out, double[] doubt) {
+        java.util.Arrays.fill(doubt, 0, n, 1e-14);
         for (int i = 0; i < n; i++) {
             double z = side * (place[axis] - wall);
             double w = side * (s[axis][i] - wall);
@@ -68,7 +59,8 @@ final class PairGreen implements Green {
     }
 
     @Override
-    public void field(double[][] s, int n, double[][] out) {
+    public void field(double[][] s, int n, double[][] out, double[] doubt) {
+        java.util.Arrays.fill(doubt, 0, n, 1e-14 / distance);
         for (int i = 0; i < n; i++) {
             double z = side * (place[axis] - wall);
             double w = side * (s[axis][i] - wall);

@@ -24,7 +24,8 @@ final class Spheres {
     static Question question(ConductingSphere g, Place place) {
         double[] p = {place.x() - g.x(), place.y() - g.y(), place.z() - g.z()};
         double r = Math.sqrt(p[0] * p[0] + p[1] * p[1] + p[2] * p[2]);
-        boolean on = Math.abs(r - g.radius()) <= 4 * EPS * g.radius();
+        double size = g.radius() + Math.abs(g.x()) + Math.abs(g.y()) + Math.abs(g.z());
+        boolean on = Math.abs(r - g.radius()) <= 4 * EPS * size;
         if (!on && g.outside() == r < g.radius()) {
             return Question.of(g.outside() ? conductor(g) : beyondShell(g, p, r), 1);
         }
@@ -92,25 +93,17 @@ final class Spheres {
     /** All of the charge acts as if at the centre: the same for every source. */
     private record CentreGreen(double[] unitField, double unitPotential) implements Green {
         @Override
-        public void potential(double[][] s, int n, double[] out) {
+        public void potential(double[][] s, int n, double[] out, double[] doubt) {
+            java.util.Arrays.fill(doubt, 0, n, 4e-16 * unitPotential);
             java.util.Arrays.fill(out, 0, n, unitPotential);
         }
 
         @Override
-        public void field(double[][] s, int n, double[][] out) {
+        public void field(double[][] s, int n, double[][] out, double[] doubt) {
+            java.util.Arrays.fill(doubt, 0, n, 4e-16 * unitPotential * unitPotential);
             for (int k = 0; k < 3; k++) {
                 java.util.Arrays.fill(out[k], 0, n, unitField[k]);
             }
-        }
-
-        @Override
-        public double potentialError() {
-            return 4e-16 * unitPotential;
-        }
-
-        @Override
-        public double fieldError() {
-            return 4e-16 * unitPotential * unitPotential;
         }
 
         @Override

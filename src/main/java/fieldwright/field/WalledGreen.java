@@ -102,21 +102,6 @@ final class WalledGreen implements Green {
     }
 
     @Override
-    public double potentialError() {
-        return whole ? 0 : 3e-14 / least;
-    }
-
-    @Override
-    public double fieldError() {
-        return whole ? 0 : 1e-12 / (least * least);
-    }
-
-    @Override
-    public double relativeError() {
-        return whole ? 3e-13 : 0;
-    }
-
-    @Override
     public Green endless(Patch patch) {
         int axis = -1;
         for (int k = 0; k < 3; k++) {
@@ -133,19 +118,23 @@ final class WalledGreen implements Green {
     }
 
     @Override
-    public void potential(double[][] s, int n, double[] out) {
+    public void potential(double[][] s, int n, double[] out, double[] doubt) {
         for (int i = 0; i < n; i++) {
             out[i] = at(s[0][i], s[1][i], s[2][i], false);
+            doubt[i] = whole ? 3e-13 * Math.abs(out[i]) : 3e-14 / least;
         }
     }
 
     @Override
-    public void field(double[][] s, int n, double[][] out) {
+    public void field(double[][] s, int n, double[][] out, double[] doubt) {
         for (int i = 0; i < n; i++) {
             at(s[0][i], s[1][i], s[2][i], true);
+            double size = 0;
             for (int k = 0; k < 3; k++) {
                 out[k][i] = -gradient[k];
+                size += Math.abs(gradient[k]);
             }
+            doubt[i] = whole ? 3e-13 * size : 1e-12 / (least * least);
         }
     }
 

@@ -236,6 +236,11 @@ public final class Distribution {
         return ask(solver -> potential(solver, place));
     }
 
+    /** Charge per area on a conductor, C/m², at a place of its surface; negative before positive charge. */
+    public Amount inducedDensity(Place place) {
+        return ask(solver -> solver.inducedDensity(place));
+    }
+
     List<Vector> electricFields(List<Place> places) {
         return askMany(solver -> places.stream().map(solver::electricField).toList());
     }

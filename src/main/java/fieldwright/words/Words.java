@@ -310,6 +310,31 @@ public final class Words {
         return new Enclosure(box, "closed earthed box from " + stated(corner) + " to " + stated(opposite));
     }
 
+    /** An endless earthed circular tube along an axis' direction about the line through a place, for {@code .inside(…)}. */
+    public static Enclosure groundedTube(String axis, Place through, Object radius) {
+        axis("groundedTube", axis);
+        double r = size("groundedTube, radius", radius).si();
+        return new Enclosure(new Surroundings.GroundedTube(axis, through.x(), through.y(), through.z(), r),
+                "endless earthed tube along " + axis + " through " + stated(through) + ", radius " + stated(radius, r));
+    }
+
+    /**
+     * A closed earthed drum: circular cylinder along an axis' direction about the line through a place, with ends, for {@code .inside(…)}:
+     * {@code groundedDrum("z", at(0, 0, 0), "R_s", "0", "H")}.
+     *
+     * @param from end on the axis, a coordinate of the sheet
+     * @param to the other end
+     */
+    public static Enclosure groundedDrum(String axis, Place through, Object radius, Object from, Object to) {
+        axis("groundedDrum", axis);
+        double r = size("groundedDrum, radius", radius).si();
+        double low = Given.length("groundedDrum, first end", from);
+        double high = Given.length("groundedDrum, second end", to);
+        return new Enclosure(new Surroundings.GroundedDrum(axis, through.x(), through.y(), through.z(), r, Math.min(low, high), Math.max(low, high)),
+                "closed earthed drum along " + axis + " through " + stated(through) + ", radius " + stated(radius, r) + ", ends at " + axis + " = "
+                        + stated(from, low) + " and " + axis + " = " + stated(to, high));
+    }
+
     /** An earthed sphere for {@code .outside(…)}, or an earthed spherical shell for {@code .inside(…)}. */
     public static ConductingSphere groundedSphere(Place centre, Object radius) {
         double a = size("groundedSphere, radius", radius).si();

@@ -39,6 +39,8 @@ class EnclosuresTest {
         return switch (words[0]) {
             case "pair" -> new Surroundings.GroundedPair("z", 0, size[0]);
             case "box" -> new Surroundings.GroundedBox(0, size[0], 0, size[1], 0, size[2]);
+            case "tube" -> new Surroundings.GroundedTube("z", 0, 0, 0, size[0]);
+            case "drum" -> new Surroundings.GroundedDrum("z", 0, 0, 0, size[0], 0, size[1]);
             default -> throw new IllegalArgumentException(text);
         };
     }

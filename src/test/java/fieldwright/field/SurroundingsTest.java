@@ -34,6 +34,9 @@ class SurroundingsTest {
     private static final Surroundings CORNER = new Surroundings.GroundedCorner(new Surroundings.GroundPlane("z", -0.1, 1),
         new Surroundings.GroundPlane("x", 0.8, -1));
 
+    private static final Surroundings TUBE = new Surroundings.GroundedTube("x", 0, 0.4, -0.1, 0.7);
+    private static final Surroundings DRUM = new Surroundings.GroundedDrum("y", 0.1, 0, 0.1, 0.6, -0.3, 0.8);
+
     private static Formula m(double v) {
         return Formula.constant(Amount.si(v, 0, Units.LENGTH));
     }
@@ -81,6 +84,10 @@ class SurroundingsTest {
             new Walls(BOX, List.of(new Place(-0.5, 0.3, 0), new Place(0.7, 0.5, -0.4), new Place(0, 1, 0.1), new Place(0.2, 0, 0), new Place(0, 0.2, 0.4)),
                 List.of(new double[] {1, 0, 0}, new double[] {-1, 0, 0}, new double[] {0, -1, 0}, new double[] {0, 1, 0}, new double[] {0, 0, -1})),
             new Walls(PAIR, List.of(new Place(0.1, -0.2, 0.2), new Place(3, 0.9, 0)), List.of(new double[] {0, 1, 0}, new double[] {0, -1, 0})),
+            new Walls(TUBE, List.of(new Place(0.1, 1.1, -0.1), new Place(0.3, 0.4, 0.6), new Place(0, 0.4 + 0.7 * 0.6, -0.1 + 0.7 * 0.8)),
+                List.of(new double[] {0, -1, 0}, new double[] {0, 0, -1}, new double[] {0, -0.6, -0.8})),
+            new Walls(DRUM, List.of(new Place(0.2, -0.3, 0.2), new Place(0, 0.8, 0.1), new Place(0.7, 0.2, 0.1), new Place(0.1 - 0.36, 0.5, 0.1 + 0.48)),
+                List.of(new double[] {0, 1, 0}, new double[] {0, -1, 0}, new double[] {-1, 0, 0}, new double[] {0.6, 0, -0.8})),
             new Walls(CORNER, List.of(new Place(0.1, 0.2, -0.1), new Place(0.8, 0, 0.1)), List.of(new double[] {0, 0, 1}, new double[] {-1, 0, 0})));
     }
 
@@ -88,7 +95,8 @@ class SurroundingsTest {
     @ParameterizedTest
     @MethodSource("walls")
     void wallsAreAtPotentialZero(Walls w) {
-        FieldSolver cloud = solver(charge(block(-0.1, 0.3, 0.2, 0.6, 0, 0.35), "1e-9*(1 + x - z)", w.around));
+        FieldSolver cloud = solver(charge(cartesian().limits("x", m(-0.1), m(0.3)).limits("y", m(0.2), m(0.6)).fixed("z", m(0.25)), "1e-9*(1 + x - z)",
+            w.around));
         double inside = cloud.potential(new Place(0.1, 0.5, 0.2)).si();
         for (int i = 0; i < w.on.size(); i++) {
             Place p = w.on.get(i);
@@ -281,11 +289,102 @@ class SurroundingsTest {
         assertThrows(AuthorException.class, () -> new Surroundings.Applied(new Surroundings.GroundPlane("z", 0, 1), 1, 0, 0));
     }
 
+    // ---- charge on conductors
+
+    private static final fieldwright.integral.GaussLegendre RULE = fieldwright.integral.GaussLegendre.of(24);
+
+    /** ∫∫ over [a, b] × [c, d]. */
+    private static double integral(double a, double b, double c, double d, java.util.function.DoubleBinaryOperator f) {
+        double sum = 0;
+        for (int i = 0; i < 24; i++) {
+            for (int j = 0; j < 24; j++) {
+                sum += RULE.weight(i) * RULE.weight(j) * f.applyAsDouble(a + (b - a) * RULE.node(i), c + (d - c) * RULE.node(j));
+            }
+        }
+        return sum * (b - a) * (d - c);
+    }
+
+    /** ∫ over [a, b] and a full turn, there by the trapezoidal rule. */
+    private static double round(double a, double b, java.util.function.DoubleBinaryOperator f) {
+        double sum = 0;
+        for (int i = 0; i < 24; i++) {
+            for (int j = 0; j < 24; j++) {
+                sum += RULE.weight(i) / 24 * f.applyAsDouble(a + (b - a) * RULE.node(i), j * Math.PI / 12);
+            }
+        }
+        return sum * (b - a) * 2 * Math.PI;
+    }
+
+    private static double density(FieldSolver s, double x, double y, double z) {
+        Amount a = s.inducedDensity(new Place(x, y, z));
+        assertTrue(a.isConverged());
+        return a.si();
+    }
+
+    /** Induced charge: −q on a plane and on all that closes in on q; −q R/d on a sphere at distance d (Maxwell; Jackson 2.2). */
+    @Test
+    void inducedChargeAddsUp() {
+        double q = 1e-9;
+        double turn = 2 * Math.PI;
+        FieldSolver plane = solver(point(0.2, 0, 0.5, q, new Surroundings.GroundPlane("z", 0, 1)));
+        near(-q * 0.5 / (turn * Math.pow(0.25 + 0.01 + 0.09, 1.5)), plane.inducedDensity(new Place(0.3, 0.3, 0)));
+        assertEquals(-q, round(0, 1, (t, phi) -> density(plane, 0.2 + t / (1 - t) * Math.cos(phi), t / (1 - t) * Math.sin(phi), 0)
+            * t / Math.pow(1 - t, 3)), 1e-9 * q);
+        FieldSolver outside = solver(point(0, 0, 0.8, q, new Surroundings.GroundedSphere(0, 0, 0, 0.5, true)));
+        FieldSolver inside = solver(point(0, 0, 0.2, q, new Surroundings.GroundedSphere(0, 0, 0, 0.5, false)));
+        assertEquals(-q * 0.5 / 0.8, onSphere(outside), 1e-9 * q);
+        assertEquals(-q, onSphere(inside), 1e-9 * q);
+        FieldSolver shell = solver(point(0, 0, 0.2, q, new Surroundings.FloatingSphere(0, 0, 0, 0.5, false, 3e-10)));
+        assertEquals(3e-10, onSphere(shell), 1e-9 * q);
+        FieldSolver box = solver(point(0.4, 0.6, 0.5, q, new Surroundings.GroundedBox(0, 1, 0, 1, 0, 1)));
+        double sum = 0;
+        for (double w : new double[] {0, 1}) {
+            sum += integral(0, 1, 0, 1, (a, b) -> density(box, a, b, w) + density(box, a, w, b) + density(box, w, a, b));
+        }
+        assertEquals(-q, sum, 1e-9 * q);
+        FieldSolver drum = solver(point(0.3, 0, 0.6, q, new Surroundings.GroundedDrum("z", 0, 0, 0, 1, 0, 1)));
+        double ends = round(0, 1, (r, phi) -> r * (density(drum, r * Math.cos(phi), r * Math.sin(phi), 0)
+            + density(drum, r * Math.cos(phi), r * Math.sin(phi), 1)));
+        assertEquals(-q, ends + round(0, 1, (z, phi) -> density(drum, Math.cos(phi), Math.sin(phi), z)), 1e-9 * q);
+        FieldSolver tube = solver(point(0.3, 0, 0.6, q, new Surroundings.GroundedTube("z", 0, 0, 0, 1)));
+        double round = 0;
+        for (int i = -9; i < 9; i++) {
+            round += along(tube, 0.6 + i);
+        }
+        assertEquals(-q, round, 1e-9 * q);
+    }
+
+    private static double along(FieldSolver tube, double from) {
+        double sum = 0;
+        fieldwright.integral.GaussLegendre rule = fieldwright.integral.GaussLegendre.of(10);
+        for (int i = 0; i < 10; i++) {
+            for (int j = 0; j < 24; j++) {
+                double phi = j * Math.PI / 12;
+                sum += rule.weight(i) * Math.PI / 12 * density(tube, Math.cos(phi), Math.sin(phi), from + rule.node(i));
+            }
+        }
+        return sum;
+    }
+
+    private static double onSphere(FieldSolver s) {
+        return round(-1, 1, (c, phi) -> 0.25 * density(s, 0.5 * Math.sqrt(1 - c * c) * Math.cos(phi), 0.5 * Math.sqrt(1 - c * c)
+            * Math.sin(phi), 0.5 * c));
+    }
+
+    @Test
+    void densityOnlyOnAConductor() {
+        FieldSolver s = solver(point(0.3, 0.4, 0.2, 1e-9, BOX));
+        assertTrue(assertThrows(AuthorException.class, () -> s.inducedDensity(new Place(0.6, 0.5, 0))).getMessage().contains("0.1 m from the surface"));
+        assertThrows(AuthorException.class, () -> s.inducedDensity(new Place(0.7, 3, 0)));
+        assertThrows(AuthorException.class, () -> solver(point(0, 0, 0, 1e-9, Surroundings.FREE_SPACE)).inducedDensity(new Place(1, 0, 0)));
+        assertEquals(0, s.inducedDensity(new Place(0.7, 1, 0)).si());
+    }
+
     // ---- charge where it must not be
 
     @Test
     void chargeOnTheWrongSideOrInAWall() {
-        for (Surroundings around : List.of(BOX, PAIR, CORNER)) {
+        for (Surroundings around : List.of(BOX, PAIR, CORNER, TUBE, DRUM)) {
             assertThrows(AuthorException.class, () -> solver(point(0.9, -0.3, -0.2, 1e-9, around)).potential(new Place(0, 0.1, 0)));
             assertThrows(AuthorException.class, () -> solver(charge(Bodies.ball(m(0.95)), "1", around)).electricField(new Place(0, 0.1, 0)));
         }

@@ -265,6 +265,12 @@ class WordsTest {
         assertTrue(said().contains("ground planes z = 0 and z = H (4 m)"), said());
         Distribution box = desk.work(() -> pointCharge(at("1 m", "1 m", "1 m"), "2 nC").inside(groundedBox(at(0, 0, 0), at("2 m", "2 m", "H"))));
         assertEquals(0, desk.work(() -> box.potential(at("2 m", "1 m", "1 m"))).si());
+        Distribution drum = desk.work(() -> pointCharge(at(0, 0, "1 m"), "2 nC").inside(groundedDrum("z", at(0, 0, 0), "R_s", "0", "H")));
+        assertEquals(0, desk.work(() -> drum.potential(at("R_s", 0, "1 m"))).si());
+        assertTrue(said().contains("radius R_s (1.8 m), ends at z = 0 and z = H (4 m)"), said());
+        assertTrue(desk.work(() -> drum.inducedDensity(at("R_s", 0, "1 m"))).si() < 0);
+        assertTrue(complaint(() -> drum.inducedDensity(at("1 m", 0, "2 m"))).contains("0.8 m from the surface"));
+        assertTrue(desk.work(() -> pointCharge(at(0, 0, "1 m"), "2 nC").inside(groundedTube("z", at(0, 0, 0), "R_s")).potential(at(0, 0, 0))).si() > 0);
         Distribution alone = desk.work(() -> noCharge().outside(floatingSphere(at(0, 0, 0), "0.5 m", "3 nC")));
         near(3e-9 / (4 * Math.PI * EPS0 * 2), desk.work(() -> alone.potential(at("2 m", 0, 0))));
         near(50, desk.work(() -> noCharge().outside(sphereHeldAt("100 V", at(0, 0, 0), "0.5 m")).potential(at("1 m", 0, 0))));
