@@ -144,14 +144,16 @@ final class Crowd {
         double[][] out = new double[3][BLOCK];
         double[] q = new double[BLOCK];
         int rows = paver.isPotential() ? 1 : 3;
-        double absolute = 0;
+        double[] doubt = new double[BLOCK];
+        Green part = green.forPatch();
+        double missing = 0;
         double size = 0;
         for (int first = 0; first < charges.count(); first += BLOCK) {
             int n = charges.copy(first, BLOCK, s, q);
             if (paver.isPotential()) {
-                green.potential(s, n, out[0]);
+                part.potential(s, n, out[0], doubt);
             } else {
-                green.field(s, n, out);
+                part.field(s, n, out, doubt);
             }
             for (int i = 0; i < n; i++) {
                 double length = 0;
@@ -159,14 +161,13 @@ final class Crowd {
                     paver.start[a] += q[i] * out[a][i];
                     length += out[a][i] * out[a][i];
                 }
-                absolute += Math.abs(q[i]);
+                missing += Math.abs(q[i]) * doubt[i];
                 size += Math.abs(q[i]) * Math.sqrt(length);
             }
         }
-        double bound = absolute * (paver.isPotential() ? green.potentialError() : green.fieldError());
         double rounding = Math.min(charges.count(), 1e4) * Sampler.EPS;
         for (int a = 0; a < rows; a++) {
-            error[a] += bound + (green.relativeError() + 4 * Sampler.EPS + rounding) * size;
+            error[a] += missing + (4 * Sampler.EPS + rounding) * size;
         }
     }
 

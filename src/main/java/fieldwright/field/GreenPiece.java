@@ -10,7 +10,7 @@ import fieldwright.integral.Integrand;
 /** Density times measure times a smooth {@link Green} part over a patch: boxes of parameters as they are. */
 final class GreenPiece implements Integrand {
     /** Noise is taken as independent from node to node, doubt is not: the root of a usual number of nodes. */
-    private static final double ALIKE = 8;
+    private static final double ALIKE = 5;
     private static final int[] ORDERS = {0, 20, 14, 10};
 
     private final Patch patch;

@@ -14,11 +14,11 @@ import org.apache.commons.math3.special.Erf;
  * images, over the range of τ where exp(−d²/4τ − λτ), λ the lowest eigenvalue, is over exp(−40) of its largest: so that the exponential
  * decay along the walls keeps its relative accuracy.
  *
- * <p>Accuracy: rest 3e-14/L and 1e-12/L² with L the smallest distance of walls; whole 3e-13 of itself (measured in the tests against
+ * <p>Accuracy: rest 3e-14/L and 2e-13/L² with L the smallest distance of walls; whole 3e-13 of itself (measured in the tests against
  * series of other kinds, mpmath).
  */
 final class WalledGreen implements Green {
-    private static final int REST = 40;
+    private static final int REST = 48;
     private static final int WHOLE = 48;
     private static final int TERMS = 17;
     /** In units of the square of the distance of walls: above it the sine series is shorter. */
@@ -134,7 +134,7 @@ final class WalledGreen implements Green {
                 out[k][i] = -gradient[k];
                 size += Math.abs(gradient[k]);
             }
-            doubt[i] = whole ? 3e-13 * size : 1e-12 / (least * least);
+            doubt[i] = whole ? 3e-13 * size : 2e-13 / (least * least);
         }
     }
 
