@@ -10,6 +10,8 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.function.Function;
+import java.util.function.Supplier;
 import java.util.stream.Stream;
 
 /** One line of a profile: what to ask of which charge, or a formula of the coordinates. Immutable. */
@@ -19,11 +21,13 @@ public final class Curve {
     private final String label;
     private final String asked;
     private final Along along;
+    private final Supplier<Function<List<Place>, List<Amount>>> sampling;
 
-    private Curve(String label, String asked, Along along) {
+    private Curve(String label, String asked, Along along, Supplier<Function<List<Place>, List<Amount>>> sampling) {
         this.label = label;
         this.asked = asked;
         this.along = along;
+        this.sampling = sampling;
     }
 
     /** Values along a path. A place where the value jumps has two, in the order of the path. */
@@ -47,7 +51,7 @@ public final class Curve {
     /** @param ask {@code "|E|"}, {@code "E_z"}, {@code "D_rho"}, … or {@code "V"} */
     static Curve of(String label, Distribution charge, String ask) {
         if (ask.equals("V")) {
-            return new Curve(label, "V", stops -> each(charge.potentials(places(stops))));
+            return new Curve(label, "V", stops -> each(charge.potentials(places(stops))), charge::potentialSampling);
         }
         boolean size = ask.equals("|E|") || ask.equals("|D|");
         String component = ask.length() > 2 ? ask.substring(2) : "";
@@ -63,12 +67,35 @@ public final class Curve {
                 values.add(sides(fields.get(i), stops, i, component));
             }
             return values;
+        }, () -> {
+            Function<List<Place>, List<Vector>> fields = charge.fieldSampling(displacement);
+            return places -> fields.apply(places).stream().map(field -> single(field, component)).toList();
         });
     }
 
     static Curve of(String label, Object formula) {
         Formula bound = Given.formula("curve '" + label + "'", formula);
-        return new Curve(label, "", stops -> stops.stream().map(stop -> List.of(at(stop.place(), bound))).toList());
+        return new Curve(label, "", stops -> stops.stream().map(stop -> List.of(at(stop.place(), bound))).toList(),
+                () -> places -> places.stream().map(place -> at(place, bound)).toList());
+    }
+
+    /** What is drawn of it: what was asked, or the label of a formula. */
+    String quantity() {
+        return asked.isEmpty() ? label : asked;
+    }
+
+    /** Values at any places, one each; keeps what serves the next places. On a charged surface the larger side counts. */
+    Function<List<Place>, List<Amount>> sampling() {
+        return sampling.get();
+    }
+
+    private static Amount single(Vector field, String component) {
+        if (!field.isSided()) {
+            return part(field, component);
+        }
+        Amount plus = part(field.plusSide(), component);
+        Amount minus = part(field.minusSide(), component);
+        return Math.abs(plus.si()) >= Math.abs(minus.si()) ? plus : minus;
     }
 
     private static List<Place> places(List<Path.Stop> stops) {

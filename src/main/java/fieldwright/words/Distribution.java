@@ -5,6 +5,11 @@ import fieldwright.charge.Surroundings;
 import fieldwright.field.Accuracy;
 import fieldwright.field.ClosedForms;
 import fieldwright.field.FieldSolver;
+import fieldwright.field.ManyPlaces;
+import fieldwright.field.search.DecayExponent;
+import fieldwright.field.search.FieldLine;
+import fieldwright.field.search.Peak;
+import fieldwright.field.tree.Workers;
 import fieldwright.output.Output;
 import fieldwright.quantity.Amount;
 import fieldwright.quantity.AuthorException;
@@ -241,16 +246,52 @@ public final class Distribution {
         return ask(solver -> solver.inducedDensity(place));
     }
 
+    /** The largest field strength over a line, surface or volume. */
+    public FieldPeak peakField(Shape region) {
+        return ask(solver -> new FieldPeak(Peak.over(region.region(), solver, Peak.WITHIN)), searching());
+    }
+
+    /** How fast the field falls along a path, -d ln|E| / d ln s: the mean between its ends. 1 for a line, 2 for a point, 3 for a dipole. */
+    public Amount decayExponent(Path path) {
+        return ask(solver -> DecayExponent.mean(solver, path::place, path.from(), path.to()));
+    }
+
+    /** The same at one place of the path, given by the coordinate or distance that runs. */
+    public Amount decayExponent(Path path, Object at) {
+        double s = Given.length("decayExponent, at", at);
+        return ask(solver -> DecayExponent.at(solver, path::place, s, path.from(), path.to()));
+    }
+
     List<Vector> electricFields(List<Place> places) {
-        return askMany(solver -> places.stream().map(solver::electricField).toList());
+        return fieldSampling(false).apply(places);
     }
 
     List<Vector> fluxDensities(List<Place> places) {
-        return askMany(solver -> places.stream().map(solver::fluxDensity).toList());
+        return fieldSampling(true).apply(places);
     }
 
     List<Amount> potentials(List<Place> places) {
-        return askMany(solver -> places.stream().map(place -> potential(solver, place)).toList());
+        return potentialSampling().apply(places);
+    }
+
+    /** E, or D, at one place or many, for pictures; many on all processors. */
+    Function<List<Place>, List<Vector>> fieldSampling(boolean displacement) {
+        return ask(solver -> places -> places.size() == 1
+                ? List.of(displacement ? solver.fluxDensity(places.get(0)) : solver.electricField(places.get(0)))
+                : displacement ? many().fluxDensities(places) : many().electricFields(places), drawing());
+    }
+
+    /** V likewise. */
+    Function<List<Place>, List<Amount>> potentialSampling() {
+        return ask(solver -> places -> places.size() == 1 ? List.of(potential(solver, places.get(0))) : many().potentials(places, zero), drawing());
+    }
+
+    List<FieldLine> fieldLines(List<Place> starts, double reach) {
+        return ask(solver -> starts.stream().map(start -> FieldLine.through(start, solver, reach)).toList(), searching());
+    }
+
+    private ManyPlaces many() {
+        return ManyPlaces.of(source, drawing(), Workers.all());
     }
 
     private Amount potential(FieldSolver solver, Place place) {
@@ -262,9 +303,18 @@ public final class Distribution {
     }
 
     /** For pictures, which show six digits at most. */
-    private <T> T askMany(Function<FieldSolver, T> question) {
+    private Accuracy drawing() {
+        return atMost(1e-6);
+    }
+
+    /** For searches, which ask a thousand times. */
+    private Accuracy searching() {
+        return atMost(1e-8);
+    }
+
+    private Accuracy atMost(double relative) {
         Accuracy accuracy = asked.of(Desk.current().accuracy());
-        return ask(question, accuracy.withRelative(Math.max(accuracy.relative(), 1e-6)));
+        return accuracy.withRelative(Math.max(accuracy.relative(), relative));
     }
 
     private <T> T ask(Function<FieldSolver, T> question, Accuracy accuracy) {

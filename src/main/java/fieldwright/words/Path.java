@@ -69,6 +69,19 @@ public final class Path {
         return unit.text();
     }
 
+    double from() {
+        return from;
+    }
+
+    double to() {
+        return to;
+    }
+
+    /** Where s (m, or rad) lies. */
+    Place place(double s) {
+        return place.apply(s);
+    }
+
     /** Evenly spread, both ends among them. */
     List<Stop> stops(int count) {
         List<Stop> stops = new ArrayList<>();

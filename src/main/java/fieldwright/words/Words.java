@@ -1,7 +1,9 @@
 package fieldwright.words;
 
 import fieldwright.charge.Charge;
+import fieldwright.charge.ChargedPolyline;
 import fieldwright.charge.PointCharge;
+import fieldwright.charge.PointCloud;
 import fieldwright.charge.Surroundings;
 import fieldwright.formula.Formula;
 import fieldwright.geometry.Bodies;
@@ -128,6 +130,35 @@ public final class Words {
             }
         }
         return found.equals(Units.CHARGE) ? "Divide the charge by the region's measure." : "Check its units.";
+    }
+
+    // Very many charges, numbers alone
+
+    /**
+     * Point charges from numbers, up to a million and more: {@code pointCloud("mm", "pC", x, y, z, charge)}. Lists from elsewhere are read
+     * by {@link #pointCloud(String, String, String)}.
+     */
+    public static Distribution pointCloud(String lengthUnit, String chargeUnit, double[] x, double[] y, double[] z, double[] charge) {
+        double[][] si = Rows.si("pointCloud", lengthUnit, chargeUnit, Units.CHARGE, x, y, z, charge);
+        return Distribution.of("point cloud", PointCloud.of(si[0], si[1], si[2], si[3]));
+    }
+
+    /** Point charges from a list: a line for each, x, y, z and charge apart by comma, semicolon or space; a # starts a remark. */
+    public static Distribution pointCloud(String lengthUnit, String chargeUnit, String rows) {
+        double[][] c = Rows.parse("pointCloud", rows);
+        return pointCloud(lengthUnit, chargeUnit, c[0], c[1], c[2], c[3]);
+    }
+
+    /** A line of very many straight sides from numbers: its corners and the charge per length there, linear between. */
+    public static Distribution chargedPolyline(String lengthUnit, String densityUnit, double[] x, double[] y, double[] z, double[] density) {
+        double[][] si = Rows.si("chargedPolyline", lengthUnit, densityUnit, Units.LINE_DENSITY, x, y, z, density);
+        return Distribution.of("charged polyline", ChargedPolyline.of(si[0], si[1], si[2], si[3]));
+    }
+
+    /** The same from a list: a line for each corner, x, y, z and charge per length. */
+    public static Distribution chargedPolyline(String lengthUnit, String densityUnit, String rows) {
+        double[][] c = Rows.parse("chargedPolyline", rows);
+        return chargedPolyline(lengthUnit, densityUnit, c[0], c[1], c[2], c[3]);
     }
 
     // Charge without ends: limits of their own
@@ -478,6 +509,35 @@ public final class Words {
                     + coordinate + "\", from, to, at(…)).");
         }
         return Path.along(coordinate, from, to, new Place(0, 0, 0));
+    }
+
+    /** A rectangle of places for maps: two of x, y, z, or rho with z; the other coordinates are those of {@code through}. */
+    public static Window window(String across, Object from, Object to, String up, Object bottom, Object top, Place through) {
+        return Window.of(across, from, to, up, bottom, top, through);
+    }
+
+    /** Through the origin. */
+    public static Window window(String across, Object from, Object to, String up, Object bottom, Object top) {
+        return Window.of(across, from, to, up, bottom, top, new Place(0, 0, 0));
+    }
+
+    /** Lines on which what a curve asks takes a level each; round levels are chosen when none are named. */
+    public static void map(String title, String unit, Window window, Curve curve, Object... levels) {
+        if (Desk.current().mode() == Desk.Mode.WORKING) {
+            Desk.current().show(Maps.contours(title, unit, window, curve, Maps.levels(unit, levels)));
+        }
+    }
+
+    /** Lines of equal potential; round levels are chosen when none are named. */
+    public static void equipotentials(String title, String unit, Window window, Distribution charge, Object... levels) {
+        map(title, unit, window, curve("V", charge, "V"), levels);
+    }
+
+    /** Field lines through places, in both directions, seen square to the window; the remarks say how they end. */
+    public static void fieldLines(String title, Window window, Distribution charge, Place... through) {
+        if (Desk.current().mode() == Desk.Mode.WORKING) {
+            Desk.current().show(Maps.lines(title, window, charge, List.of(through)));
+        }
     }
 
     /** A table, one column beside the other. */
