@@ -277,7 +277,8 @@ public final class FieldSolver {
             error[a] = r.error()[a] + placeError[a] + paver.rimError() + paver.roughness() * size + ROUNDING * Math.abs(r.value()[a]);
             errorSize += error[a] * error[a];
         }
-        Standing standing = standing("field", r, Math.sqrt(errorSize), size, norm(r.magnitude()), paver.roughness(), scale,
+        Standing standing = standing("field", r, Math.sqrt(errorSize), Math.max(size, 0.5 * norm(contact.jump())), norm(r.magnitude()),
+            Math.max(paver.roughness(), paver.offsetRounding()), scale,
             unit.equals(Units.FIELD) ? "V/m" : "C/m^2");
         if (contact.isFolded()) {
             standing = Standing.notConverged("two charged surfaces meet or cross here: the field has more than two values at this place");
@@ -461,7 +462,7 @@ public final class FieldSolver {
         Cubature.Result r = integrate(paver, 1, false, scale);
         double value = r.value()[0];
         double error = r.error()[0] + pointError[0] + ROUNDING * Math.abs(value) + paver.roughness() * Math.abs(value);
-        Standing standing = standing("potential", r, error, Math.abs(value), r.magnitude()[0], paver.roughness(), scale, "V");
+        Standing standing = standing("potential", r, error, Math.abs(value), r.magnitude()[0], Math.max(paver.roughness(), paver.offsetRounding()), scale, "V");
         double stated = scale * error + 8 * Sampler.EPS * Math.abs(view.potential());
         return Amount.si(scale * value + view.potential(), Double.isNaN(stated) ? Double.POSITIVE_INFINITY : stated, Units.POTENTIAL, standing);
     }

@@ -28,7 +28,16 @@ final class Paver {
     private final boolean potential;
     private final Workspace space;
     private double roughness;
+    private double offsetRounding;
     private double rimError;
+
+    /**
+     * Part of the answer that is lost where positions are differences of absolute ones (parametric surfaces), close above them: it is
+     * in the error already, and no more can be had.
+     */
+    double offsetRounding() {
+        return offsetRounding;
+    }
 
     /** Part of the answer that is lost to the rounding of the place itself: near lines, eps·size/gap. */
     double roughness() {
@@ -444,6 +453,9 @@ final class Paver {
         if (isEdge && s.patch.dimension() == 2) {
             besideRim(s, foot, height);
         }
+        if (s.patch.kernel().isEndless()) {
+            besideRims(s, from, to);
+        }
         if (!isEdge && !(height > touching(s, foot))) {
             height = 0;
             double sigma = s.densityAt(foot);
@@ -460,6 +472,16 @@ final class Paver {
         }
         segment(s, at, to, speed, height, pole, 1);
         segment(s, at, from, speed, height, pole, -1);
+    }
+
+    /** Edges of a sheet that is endless along the kernel's axis. */
+    private void besideRims(Sampler s, double from, double to) {
+        for (double end : new double[] {from, to}) {
+            if ((end == 0 || end == 1) && !s.chart.isFullTurn(s.facet.axes[0])) {
+                Chart.Anchor rim = s.anchor(end);
+                besideRim(s, rim, norm(s.toAnchor(rim)));
+            }
+        }
     }
 
     /** A stack of endless planes: the field of each jumps at itself, so the stack is cut at the place. */
@@ -625,6 +647,7 @@ final class Paver {
             return BENT_RAYS;
         }
         double height = Math.hypot(norm(b), lift(s));
+        roundsOffsets(s, apex, height);
         if (!(height > touching(s, apex))) {
             height = 0;
             if (!potential && s instanceof Sampler.Coulomb && s.patch.kernel() == Kernel.POINT && !onTip(s, from, to, tip, ray)) {
@@ -752,6 +775,7 @@ final class Paver {
         double height = Math.hypot(norm(b), lift);
         double[][] pole = null;
         double sigma = 0;
+        roundsOffsets(s, foot, height);
         if (!(height > touching(s, foot))) {
             height = 0;
             if (!potential && s instanceof Sampler.Coulomb && s.patch.kernel() == Kernel.POINT) {
@@ -785,8 +809,14 @@ final class Paver {
         return true;
     }
 
+    private void roundsOffsets(Sampler s, Chart.Anchor foot, double height) {
+        if (!s.chart.hasExactOffsets() && height > touching(s, foot)) {
+            offsetRounding = Math.max(offsetRounding, touching(s, foot) / (4 * height));
+        }
+    }
+
     private void besideRim(Sampler s, Chart.Anchor foot, double distance) {
-        double rounding = touching(s, foot) / 4;
+        double rounding = touching(s, foot) / 2;
         if (potential || !(rounding > 1e-14 * distance) || !(distance > 0)) {
             return;
         }

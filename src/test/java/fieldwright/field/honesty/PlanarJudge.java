@@ -40,7 +40,7 @@ final class PlanarJudge {
         this.foot = foot;
         this.height = height;
         scale = Math.max(distance, Charged.LEAST);
-        along = DoubleExponential.outer(setting);
+        along = new DoubleExponential(setting);
         across = new DoubleExponential(setting);
     }
 

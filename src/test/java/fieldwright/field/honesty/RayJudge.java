@@ -36,7 +36,7 @@ final class RayJudge {
         this.body = body;
         this.density = density;
         this.from = from;
-        azimuth = DoubleExponential.outer(setting);
+        azimuth = new DoubleExponential(setting);
         polar = new DoubleExponential(setting);
         double[][] rule = clenshawCurtis(radialNodes + setting.extraRadialNodes());
         ray = rule[0];
