@@ -165,7 +165,7 @@ final class Panel {
         }
     }
 
-    private static final double UNEVEN = 3e-3;
+    private static final double UNEVEN = 0.02;
 
     /** A needle's tip is so small a part of its box that no rule over the whole of it would see it. */
     private static boolean isUneven(double[][] t, int along, int across) {

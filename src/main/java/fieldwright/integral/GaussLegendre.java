@@ -86,11 +86,11 @@ public final class GaussLegendre {
      * {@code weighted[c][i]} is weight times component c at node i; {@code noise[c]} what rounding alone may leave; the result goes
      * to {@code error}. Pairs of coefficients are taken together because one of each pair vanishes for even or odd functions; the
      * decay is that of all components together. The rule's error is the function's coefficient near degree 2·order, so a geometric
-     * decay is carried on over part of that distance; without decay the last coefficients themselves are the estimate.
-     * Returns the decay per two degrees, 1 when there is none: errors go about as decay^(0.9·order). Where smoothness is not known
-     * the last coefficients are the estimate and go as their own decay^(0.5·order), which is put in these terms.
+     * decay is carried on over part of that distance, {@code carry} times the order, at most a half; where smoothness is not known
+     * that is 0, and there, or without decay, the last coefficients themselves are the estimate.
+     * Returns the factor by which errors go down per order, 1 when they do not.
      */
-    double errors(double[][] weighted, int components, boolean smooth, double[] noise, double[] error) {
+    double errors(double[][] weighted, int components, double carry, double[] noise, double[] error) {
         double[] last = new double[components];
         double top = 0;
         double before = 0;
@@ -111,12 +111,12 @@ public final class GaussLegendre {
         double ratio = 1;
         if (order >= 6 && Math.sqrt(top) > allNoise) {
             ratio = Math.max(Math.sqrt(Math.sqrt(top / first)), 0.25 * Math.sqrt(top / before));
-            factor = smooth && ratio < 0.9 ? 20 * Math.pow(ratio, 0.4 * order) : 20;
+            factor = ratio < 0.9 ? 20 * Math.pow(ratio, carry * order) : 20;
         }
         for (int c = 0; c < components; c++) {
             error[c] = (last[c] <= noise[c] ? 0 : factor * last[c]) + noise[c];
         }
-        return Math.min(1, smooth ? ratio : Math.pow(ratio, 0.5 / 0.9));
+        return Math.min(1, Math.pow(ratio, 0.5 + carry));
     }
 
     private double pair(double[] weighted, int degree) {

@@ -15,8 +15,9 @@ final class DoubleExponential {
     private static final double SMALLEST = 1e-19;
     /** Angles and logarithms of order one have no digits beyond this. */
     private static final double RESOLUTION = 1e-14;
-    /** Beyond this nothing is bisected any more; the two settings then differ, which shows. */
-    private static final long BUDGET = 200_000;
+    /** Evaluations of an inner and an outer level beyond which nothing is bisected any more; the two settings then differ, which shows. */
+    private static final long BUDGET = 100_000;
+    private static final long OUTER_BUDGET = 1_500;
 
     /** f at x in [a, b]; both distances from the ends are exact to the last digits, x itself only to eps·|x|. */
     interface Integrand {
@@ -44,9 +45,20 @@ final class DoubleExponential {
     private final double[] peak = new double[SIZE];
     private int deepest = DEEPEST;
     private long evaluations;
+    private final long budget;
 
     DoubleExponential(Setting setting) {
+        this(setting, BUDGET);
+    }
+
+    /** The outer level of a nest, each of whose evaluations is an integral. */
+    static DoubleExponential outer(Setting setting) {
+        return new DoubleExponential(setting, OUTER_BUDGET);
+    }
+
+    private DoubleExponential(Setting setting, long budget) {
         this.setting = setting;
+        this.budget = budget;
         for (int level = 0; level < LEVELS; level++) {
             double h = setting.step / (1 << level);
             double[] q = new double[4096];
@@ -107,7 +119,7 @@ final class DoubleExponential {
             nodes(level, start, length, after);
             double change = change(h);
             boolean done = error(change, h, length) <= setting.tolerance && (level > 1 || change == 0);
-            boolean last = depth >= deepest || length < RESOLUTION || evaluations > BUDGET;
+            boolean last = depth >= deepest || length < RESOLUTION || evaluations > budget;
             if (done || last && level == LEVELS - 1) {
                 for (int c = 0; c < SIZE; c++) {
                     total[c] += sum[c] * h * length;

@@ -21,7 +21,7 @@ import java.util.function.Function;
  * TABLE keeps the judge's values from run to run (default target/honesty-SEED.csv).
  */
 public final class HonestyRun {
-    private static final long FIRST_SEED = 1;
+    static final long SEED = 1;
     private static final int DECADES = 9;
     private static final int LISTED = 25;
 
@@ -30,7 +30,7 @@ public final class HonestyRun {
     public static void main(String[] args) throws IOException {
         Locale.setDefault(Locale.ROOT);
         int count = args.length > 0 ? Integer.parseInt(args[0]) : 5000;
-        long seed = args.length > 1 ? Long.parseLong(args[1]) : FIRST_SEED;
+        long seed = args.length > 1 ? Long.parseLong(args[1]) : SEED;
         Path table = Path.of(args.length > 2 ? args[2] : "target/honesty-" + seed + ".csv");
         int first = args.length > 3 ? Integer.parseInt(args[3]) : 0;
         long start = System.nanoTime();

@@ -337,4 +337,64 @@ class LawProperties {
         assertTrue(Math.hypot(pair.onSide("+z").x().si(), pair.onSide("+z").y().si()) <= 1e-8 * free, () -> "E along the plane: " + pair);
         assertTrue(pair.onSide("-z").magnitude().si() == 0, "no field in the conductor");
     }
+
+    /** A wall, a point of it and the direction away from it, where the charge is. */
+    private record Wall(Surroundings around, double[] on, double[] inward) {
+        static Wall of(int kind, double a, Random random) {
+            double s = a * (random.nextDouble() - 0.5);
+            double t = a * (random.nextDouble() - 0.5);
+            double[] n = direction(random);
+            return switch (kind) {
+                case 0 -> new Wall(new Surroundings.GroundedSphere(0, 0, 0, a, false), plus(new double[3], a, n), plus(new double[3], -1, n));
+                case 1 -> new Wall(new Surroundings.GroundedSphere(0, 0, -2.5 * a, a, true), plus(new double[] {0, 0, -2.5 * a}, a, n), n);
+                case 2 -> new Wall(new Surroundings.GroundedCorner(new Surroundings.GroundPlane("x", -a, 1), new Surroundings.GroundPlane("z", -a, 1)),
+                        new double[] {-a, s, t}, new double[] {1, 0, 0});
+                case 3 -> new Wall(new Surroundings.GroundedPair("z", -a, a), new double[] {s, t, a}, new double[] {0, 0, -1});
+                default -> new Wall(new Surroundings.GroundedBox(-a, a, -a, a, -a, a), new double[] {s, a, t}, new double[] {0, -1, 0});
+            };
+        }
+    }
+
+    /** Off a grounded wall V grows as E times the distance, so that 2 V(d) − V(2d) is V on the wall but for what is of second order. */
+    @Property(tries = 10, seed = SEED, shrinking = ShrinkingMode.OFF)
+    void potentialIsZeroOnGroundedWalls(@ForAll @IntRange(max = 50_000) int number, @ForAll @IntRange(max = 4) int kind) {
+        Problem p = problem(number, 0);
+        Charge charge = p.spec().charge(p.density(), Exact.Placing.NONE);
+        Wall wall = Wall.of(kind, 3 * p.size(), new Random(number));
+        FieldSolver solver = FieldSolver.of(charge.with(wall.around), ACCURACY);
+        double d = 1e-3 * p.size();
+        double[] near = plus(wall.on, d, wall.inward);
+        double onWall = 2 * potential(solver, near) - potential(solver, plus(wall.on, 2 * d, wall.inward));
+        double[] e = field(solver, near);
+        double[] free = field(FieldSolver.of(charge, ACCURACY), near);
+        assertTrue(Math.abs(onWall) <= 1e-2 * length(free) * d, () -> onWall + " V on " + wall.around + ", " + length(free) + " V/m without: " + p);
+        double normal = e[0] * wall.inward[0] + e[1] * wall.inward[1] + e[2] * wall.inward[2];
+        double along = length(plus(e, -normal, wall.inward));
+        assertTrue(along <= 1e-2 * length(free), () -> along + " V/m along " + wall.around + ", " + length(free) + " V/m without: " + p);
+    }
+
+    @Property(tries = 10, seed = SEED, shrinking = ShrinkingMode.OFF)
+    void fluxDensityAcrossAndFieldAlongADielectricFaceAreContinuous(@ForAll @IntRange(max = 50_000) int number) {
+        Problem p = problem(number, 0);
+        Random random = new Random(number);
+        double face = -3 * p.size();
+        double here = 1 + 3 * random.nextDouble();
+        double behind = 1 + 9 * random.nextDouble();
+        Charge charge = p.spec().charge(p.density(), Exact.Placing.NONE);
+        FieldSolver solver = FieldSolver.of(charge.with(new Surroundings.DielectricHalfSpace("z", face, 1, here, behind)), ACCURACY);
+        double h = 1e-7 * p.size();
+        double[] on = {p.size() * random.nextDouble(), p.size() * random.nextDouble(), face};
+        double[] up = field(solver, plus(on, h, new double[] {0, 0, 1}));
+        double[] down = field(solver, plus(on, -h, new double[] {0, 0, 1}));
+        double size = length(up) + length(down);
+        assertTrue(Math.abs(up[0] - down[0]) + Math.abs(up[1] - down[1]) <= 1e-6 * size, () -> "E along the face: " + p);
+        assertTrue(Math.abs(here * up[2] - behind * down[2]) <= 1e-6 * behind * size, () -> "D across the face: " + p);
+        Vector d = solver.fluxDensity(new Place(on[0], on[1], on[2]));
+        assertTrue(Math.abs(d.onSide("+z").z().si() - d.onSide("-z").z().si()) <= d.onSide("+z").z().error() + d.onSide("-z").z().error(),
+                () -> "D across the face, on it: " + d);
+        assertTrue(Math.abs(d.onSide("+z").z().si() - Judged.EPS0 * here * up[2]) <= 1e-6 * Judged.EPS0 * here * size, () -> "D is eps E: " + d);
+        double step = potential(solver, plus(on, h, new double[] {0, 0, 1})) - potential(solver, plus(on, -h, new double[] {0, 0, 1}));
+        double bound = 2 * h * size + 2e-9 * Math.abs(potential(solver, on));
+        assertTrue(Math.abs(step) <= bound, () -> step + " V from side to side: " + p);
+    }
 }

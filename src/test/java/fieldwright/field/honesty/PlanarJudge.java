@@ -40,7 +40,7 @@ final class PlanarJudge {
         this.foot = foot;
         this.height = height;
         scale = Math.max(distance, Charged.LEAST);
-        along = new DoubleExponential(setting);
+        along = DoubleExponential.outer(setting);
         across = new DoubleExponential(setting);
     }
 

@@ -36,7 +36,7 @@ final class RayJudge {
         this.body = body;
         this.density = density;
         this.from = from;
-        azimuth = new DoubleExponential(setting);
+        azimuth = DoubleExponential.outer(setting);
         polar = new DoubleExponential(setting);
         double[][] rule = clenshawCurtis(radialNodes + setting.extraRadialNodes());
         ray = rule[0];

@@ -62,7 +62,7 @@ final class RevolutionJudge {
         nearestZ = profile.exactZ(nearest).doubleValue();
         scale = Math.max(distance, Charged.LEAST) / profile.speed(nearest);
         this.arc = arc == null ? new double[] {-Math.PI, 0, 0, Math.PI} : relative(arc, azimuth0);
-        meridian = new DoubleExponential(setting);
+        meridian = DoubleExponential.outer(setting);
         ring = new DoubleExponential(setting);
     }
 
