@@ -24,6 +24,13 @@ final class ItemsLook {
             System.out.printf("%-3s new %8.1f us  x%8.1f   kept %8.1f us  x%8.1f   evaluations %d %s%n", item, fresh * 1e6, item.peer / fresh,
                 kept * 1e6, item.peer / kept, solver.evaluations(), v.standing().isConverged() ? "" : v.standing());
         }
+        if (args.length < 2 || args[1].equals("F")) {
+            MapBench.map(Item.F.parsed(0));
+            MapBench.map(Item.F.parsed(0));
+            long start = cpu();
+            sink += MapBench.map(Item.F.parsed(0));
+            System.out.printf("F   map %8.3f s%n", (cpu() - start) * 1e-9);
+        }
         System.out.printf("geometric mean: new x%.1f kept x%.1f%n", Math.exp(logNew / 11), Math.exp(logKept / 11));
     }
 

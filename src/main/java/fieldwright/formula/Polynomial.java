@@ -166,7 +166,8 @@ public final class Polynomial {
 
         private double[][] constant(Node n) {
             double[] c = new double[count(degree)];
-            c[0] = Compiler.compile(n, java.util.List.of(), "", null).at();
+            c[0] = n instanceof Node.Known k ? k.amount().si() : n instanceof Node.Literal l ? l.value()
+                : n instanceof Node.Measure m ? m.amount().si() : Compiler.compile(n, java.util.List.of(), "", null).at();
             return new double[][] {c, null};
         }
 
