@@ -15,8 +15,8 @@ final class ItemsLook {
                 continue;
             }
             Item.Parsed parsed = item.parsed(args.length > 0 ? Integer.parseInt(args[0]) : 0);
-            double fresh = time(parsed, false);
-            double kept = time(parsed, true);
+            double fresh = args.length > 2 && args[2].equals("kept") ? 1 : time(parsed, false);
+            double kept = args.length > 2 && args[2].equals("new") ? 1 : time(parsed, true);
             FieldSolver solver = FieldSolver.of(parsed.source(), Accuracy.PANELS);
             Vector v = solver.electricField(parsed.place(0, 0));
             logNew += Math.log(item.peer / fresh);

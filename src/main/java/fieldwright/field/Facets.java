@@ -18,11 +18,27 @@ final class Facets {
 
     /**
      * Points all over a patch, from which its distance and size are told: offsets from {@code middle}; {@code radius} is half the
-     * longest side of the box that holds them.
+     * longest side of the box that holds them, {@code length} is along each parameter.
      */
-    record Extent(Chart.Anchor middle, double[][] sample, double radius) {
+    record Extent(Chart.Anchor middle, double[][] sample, double radius, double[] length) {
+        private static final double CANCELLATION = 100;
+
+        /**
+         * Whether a place is so near that integrals along rays from it suit: less than two radii, and not many thicknesses from a thin
+         * patch, where what rays gather before and behind it would cancel. {@code b} is middle minus place, {@code gap} the distance of
+         * some nearer point.
+         */
+        boolean isNear(double[] b, double gap) {
+            double least = least(b);
+            double cancellation = 1;
+            for (double l : length) {
+                cancellation *= Math.max(1, Math.min(gap, least) / l);
+            }
+            return least < 2 * radius && cancellation < CANCELLATION;
+        }
+
         /** The least distance of the points from a place, {@code b} being middle minus place. */
-        double least(double[] b) {
+        private double least(double[] b) {
             double least = Double.POSITIVE_INFINITY;
             for (int i = 0; i < sample[0].length; i++) {
                 double x = b[0] + sample[0][i];
@@ -76,9 +92,31 @@ final class Facets {
                 }
                 radius = Math.max(radius, (high - low) / 2);
             }
-            extent = new Extent(middle, sample, radius);
+            extent = new Extent(middle, sample, radius, lengths(sample, d));
         }
         return extent;
+    }
+
+    /** The longest of the sampled lines along each parameter. */
+    private static double[] lengths(double[][] sample, int d) {
+        double[] length = new double[d];
+        int stride = 1;
+        for (int k = d - 1; k >= 0; k--) {
+            for (int i = 0; i < sample[0].length; i++) {
+                if (i / stride % GRID == 0) {
+                    double sum = 0;
+                    for (int j = 1; j < GRID; j++) {
+                        double x = sample[0][i + j * stride] - sample[0][i + (j - 1) * stride];
+                        double y = sample[1][i + j * stride] - sample[1][i + (j - 1) * stride];
+                        double z = sample[2][i + j * stride] - sample[2][i + (j - 1) * stride];
+                        sum += Math.sqrt(x * x + y * y + z * z);
+                    }
+                    length[k] = Math.max(length[k], sum);
+                }
+            }
+            stride *= GRID;
+        }
+        return length;
     }
 
     /** Edges of a flat surface. */

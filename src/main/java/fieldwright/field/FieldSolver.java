@@ -548,7 +548,7 @@ public final class FieldSolver {
     private Cubature.Result integrate(Paver paver, int components, boolean grouped, double scale) {
         double relative = Math.max(0.5 * accuracy.relative(), 0.5 * paver.roughness());
         Cubature.Goal goal = new Cubature.Goal(relative, 1e-3, accuracy.absoluteFloor() / Math.abs(scale), accuracy.maxEvaluations());
-        Cubature.Result r = Cubature.integrate(paver.pieces, components, grouped, goal, paver.start);
+        Cubature.Result r = Cubature.integrate(paver.pieces, components, grouped, goal, paver.start, space.cubature);
         evaluations += r.evaluations();
         return r;
     }

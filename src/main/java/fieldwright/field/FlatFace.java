@@ -21,7 +21,10 @@ final class FlatFace {
     /** A length of the size of the face, m. */
     private final double size;
 
-    private FlatFace(double[] normal, double height, int degree, double[] forField, double[] forPotential, double[][] plane, double size) {
+    final boolean isSurface;
+
+    private FlatFace(boolean isSurface, double[] normal, double height, int degree, double[] forField, double[] forPotential, double[][] plane, double size) {
+        this.isSurface = isSurface;
         this.size = size;
         this.normal = normal;
         e1 = plane[0];
@@ -38,7 +41,7 @@ final class FlatFace {
         density.about(place, about);
         double[][] plane = plane(normal);
         double[] q = inPlane(about, density.degree(), normal, plane, height);
-        return new FlatFace(normal, height, density.degree(), q, q, plane, size);
+        return new FlatFace(true, normal, height, density.degree(), q, q, plane, size);
     }
 
     /**
@@ -59,7 +62,7 @@ final class FlatFace {
             }
             q[t] = inPlane(about, degree, normal, plane, height);
         }
-        return new FlatFace(normal, height, degree, q[0], q[1], plane, size);
+        return new FlatFace(false, normal, height, degree, q[0], q[1], plane, size);
     }
 
     private static double[][] plane(double[] n) {
@@ -91,6 +94,12 @@ final class FlatFace {
     private static double[] inPlane(double[] c, int degree, double[] n, double[][] plane, double h) {
         int size = (degree + 1) * (degree + 2) / 2;
         double[] out = new double[size];
+        for (int a = 0; a < 3; a++) {
+            if (Math.abs(n[a]) == 1) {
+                acrossAxis(c, degree, a, n[a], h, out);
+                return out;
+            }
+        }
         double[][][] powers = new double[3][degree + 1][];
         for (int a = 0; a < 3; a++) {
             powers[a][0] = new double[] {1};
@@ -115,6 +124,23 @@ final class FlatFace {
             }
         }
         return out;
+    }
+
+    /** As above for a plane across axis a: u is the next coordinate, v the one after it, turned with the normal. */
+    private static void acrossAxis(double[] c, int degree, int a, double sign, double h, double[] out) {
+        int[] e = new int[3];
+        for (int i = 0; i <= degree; i++) {
+            for (int j = 0; i + j <= degree; j++) {
+                e[(a + 1) % 3] = i;
+                e[(a + 2) % 3] = j;
+                double sum = 0;
+                for (int k = degree - i - j; k >= 0; k--) {
+                    e[a] = k;
+                    sum = sum * (h * sign) + c[Polynomial.index(e[0], e[1], e[2])];
+                }
+                out[(i + j) * (i + j + 1) / 2 + j] = j % 2 == 0 ? sum : sum * sign;
+            }
+        }
     }
 
     /** Product of two polynomials in u and v, of given total degrees. */

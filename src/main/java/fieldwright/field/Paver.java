@@ -92,7 +92,7 @@ final class Paver {
     private boolean flatSurface(Facets facets, Sampler whole) {
         Facets.Extent extent = facets.extent();
         double[] b = whole.toAnchor(extent.middle());
-        if (!(extent.least(b) < 2 * extent.radius())) {
+        if (!extent.isNear(b, gap(whole))) {
             return false;
         }
         Facet.Edges edges = facets.edges();
@@ -111,10 +111,18 @@ final class Paver {
         return true;
     }
 
+    /** Distance from the nearest point by coordinates, which is near to the nearest. */
+    private double gap(Sampler s) {
+        if (s.patch.triangle()) {
+            return norm(s.toAnchor(s.anchor(nearestInTriangle(s))));
+        }
+        return s.chart.system() == null ? Double.POSITIVE_INFINITY : norm(s.toAnchor(s.anchor(s.chart.nearest(s.target))));
+    }
+
     /** A place in the plane of a flat surface, off its edge: notes the jump if it is on the surface. False on the edge. */
     private boolean inPlane(Sampler whole, Facet.Edges edges) {
         double[] at = whole.patch.triangle() ? nearestInTriangle(whole)
-            : footOnSurface(whole, new double[2], new double[] {1, 1}, whole.chart.nearest(whole.target));
+            : footOnSurface(whole, new double[2], new double[] {1, 1}, whole.chart.nearest(whole.target), Double.POSITIVE_INFINITY);
         Chart.Anchor foot = whole.anchor(at);
         double touching = touching(whole, foot);
         if (norm(whole.toAnchor(foot)) > 2 * touching) {
@@ -122,7 +130,7 @@ final class Paver {
         }
         for (Facet.Edge facet : edges.all) {
             Sampler.Edge edge = new Sampler.Edge(facet, whole.probe, potential, null);
-            double t = footOnLine(edge, 0, 1, facet.project(at, whole.facet.axes));
+            double t = footOnLine(edge, 0, 1, facet.project(at, whole.facet.axes), Double.POSITIVE_INFINITY);
             if (!(norm(edge.toAnchor(edge.anchor(t))) > 2 * touching)) {
                 return false;
             }
@@ -426,11 +434,11 @@ final class Paver {
         }
         double from = panel.from[0];
         double to = panel.to[0];
-        nearLine(s, from, to, from + (to - from) * ALONG[nearest], lift);
+        nearLine(s, from, to, from + (to - from) * ALONG[nearest], lift, length);
     }
 
-    private void nearLine(Sampler s, double from, double to, double guess, double lift) {
-        double at = footOnLine(s, from, to, guess);
+    private void nearLine(Sampler s, double from, double to, double guess, double lift, double length) {
+        double at = footOnLine(s, from, to, guess, length);
         Chart.Anchor foot = s.anchor(at);
         double[] b = s.toAnchor(foot);
         for (double[] du : space.du) {
@@ -447,8 +455,8 @@ final class Paver {
         double height = Math.hypot(norm(b), lift);
         double[] pole = null;
         boolean isEdge = s instanceof Sampler.Edge;
-        if (!s.patch.kernel().isEndless() && !isEdge) {
-            roughness = Math.max(roughness, (potential ? 0.1 : 1) * Sampler.EPS * (norm(s.seen) + norm(foot.position())) / height);
+        if (!s.patch.kernel().isEndless() && s.steepness() > 0) {
+            roughness = Math.max(roughness, (potential ? 0.1 : 1) * s.steepness() * Sampler.EPS * (norm(s.seen) + norm(foot.position())) / height);
         }
         if (isEdge && s.patch.dimension() == 2) {
             besideRim(s, foot, height);
@@ -535,7 +543,13 @@ final class Paver {
         return new double[] {-2 * sigma * along[0], -2 * sigma * along[1], -2 * sigma * along[2]};
     }
 
-    private double footOnLine(Sampler s, double from, double to, double guess) {
+    /**
+     * A foot need be no nearer to the nearest point than this part of the distance, unless that is itself small against the panel, when it
+     * may have to be told from zero.
+     */
+    private static final double FOOT = 1e-3;
+
+    private double footOnLine(Sampler s, double from, double to, double guess, double length) {
         double at = guess;
         for (int step = 0; step < 30; step++) {
             Chart.Anchor anchor = s.anchor(at);
@@ -547,10 +561,11 @@ final class Paver {
             double[][] t = s.tangent(0);
             double square = t[0][0] * t[0][0] + t[1][0] * t[1][0] + t[2][0] * t[2][0];
             double next = snap(at - (t[0][0] * b[0] + t[1][0] * b[1] + t[2][0] * b[2]) / square, from, to);
-            if (!(Math.abs(next - at) > 1e-15 * (to - from))) {
+            double moved = Math.abs(next - at);
+            at = next;
+            if (!(moved > 1e-15 * (to - from)) || norm(b) > FOOT * length && moved * moved * square < FOOT * FOOT * dot(b, b)) {
                 break;
             }
-            at = next;
         }
         return at;
     }
@@ -740,7 +755,7 @@ final class Paver {
     private void nearSurface(Sampler s, Panel panel, double[] guess, double lift, int depth) {
         double[] from = panel.from;
         double[] to = panel.to;
-        double[] at = footOnSurface(s, from, to, guess);
+        double[] at = footOnSurface(s, from, to, guess, Math.max(panel.length[0], panel.length[1]));
         double[][] corners = {{from[0], from[1]}, {to[0], from[1]}, {to[0], to[1]}, {from[0], to[1]}};
         if (!polar(s, corners, at, lift)) {
             if (depth < DEEPEST) {
@@ -865,7 +880,7 @@ final class Paver {
     }
 
     /** Nearest point of a box, by Gauss-Newton steps kept inside it. */
-    private double[] footOnSurface(Sampler s, double[] from, double[] to, double[] guess) {
+    private double[] footOnSurface(Sampler s, double[] from, double[] to, double[] guess, double length) {
         double[] at = guess;
         double best = Double.POSITIVE_INFINITY;
         double[] bestAt = guess.clone();
@@ -892,8 +907,10 @@ final class Paver {
             double r1 = -(t1[0][0] * b[0] + t1[1][0] * b[1] + t1[2][0] * b[2]);
             double[] next = quadratic(at, from, to, g00, g01, g11, r0, r1);
             double move = Math.max(Math.abs(next[0] - at[0]) / (to[0] - from[0]), Math.abs(next[1] - at[1]) / (to[1] - from[1]));
+            double du = next[0] - at[0];
+            double dv = next[1] - at[1];
             at = next;
-            if (!(move > 1e-15)) {
+            if (!(move > 1e-15) || d > FOOT * length && du * du * g00 + 2 * du * dv * g01 + dv * dv * g11 < FOOT * FOOT * d * d) {
                 break;
             }
         }
@@ -942,7 +959,7 @@ final class Paver {
     private boolean faces(Facets facets, Sampler whole) {
         Facets.Extent extent = facets.extent();
         double[] b = whole.toAnchor(extent.middle());
-        if (!(extent.least(b) < 2 * extent.radius())) {
+        if (!extent.isNear(b, gap(whole))) {
             return false;
         }
         Sampler.Rays rays = rays(whole, extent, b);

@@ -95,6 +95,15 @@ final class Pieces {
         void finish(double[][] u, int n, double[][] out, double[] noise) { }
     }
 
+    private static final double[] NOWHERE = new double[3];
+
+    private static double distance(double[] a, double[] b) {
+        double x = a[0] - b[0];
+        double y = a[1] - b[1];
+        double z = a[2] - b[2];
+        return Math.sqrt(x * x + y * y + z * z);
+    }
+
     /** A box of parameters as it is. */
     static final class Box extends Base {
         private final Panel panel;
@@ -136,9 +145,22 @@ final class Pieces {
             return m;
         }
 
+        /**
+         * So close against what positions are rounded at that the rounding of its anchor would show beside that of its neighbours:
+         * it is then worked from the anchor that all share.
+         */
+        private boolean isClose() {
+            return distance(toOwn, NOWHERE) < 1e-4 * (distance(panel.anchor.position(), NOWHERE) + distance(sampler.seen, NOWHERE));
+        }
+
+        @Override
+        public Integrand half(int direction, boolean low) {
+            return panel == null || isClose() ? null : new Box(sampler, panel.half(direction, low));
+        }
+
         @Override
         public boolean evaluate(TensorRule rule, int block, int n, double[][] out, double[] noise) {
-            if (panel == null) {
+            if (panel == null || isClose()) {
                 return false;
             }
             sampler.act(panel.nodes(rule)[block], panel.anchor, toOwn, n, out, noise);
@@ -170,17 +192,33 @@ final class Pieces {
         }
 
         double at(double w, double length) {
-            return height > 0 ? height * Math.sinh(w) : w * length;
+            return height > 0 ? height * sinh(w) : w * length;
         }
 
-        double slope(double w, double length) {
-            return height > 0 ? height * Math.cosh(w) : length;
+        /** d at/dw where at is {@code r}. */
+        double slope(double r, double length) {
+            return height > 0 ? Math.sqrt(height * height + r * r) : length;
         }
+    }
+
+    /** sinh, by its series where the exponential would cancel. */
+    static double sinh(double x) {
+        if (Math.abs(x) < 0.5) {
+            double q = x * x;
+            return x * (1 + q / 6 * (1 + q / 20 * (1 + q / 42 * (1 + q / 72 * (1 + q / 110 * (1 + q / 156))))));
+        }
+        double e = Math.exp(x);
+        return 0.5 * (e - 1 / e);
+    }
+
+    /** cosh of what has this sinh. */
+    static double cosh(double sinh) {
+        return Math.sqrt(1 + sinh * sinh);
     }
 
     static double asinh(double x) {
         double a = Math.abs(x);
-        double y = a > 1e8 ? Math.log(2 * a) : Math.log1p(a + a * a / (1 + Math.sqrt(a * a + 1)));
+        double y = a > 1e8 ? Math.log(2 * a) : a > 0.7 ? Math.log(a + Math.sqrt(a * a + 1)) : Math.log1p(a + a * a / (1 + Math.sqrt(a * a + 1)));
         return x < 0 ? -y : y;
     }
 
@@ -210,8 +248,9 @@ final class Pieces {
             double span = span();
             for (int i = 0; i < n; i++) {
                 double w = span * u[0][i];
-                du[0][i] = reach * (radius.at(w, length) / length);
-                jacobian[i] = Math.abs(reach) * (radius.slope(w, length) / length) * span;
+                double r = radius.at(w, length);
+                du[0][i] = reach * (r / length);
+                jacobian[i] = Math.abs(reach) * (radius.slope(r, length) / length) * span;
             }
         }
 
@@ -305,16 +344,17 @@ final class Pieces {
         void map(double[][] u, int n, double[][] du) {
             for (int i = 0; i < n; i++) {
                 double v = vA + (vB - vA) * u[1][i];
-                double y = scale * Math.sinh(v);
+                double y = scale * sinh(v);
                 double t = (y - yA) / (yB - yA);
                 double r = Math.sqrt(distance * distance + y * y);
                 double span = radius.span(r);
                 double w = span * u[0][i];
-                double lambda = radius.at(w, r) / r;
+                double at = radius.at(w, r);
+                double lambda = at / r;
                 du[0][i] = lambda * (a[0] + t * side[0]);
                 du[1][i] = lambda * (a[1] + t * side[1]);
-                double dy = scale * Math.cosh(v) * (vB - vA);
-                jacobian[i] = cross * lambda * (radius.slope(w, r) / r * span) * dy / (yB - yA);
+                double dy = Math.sqrt(scale * scale + y * y) * (vB - vA);
+                jacobian[i] = cross * lambda * (radius.slope(at, r) / r * span) * dy / (yB - yA);
                 if (pole != null) {
                     rMax[i] = r;
                     angle[i] = distance * dy / (r * r);
@@ -379,9 +419,10 @@ final class Pieces {
             double span = span();
             for (int i = 0; i < n; i++) {
                 double w = span * u[0][i];
-                du[ray][i] = reach * (radius.at(w, length) / length);
+                double r = radius.at(w, length);
+                du[ray][i] = reach * (r / length);
                 du[1 - ray][i] = from + width * u[1][i];
-                jacobian[i] = Math.abs(reach) * (radius.slope(w, length) / length) * span * width;
+                jacobian[i] = Math.abs(reach) * (radius.slope(r, length) / length) * span * width;
             }
         }
     }
@@ -426,8 +467,9 @@ final class Pieces {
             double span = span();
             for (int i = 0; i < n; i++) {
                 double w = span * u[0][i];
-                double lambda = radius.at(w, length) / length;
-                double volume = Math.abs(reach) * (radius.slope(w, length) / length) * span;
+                double r = radius.at(w, length);
+                double lambda = r / length;
+                double volume = Math.abs(reach) * (radius.slope(r, length) / length) * span;
                 du[depth][i] = lambda * reach;
                 for (int k = 1; k < 3; k++) {
                     int j = (depth + k) % 3;
@@ -439,8 +481,9 @@ final class Pieces {
                     double vA = asinh(low[j] / scale[j]);
                     double vB = asinh(high[j] / scale[j]);
                     double v = vA + (vB - vA) * u[k][i];
-                    du[j][i] = lambda * scale[j] * Math.sinh(v);
-                    volume *= lambda * scale[j] * Math.cosh(v) * (vB - vA);
+                    double sinh = sinh(v);
+                    du[j][i] = lambda * scale[j] * sinh;
+                    volume *= lambda * scale[j] * cosh(sinh) * (vB - vA);
                 }
                 jacobian[i] = volume;
             }

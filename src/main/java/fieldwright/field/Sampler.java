@@ -90,6 +90,11 @@ abstract class Sampler {
         return facet.reach();
     }
 
+    /** Near a line, by what part of itself the field changes when the place moves by its distance. */
+    double steepness() {
+        return 1;
+    }
+
     /** Density at an anchor. */
     double densityAt(Chart.Anchor anchor) {
         for (int k = 0; k < 3; k++) {
@@ -200,6 +205,9 @@ abstract class Sampler {
      * where rays leave it; what they add there cancels between faces.
      */
     static final class Face extends Sampler {
+        /** Below this square of a distance, m², a node is the place itself, where the normal's product with d is zero. */
+        private static final double NO_DISTANCE = 1e-200;
+
         private final Rays rays;
 
         Face(Facet.Face facet, Probe probe, boolean potential, Rays rays) {
@@ -221,8 +229,8 @@ abstract class Sampler {
                 rays.along(seen, n, false, space);
                 for (int i = 0; i < n; i++) {
                     double w = nx[i] * dx[i] + ny[i] * dy[i] + nz[i] * dz[i];
-                    double square = dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i];
-                    double f = square > 0 ? -w * sum[i] / (square * Math.sqrt(square)) : 0;
+                    double square = Math.max(NO_DISTANCE, dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i]);
+                    double f = -w * sum[i] / (square * Math.sqrt(square));
                     out[0][i] = f * dx[i];
                     out[1][i] = f * dy[i];
                     out[2][i] = f * dz[i];
@@ -233,8 +241,8 @@ abstract class Sampler {
                 double[] v = potential ? out[0] : space.v;
                 for (int i = 0; i < n; i++) {
                     double w = nx[i] * dx[i] + ny[i] * dy[i] + nz[i] * dz[i];
-                    double square = dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i];
-                    v[i] = square > 0 ? w * sum[i] / Math.sqrt(square) : 0;
+                    double square = Math.max(NO_DISTANCE, dx[i] * dx[i] + dy[i] * dy[i] + dz[i] * dz[i]);
+                    v[i] = w * sum[i] / Math.sqrt(square);
                 }
             }
             roughen(set, anchor, n, out, noise);
@@ -287,7 +295,7 @@ abstract class Sampler {
         void along(double[] seen, int n, boolean timesT, Workspace space) {
             double[] sum = space.sum;
             if (density == null) {
-                horner(timesT ? forPotential : forField, space.d, n, sum);
+                horner(timesT ? forPotential : forField, space, n);
                 return;
             }
             if (density.isConstant()) {
@@ -313,29 +321,41 @@ abstract class Sampler {
             }
         }
 
-        private void horner(double[] c, double[][] d, int n, double[] out) {
+        private void horner(double[] c, Workspace space, int n) {
+            double[] out = space.sum;
             if (degree == 0) {
                 java.util.Arrays.fill(out, 0, n, c[0]);
                 return;
             }
-            for (int m = 0; m < n; m++) {
-                double x = d[0][m];
-                double y = d[1][m];
-                double z = d[2][m];
-                double s = 0;
-                int at = 0;
-                for (int k = degree; k >= 0; k--) {
-                    double t = 0;
-                    for (int j = degree - k; j >= 0; j--) {
-                        double r = 0;
-                        for (int i = degree - k - j; i >= 0; i--) {
-                            r = r * x + c[at++];
-                        }
-                        t = t * y + r;
+            double[] s = space.horner[0];
+            double[] t = space.horner[1];
+            double[] x = space.d[0];
+            double[] y = space.d[1];
+            double[] z = space.d[2];
+            java.util.Arrays.fill(out, 0, n, 0);
+            int at = 0;
+            for (int k = degree; k >= 0; k--) {
+                java.util.Arrays.fill(t, 0, n, 0);
+                for (int j = degree - k; j >= 0; j--) {
+                    java.util.Arrays.fill(s, 0, n, c[at++]);
+                    for (int i = degree - k - j; i > 0; i--) {
+                        step(s, x, c[at++], n);
                     }
-                    s = s * z + t;
+                    step(t, y, s, n);
                 }
-                out[m] = s;
+                step(out, z, t, n);
+            }
+        }
+
+        private static void step(double[] sum, double[] by, double more, int n) {
+            for (int m = 0; m < n; m++) {
+                sum[m] = sum[m] * by[m] + more;
+            }
+        }
+
+        private static void step(double[] sum, double[] by, double[] more, int n) {
+            for (int m = 0; m < n; m++) {
+                sum[m] = sum[m] * by[m] + more[m];
             }
         }
     }
@@ -347,6 +367,12 @@ abstract class Sampler {
         Edge(Facet.Edge facet, Probe probe, boolean potential, FlatFace face) {
             super(facet, probe, potential);
             this.face = face;
+        }
+
+        /** Towards the edge of a charged surface it grows as 2σ ln(1/distance) beside 2πσ; at that of a volume it is bounded. */
+        @Override
+        double steepness() {
+            return face.isSurface ? 0.3 : 0;
         }
 
         @Override

@@ -8,6 +8,8 @@ final class Workspace {
     static final double[] ZEROS = new double[BLOCK];
 
     final Nodes nodes = new Nodes();
+    final fieldwright.integral.Cubature.Scratch cubature = new fieldwright.integral.Cubature.Scratch();
+    final double[][] horner = new double[3][BLOCK];
     final double[][] du = new double[3][BLOCK];
     final double[][] full = new double[3][];
     final double[][] d = new double[3][BLOCK];

@@ -49,19 +49,32 @@ public final class Cubature {
     private final boolean grouped;
     private final Goal goal;
     private final double[] start;
-    private final double[][] u = new double[3][Integrand.BLOCK];
-    private final double[][] out;
-    private final double[] noise = new double[Integrand.BLOCK];
-    private final double[][][] marginal;
+    private final Scratch scratch;
     private int evaluations;
 
-    private Cubature(int components, boolean grouped, Goal goal, double[] start) {
+    private Cubature(int components, boolean grouped, Goal goal, double[] start, Scratch scratch) {
         this.components = components;
         this.grouped = grouped;
         this.goal = goal;
         this.start = start;
-        out = new double[components][Integrand.BLOCK];
-        marginal = new double[3][components][GaussLegendre.MAX_ORDER];
+        this.scratch = scratch;
+    }
+
+    /** Arrays for one integration at a time, of up to three components; may be used again. */
+    public static final class Scratch {
+        private final double[][] u = new double[3][Integrand.BLOCK];
+        private final double[][] out;
+        private final double[] noise = new double[Integrand.BLOCK];
+        private final double[][][] marginal;
+
+        public Scratch() {
+            this(3);
+        }
+
+        private Scratch(int components) {
+            out = new double[components][Integrand.BLOCK];
+            marginal = new double[3][components][GaussLegendre.MAX_ORDER];
+        }
     }
 
     /**
@@ -69,7 +82,12 @@ public final class Cubature {
      * Errors: none thrown for a bad integrand; a value that is not a number gives status NOT_A_NUMBER.
      */
     public static Result integrate(List<Piece> pieces, int components, boolean grouped, Goal goal, double[] start) {
-        return new Cubature(components, grouped, goal, start).run(pieces);
+        return integrate(pieces, components, grouped, goal, start, new Scratch(components));
+    }
+
+    /** As above, with arrays of the caller's. */
+    public static Result integrate(List<Piece> pieces, int components, boolean grouped, Goal goal, double[] start, Scratch scratch) {
+        return new Cubature(components, grouped, goal, start, scratch).run(pieces);
     }
 
     private static final class Panel {
@@ -84,6 +102,8 @@ public final class Cubature {
         double[] byDirection;
         double[] decay;
         boolean raised;
+        /** The piece is all of its integrand's unit box. */
+        boolean whole;
         /** Halvings in a row that did not help. */
         int stalled;
     }
@@ -264,6 +284,12 @@ public final class Cubature {
 
     private static Piece half(Panel panel, boolean low) {
         Piece p = panel.piece;
+        if (panel.whole) {
+            Integrand half = p.integrand.half(panel.direction, low);
+            if (half != null) {
+                return start(new Piece(half, p.from, p.to, p.orders));
+            }
+        }
         double[] from = p.from.clone();
         double[] to = p.to.clone();
         double middle = (from[panel.direction] + to[panel.direction]) / 2;
@@ -279,6 +305,9 @@ public final class Cubature {
     private Panel work(Piece piece, int depth) {
         TensorRule rule = TensorRule.of(piece.orders);
         int dimension = piece.orders.length;
+        double[][][] marginal = scratch.marginal;
+        double[][] out = scratch.out;
+        double[] noise = scratch.noise;
         double volume = 1;
         boolean whole = true;
         for (int d = 0; d < dimension; d++) {
@@ -291,6 +320,7 @@ public final class Cubature {
         Panel panel = new Panel();
         panel.piece = piece;
         panel.depth = depth;
+        panel.whole = whole;
         panel.value = new double[components];
         panel.error = new double[components];
         panel.magnitude = new double[components];
@@ -303,12 +333,12 @@ public final class Cubature {
                     double from = piece.from[d];
                     double width = piece.to[d] - from;
                     double[] node = rule.node[d];
-                    double[] target = u[d];
+                    double[] target = scratch.u[d];
                     for (int i = 0; i < n; i++) {
                         target[i] = from + width * node[first + i];
                     }
                 }
-                piece.integrand.evaluate(u, n, out, noise);
+                piece.integrand.evaluate(scratch.u, n, out, noise);
             }
             for (int i = 0; i < n; i++) {
                 double part = rule.weight[first + i] * noise[i];
@@ -326,12 +356,10 @@ public final class Cubature {
                 }
                 panel.value[c] += sum;
                 panel.magnitude[c] += absolute;
-                for (int d = 0; d < dimension; d++) {
-                    double[] m = marginal[d][c];
-                    int[] index = rule.index[d];
-                    for (int i = 0; i < n; i++) {
-                        m[index[first + i]] += f[i];
-                    }
+                if (dimension == 1) {
+                    System.arraycopy(f, 0, marginal[0][c], first, n);
+                } else {
+                    rule.addMarginals(f, first, n, marginal, c);
                 }
             }
         }

@@ -24,6 +24,11 @@ public interface Integrand {
         return false;
     }
 
+    /** One half along a direction as a function on a unit box of its own, for integrands that keep nodes of it; null otherwise. */
+    default Integrand half(int direction, boolean low) {
+        return null;
+    }
+
     /** Gauss order below which the integrand must not be taken in a direction of its unit box. */
     default int leastOrder(int direction) {
         return 0;

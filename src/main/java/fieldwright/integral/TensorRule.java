@@ -2,6 +2,7 @@ package fieldwright.integral;
 
 import java.util.Map;
 import java.util.concurrent.ConcurrentHashMap;
+import java.util.concurrent.atomic.AtomicReferenceArray;
 
 /** Product of Gauss rules on a unit box of 1 to 3 dimensions, laid out flat; immutable and shared. */
 public final class TensorRule {
@@ -49,7 +50,45 @@ public final class TensorRule {
         return node[dimension];
     }
 
+    /** Adds values at flat nodes first … first + n to the partial sums of component c over all but one dimension. */
+    void addMarginals(double[] f, int first, int n, double[][][] marginal, int c) {
+        int fast = rules[rules.length - 1].order;
+        double[] inner = marginal[rules.length - 1][c];
+        double[] outer = marginal[0][c];
+        double[] middle = rules.length == 3 ? marginal[1][c] : null;
+        int i = 0;
+        while (i < n) {
+            int at = first + i;
+            int start = at % fast;
+            int count = Math.min(fast - start, n - i);
+            double sum = 0;
+            for (int k = 0; k < count; k++) {
+                double v = f[i + k];
+                inner[start + k] += v;
+                sum += v;
+            }
+            outer[index[0][at]] += sum;
+            if (middle != null) {
+                middle[index[1][at]] += sum;
+            }
+            i += count;
+        }
+    }
+
+    private static final AtomicReferenceArray<TensorRule> LINES = new AtomicReferenceArray<>(128);
+    private static final AtomicReferenceArray<TensorRule> SQUARES = new AtomicReferenceArray<>(128 * 128);
+
     static TensorRule of(int... orders) {
+        if (orders.length < 3) {
+            AtomicReferenceArray<TensorRule> known = orders.length == 1 ? LINES : SQUARES;
+            int key = orders.length == 1 ? orders[0] : 128 * orders[0] + orders[1];
+            TensorRule rule = known.get(key);
+            if (rule == null) {
+                rule = new TensorRule(orders.clone());
+                known.set(key, rule);
+            }
+            return rule;
+        }
         int key = 0;
         for (int order : orders) {
             key = key * 128 + order;
