@@ -22,19 +22,21 @@ final class Facets {
      */
     record Extent(Chart.Anchor middle, double[][] sample, double radius, double[] length) {
         private static final double CANCELLATION = 100;
+        private static final int LOW = 4;
 
         /**
-         * Whether a place is so near that integrals along rays from it suit: less than two radii, and not many thicknesses from a thin
+         * Whether a place is so near that integrals along rays from it suit: less than two radii, or six for a polynomial of low degree,
+         * which grows little on the way to the place; and not many thicknesses from a thin
          * patch, where what rays gather before and behind it would cancel. {@code b} is middle minus place, {@code gap} the distance of
          * some nearer point.
          */
-        boolean isNear(double[] b, double gap) {
+        boolean isNear(double[] b, double gap, int degree) {
             double least = least(b);
             double cancellation = 1;
             for (double l : length) {
                 cancellation *= Math.max(1, Math.min(gap, least) / l);
             }
-            return least < 2 * radius && cancellation < CANCELLATION;
+            return least < (degree >= 0 && degree <= LOW ? 6 : 2) * radius && cancellation < CANCELLATION;
         }
 
         /** The least distance of the points from a place, {@code b} being middle minus place. */

@@ -170,7 +170,7 @@ public final class FieldSolver {
             return zero(at, unit);
         }
         double scale = scale(q, flux, local);
-        Paver paver = new Paver(false, space);
+        Paver paver = new Paver(false, space, accuracy.relative());
         double[] placeError = new double[3];
         see(view, Images.coordinates(at), paver, placeError);
         Vector own = vector(at, paver, placeError, scale, unit);
@@ -452,7 +452,7 @@ public final class FieldSolver {
     }
 
     private Amount potential(View view, double[] at, double scale) {
-        Paver paver = new Paver(true, space);
+        Paver paver = new Paver(true, space, accuracy.relative());
         double[] pointError = new double[1];
         see(view, at, paver, pointError);
         if (paver.contact.isUnboundedLine()) {
@@ -533,7 +533,7 @@ public final class FieldSolver {
 
     /** Whether the potential integral of mapped endless charge settles, from few evaluations. */
     private boolean tailsConverge(View view) {
-        Paver paver = new Paver(true, space);
+        Paver paver = new Paver(true, space, accuracy.relative());
         for (Probe probe : view.probes()) {
             for (Patch patch : compiled.patches) {
                 paver.pave(patch, probe);

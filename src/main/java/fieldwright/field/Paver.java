@@ -27,6 +27,10 @@ final class Paver {
     final Contact contact = new Contact();
     private final boolean potential;
     private final Workspace space;
+    /** Natural logarithm of the reduction asked of a Gauss rule, halved, for its error goes as the square. */
+    private final double decades;
+    /** An order whose coefficients show how they decay. */
+    private static final int LEAST = 6;
     private double roughness;
     private double offsetRounding;
     private double rimError;
@@ -53,7 +57,9 @@ final class Paver {
         return rimError;
     }
 
-    Paver(boolean potential, Workspace space) {
+    /** {@code relative}: what will be asked of the sum, which sets the orders to begin with. */
+    Paver(boolean potential, Workspace space, double relative) {
+        decades = Math.min(17, Math.max(6, 2.6 - 0.5 * Math.log(relative)));
         this.potential = potential;
         this.space = space;
         start = new double[potential ? 1 : 3];
@@ -92,7 +98,7 @@ final class Paver {
     private boolean flatSurface(Facets facets, Sampler whole) {
         Facets.Extent extent = facets.extent();
         double[] b = whole.toAnchor(extent.middle());
-        if (!extent.isNear(b, gap(whole))) {
+        if (!extent.isNear(b, gap(whole), degree(whole.patch))) {
             return false;
         }
         Facet.Edges edges = facets.edges();
@@ -109,6 +115,10 @@ final class Paver {
         FlatFace face = FlatFace.surface(whole.patch.polynomial(), whole.target, edges.normal, height, extent.radius());
         paveEdges(whole.probe, edges, face);
         return true;
+    }
+
+    private static int degree(Patch patch) {
+        return patch.polynomial() == null ? -1 : patch.polynomial().degree();
     }
 
     /** Distance from the nearest point by coordinates, which is near to the nearest. */
@@ -377,11 +387,11 @@ final class Paver {
     }
 
     /** Gauss order for a pole at {@code distance} from an interval of length {@code length} (Bernstein ellipse), and for bends. */
-    private static int order(double distance, double length, double bend, int least) {
+    private int order(double distance, double length, double bend) {
         double delta = 2 * distance / Math.max(length, 1e-300);
         double rho = delta + Math.sqrt(delta * delta + 1);
-        int n = (int) Math.ceil(13 / Math.log(rho)) + (int) Math.round(2.5 * bend);
-        return Math.max(least, Math.min(24, n));
+        int n = (int) Math.ceil(decades / Math.log(rho)) + (int) Math.round(2.5 * bend);
+        return Math.max(LEAST, Math.min(24, n));
     }
 
     private void split(Sampler s, Panel panel, int direction, int depth) {
@@ -393,7 +403,7 @@ final class Paver {
     private void add(Integrand f, double span0, double span1, int least0, int least1) {
         int n0 = Math.max(1, (int) Math.ceil(span0 / SPAN));
         int n1 = Math.max(1, (int) Math.ceil(span1 / SPAN));
-        int[] orders = {Math.max(least0, order(Math.PI / 2, span0 / n0, 0, 6)), Math.max(least1, order(Math.PI / 2, span1 / n1, 0, 6))};
+        int[] orders = {Math.max(least0, order(Math.PI / 2, span0 / n0, 0)), Math.max(least1, order(Math.PI / 2, span1 / n1, 0))};
         for (int i = 0; i < n0; i++) {
             for (int j = 0; j < n1; j++) {
                 pieces.add(new Piece(f, new double[] {(double) i / n0, (double) j / n1},
@@ -425,7 +435,7 @@ final class Paver {
         double lift = lift(s);
         if (Math.hypot(least, lift) > FAR * length && bend < 1.5) {
             double distance = Math.hypot(Math.max(0, least - length / 8), lift);
-            pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length, bend, 6)));
+            pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length, bend)));
             return;
         }
         if (bend > BENT && depth < DEEPEST) {
@@ -517,7 +527,7 @@ final class Paver {
         Pieces.Segment piece = new Pieces.Segment(s, at, end, length, height, own);
         double span = piece.span();
         int n = Math.max(1, (int) Math.ceil(span / SPAN));
-        int order = Math.max(10, order(Math.PI / 2, span / n, 0, 6));
+        int order = Math.max(10, order(Math.PI / 2, span / n, 0));
         for (int i = 0; i < n; i++) {
             pieces.add(new Piece(piece, new double[] {(double) i / n}, new double[] {(i + 1.0) / n}, new int[] {order}));
         }
@@ -611,7 +621,7 @@ final class Paver {
         }
         if (Math.hypot(least, lift) > FAR * size && Math.max(bend0, bend1) < 2.5) {
             double distance = Math.hypot(Math.max(0.5 * least, least - size / 4), lift);
-            pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length[0], bend0, 6), order(distance, length[1], bend1, 6)));
+            pieces.add(Piece.whole(new Pieces.Box(s, panel), order(distance, length[0], bend0), order(distance, length[1], bend1)));
             return;
         }
         double[] from = panel.from;
@@ -672,7 +682,7 @@ final class Paver {
         Pieces.Fan fan = new Pieces.Fan(s, tip, ray, low ? to[ray] : from[ray], from[1 - ray], to[1 - ray], length, height);
         double span = fan.span();
         int n = height > 0 ? Math.max(1, (int) Math.ceil(span / SPAN)) : 1;
-        int order = Math.max(10, order(Math.PI / 2, span / n, 0, 6));
+        int order = Math.max(10, order(Math.PI / 2, span / n, 0));
         int parts = height > 0 ? 2 : 1;
         for (int i = 0; i < n; i++) {
             for (int j = 0; j < parts; j++) {
@@ -959,7 +969,7 @@ final class Paver {
     private boolean faces(Facets facets, Sampler whole) {
         Facets.Extent extent = facets.extent();
         double[] b = whole.toAnchor(extent.middle());
-        if (!extent.isNear(b, gap(whole))) {
+        if (!extent.isNear(b, gap(whole), degree(whole.patch))) {
             return false;
         }
         Sampler.Rays rays = rays(whole, extent, b);
@@ -1077,7 +1087,7 @@ final class Paver {
             double distance = Math.max(0.5 * least, least - size / 4);
             int[] orders = new int[3];
             for (int k = 0; k < 3; k++) {
-                orders[k] = Math.min(20, order(distance, length[k], bend[k], 6));
+                orders[k] = Math.min(20, order(distance, length[k], bend[k]));
             }
             pieces.add(Piece.whole(new Pieces.Box(s, panel), orders));
             return;
