@@ -8,6 +8,8 @@ package fieldwright.formula;
  */
 final class BlockTrig {
     private static final double LARGEST = 1e5;
+    /** Below this many nodes arrays cost more than they gain. */
+    private static final int FEW = 12;
     private static final double TWO_OVER_PI = 2 / Math.PI;
     // pi/2 = P1 + P2 + P3, the first two of 33 bits, so that n P1 and n P2 are exact (fdlibm e_rem_pio2)
     private static final double P1 = 1.57079632673412561417;
@@ -27,6 +29,12 @@ final class BlockTrig {
 
     /** sin(x + quarter pi/2). Each node on its own, whatever the others are, so that results do not depend on the block. */
     private static void turned(double[] x, double[] out, int n, int quarter) {
+        if (n < FEW) {
+            for (int i = 0; i < n; i++) {
+                out[i] = turned(x[i], quarter);
+            }
+            return;
+        }
         double[] outside = largest(x, n) < LARGEST ? null : x.clone();   // out may be x
         double[] turns = new double[n];
         double[] rest = new double[n];
@@ -40,6 +48,16 @@ final class BlockTrig {
                 out[i] = quarter == 0 ? Math.sin(outside[i]) : Math.cos(outside[i]);
             }
         }
+    }
+
+    /** The same arithmetic for one node, without arrays in between. */
+    private static double turned(double x, int quarter) {
+        if (!(Math.abs(x) < LARGEST)) {
+            return quarter == 0 ? Math.sin(x) : Math.cos(x);
+        }
+        double k = Math.rint(x * TWO_OVER_PI);
+        double rest = ((x - k * P1) - k * P2) - k * P3;
+        return chosen(k + quarter, sine(rest), cosine(rest));
     }
 
     private static double largest(double[] x, int n) {
@@ -60,32 +78,43 @@ final class BlockTrig {
 
     private static void sine(double[] r, double[] out, int n) {
         for (int i = 0; i < n; i++) {
-            double z = r[i] * r[i];
-            double tail = -1.66666666666666324348e-01 + z * (8.33333333332248946124e-03 + z * (-1.98412698298579493134e-04
-                + z * (2.75573137070700676789e-06 + z * (-2.50507602534068634195e-08 + z * 1.58969099521155010221e-10))));
-            out[i] = r[i] + r[i] * z * tail;
+            out[i] = sine(r[i]);
         }
+    }
+
+    private static double sine(double r) {
+        double z = r * r;
+        double tail = -1.66666666666666324348e-01 + z * (8.33333333332248946124e-03 + z * (-1.98412698298579493134e-04
+            + z * (2.75573137070700676789e-06 + z * (-2.50507602534068634195e-08 + z * 1.58969099521155010221e-10))));
+        return r + r * z * tail;
     }
 
     private static void cosine(double[] r, double[] out, int n) {
         for (int i = 0; i < n; i++) {
-            double z = r[i] * r[i];
-            double tail = z * (4.16666666666666019037e-02 + z * (-1.38888888888741095749e-03 + z * (2.48015872894767294178e-05
-                + z * (-2.75573143513906633035e-07 + z * (2.08757232129817482790e-09 + z * -1.13596475577881948265e-11)))));
-            double half = 0.5 * z;
-            double w = 1 - half;
-            out[i] = w + (((1 - w) - half) + z * tail);
+            out[i] = cosine(r[i]);
         }
+    }
+
+    private static double cosine(double r) {
+        double z = r * r;
+        double tail = z * (4.16666666666666019037e-02 + z * (-1.38888888888741095749e-03 + z * (2.48015872894767294178e-05
+            + z * (-2.75573143513906633035e-07 + z * (2.08757232129817482790e-09 + z * -1.13596475577881948265e-11)))));
+        double half = 0.5 * z;
+        double w = 1 - half;
+        return w + (((1 - w) - half) + z * tail);
     }
 
     /** Of k quarter turns: odd ones take the cosine, and two of four the other sign. */
     private static void choose(double[] turns, double[] sine, double[] cosine, double[] out, int n, int quarter) {
         for (int i = 0; i < n; i++) {
-            double k = turns[i] + quarter;
-            double pairs = Math.floor(k * 0.5);
-            double odd = k - 2 * pairs;
-            double sign = 1 - 2 * (pairs - 2 * Math.floor(pairs * 0.5));
-            out[i] = sign * (odd * cosine[i] + (1 - odd) * sine[i]);
+            out[i] = chosen(turns[i] + quarter, sine[i], cosine[i]);
         }
+    }
+
+    private static double chosen(double k, double sine, double cosine) {
+        double pairs = Math.floor(k * 0.5);
+        double odd = k - 2 * pairs;
+        double sign = 1 - 2 * (pairs - 2 * Math.floor(pairs * 0.5));
+        return sign * (odd * cosine + (1 - odd) * sine);
     }
 }
