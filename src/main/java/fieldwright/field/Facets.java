@@ -15,6 +15,7 @@ final class Facets {
     private List<Facet.Face> faces;
     private Facet.Edges edges;
     private Patch patch;
+    private double largestDensity = -1;
 
     /**
      * Points all over a patch, from which its distance and size are told: offsets from {@code middle}; {@code radius} is half the
@@ -119,6 +120,19 @@ final class Facets {
             stride *= GRID;
         }
         return length;
+    }
+
+    /** Largest absolute value of a volume's density at the points of its extent. */
+    double largestDensity() {
+        if (largestDensity < 0) {
+            Extent e = extent();
+            int n = e.sample()[0].length;
+            patch.inSpace().evaluate(e.middle().position(), e.sample(), n, body.space.density);
+            for (int i = 0; i < n; i++) {
+                largestDensity = Math.max(largestDensity, Math.abs(body.space.density[i]));
+            }
+        }
+        return largestDensity;
     }
 
     /** Edges of a flat surface. */

@@ -969,7 +969,7 @@ final class Paver {
     private boolean faces(Facets facets, Sampler whole) {
         Facets.Extent extent = facets.extent();
         double[] b = whole.toAnchor(extent.middle());
-        if (!extent.isNear(b, gap(whole), degree(whole.patch))) {
+        if (!extent.isNear(b, gap(whole), degree(whole.patch)) || growsTowards(facets, whole)) {
             return false;
         }
         Sampler.Rays rays = rays(whole, extent, b);
@@ -988,6 +988,24 @@ final class Paver {
         }
         return true;
     }
+
+    /**
+     * Whether the density, read on to the place, is so much larger there than in the body that the faces' parts would cancel to less
+     * than is asked.
+     */
+    private boolean growsTowards(Facets facets, Sampler whole) {
+        SpaceFunction rho = whole.patch.inSpace();
+        if (rho.isConstant()) {
+            return false;
+        }
+        for (double[] ray : space.ray) {
+            ray[0] = 0;
+        }
+        rho.evaluate(whole.seen, space.ray, 1, space.density);
+        return !(Math.abs(space.density[0]) <= GROWN * facets.largestDensity());
+    }
+
+    private static final double GROWN = 1e3;
 
     private void flatFace(Facet.Face facet, Sampler whole, double size) {
         double[] normal = facet.edges.normal;

@@ -111,8 +111,8 @@ public final class Cubature {
     /** Orders a piece starts with at most; the decay found there tells what it needs. */
     private static final int[] START = {0, 10, 8, 6};
     private static final int MOST = 24;
-    /** Over what part of an order the decay of coefficients is carried on: half is the rule's own; boxes of a volume are less regular. */
-    private static final double[] CARRY = {0, 0.45, 0.45, 0.4};
+    /** Over what part of an order the decay of coefficients is carried on: half is the rule's own. */
+    private static final double[] CARRY = {0, 0.4, 0.45, 0.4};
 
     private Result run(List<Piece> pieces) {
         PriorityQueue<Panel> heap = new PriorityQueue<>(Math.max(1, pieces.size()), (a, b) -> Double.compare(b.worst, a.worst));
