@@ -35,6 +35,14 @@ final class Compiler {
         return new Program(names.size(), c.steps, c.constants, result);
     }
 
+    /** Several trees over the same variables as one program. */
+    static Program compile(List<Node> trees, List<String> variables, String text, Integrator integrator) {
+        List<String> names = List.copyOf(variables);
+        Compiler c = new Compiler(names, text, integrator);
+        int[] results = trees.stream().mapToInt(c::of).toArray();
+        return new Program(names.size(), c.steps, c.constants, results);
+    }
+
     private int of(Node n) {
         if (n instanceof Node.Literal l) {
             return constant(l.value());

@@ -177,6 +177,13 @@ public final class Formula {
         return once(new Compiled(variables), () -> Compiler.compile(tree, variables, text, integrator));
     }
 
+    /** Code over blocks for several formulas together; as {@link #compile}. */
+    public static BlockMap compile(List<Formula> formulas, List<String> variables) {
+        Integrator any = formulas.stream().map(f -> f.integrator).filter(Objects::nonNull).findFirst().orElse(null);
+        String text = formulas.stream().map(f -> f.text).reduce((a, b) -> a + ", " + b).orElse("");
+        return Compiler.compile(formulas.stream().map(f -> f.tree).toList(), variables, text, any);
+    }
+
     /** The value of a formula without free names, units checked, with its numerical error. */
     public Amount amount() {
         return amount(Map.of());

@@ -6,7 +6,7 @@ import java.util.Arrays;
 import java.util.List;
 
 /** Straight-line code over blocks of nodes. Immutable; scratch blocks come from a pool of the calling thread. */
-final class Program implements BlockFunction {
+final class Program implements BlockFunction, BlockMap {
     /** One operation on whole blocks. */
     interface Kernel {
         /** {@code out[i]} from {@code registers[operands[k]][i]}, i < n. */
@@ -27,16 +27,16 @@ final class Program implements BlockFunction {
     private final double[][] constantBlocks;   // by value; null where it is not a constant that is read
     private final Step[] code;
     private final int[] targets;               // value each step makes
-    private final int[] scratch;               // scratch block of that value; -1: straight into the result
+    private final int[] scratch;               // scratch block of that value; -1 - k: straight into result k
     private final int scratchBlocks;
-    private final int result;
+    private final int[] results;
     private final int values;
 
-    Program(int arguments, List<Step> steps, List<Double> constants, int result) {
+    Program(int arguments, List<Step> steps, List<Double> constants, int... results) {
         this.arguments = arguments;
-        this.result = result;
+        this.results = results;
         this.values = steps.size();
-        boolean[] used = used(steps, result);
+        boolean[] used = used(steps, results);
         this.constantBlocks = new double[values][];
         List<Step> kept = new ArrayList<>();
         List<Integer> made = new ArrayList<>();
@@ -55,9 +55,11 @@ final class Program implements BlockFunction {
         this.scratchBlocks = assignScratch();
     }
 
-    private static boolean[] used(List<Step> steps, int result) {
+    private static boolean[] used(List<Step> steps, int[] results) {
         boolean[] used = new boolean[steps.size()];
-        used[result] = true;
+        for (int result : results) {
+            used[result] = true;
+        }
         for (int v = steps.size() - 1; v >= 0; v--) {
             if (used[v] && steps.get(v) != null) {
                 for (int o : steps.get(v).operands()) {
@@ -91,8 +93,9 @@ final class Program implements BlockFunction {
             if (code[i].kernel().elementwise()) {
                 free.addAll(ending);
             }
-            if (targets[i] == result && code[i].kernel().elementwise()) {
-                scratch[i] = -1;
+            int straight = resultOf(targets[i]);
+            if (straight >= 0 && (results.length > 1 || code[i].kernel().elementwise())) {
+                scratch[i] = -1 - straight;
             } else {
                 scratch[i] = free.isEmpty() ? blocks++ : free.pop();
                 blockOf[targets[i]] = scratch[i];
@@ -104,6 +107,16 @@ final class Program implements BlockFunction {
         return blocks;
     }
 
+    /** Which result a value is, or −1. */
+    private int resultOf(int value) {
+        for (int k = 0; k < results.length; k++) {
+            if (results[k] == value) {
+                return k;
+            }
+        }
+        return -1;
+    }
+
     @Override
     public int arguments() {
         return arguments;
@@ -111,6 +124,11 @@ final class Program implements BlockFunction {
 
     @Override
     public void evaluate(double[][] args, int n, double[] out) {
+        evaluate(args, n, new double[][] {out});
+    }
+
+    @Override
+    public void evaluate(double[][] args, int n, double[][] out) {
         if (n > BLOCK || args.length < arguments) {
             throw new IllegalArgumentException("block of " + n + " nodes and " + args.length + " arguments");
         }
@@ -123,12 +141,14 @@ final class Program implements BlockFunction {
         double[][] registers = constantBlocks.clone();
         System.arraycopy(args, 0, registers, 0, arguments);
         for (int i = 0; i < code.length; i++) {
-            double[] target = scratch[i] < 0 ? out : blocks[scratch[i]];
+            double[] target = scratch[i] < 0 ? out[-1 - scratch[i]] : blocks[scratch[i]];
             code[i].kernel().run(registers, code[i].operands(), target, n);
             registers[targets[i]] = target;
         }
-        if (registers[result] != out) {
-            System.arraycopy(registers[result], 0, out, 0, n);
+        for (int k = 0; k < results.length; k++) {
+            if (registers[results[k]] != out[k]) {
+                System.arraycopy(registers[results[k]], 0, out[k], 0, n);
+            }
         }
         for (double[] block : blocks) {   // after an exception they are left to the collector
             pool.push(block);

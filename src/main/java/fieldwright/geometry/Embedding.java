@@ -1,6 +1,14 @@
 package fieldwright.geometry;
 
+import java.util.ArrayList;
+import java.util.List;
+
+import javax.measure.Dimension;
+
+import fieldwright.formula.BlockMap;
 import fieldwright.formula.Formula;
+import fieldwright.quantity.AuthorException;
+import fieldwright.quantity.Units;
 
 /** From coordinates to positions: the differences to an anchor without cancellation, and the derivatives. */
 abstract class Embedding {
@@ -159,29 +167,39 @@ abstract class Embedding {
     }
 
     private static final class Parametric extends Embedding {
-        private final Scalar[] at = new Scalar[3];
-        private final Scalar[][] slope;
+        /** x, y, z; and with their derivatives by each parameter behind them. */
+        private final BlockMap at;
+        private final BlockMap withSlopes;
+        private final int parameters;
         /** At most two parameters and linear in each: offsets follow from slopes, without cancellation. */
         private final boolean bilinear;
 
         Parametric(Nest nest, Formula... position) {
-            int d = nest.names().size();
-            slope = new Scalar[d][3];
-            boolean linear = d <= 2;
-            for (int a = 0; a < 3; a++) {
-                boolean any = position[a].variables().isEmpty() && position[a].fitsAnyUnit();
-                javax.measure.Dimension found = any ? fieldwright.quantity.Units.LENGTH : position[a].dimension(nest.dimensions());
-                if (!found.equals(fieldwright.quantity.Units.LENGTH)) {
-                    throw new fieldwright.quantity.AuthorException("parametric region: " + "xyz".charAt(a) + " = " + position[a].text() + " is "
-                        + fieldwright.quantity.Units.describe(found) + ", not a length. Give its lengths units, for example 0.5 m*cos(t).");
-                }
-                at[a] = Scalar.of(position[a], nest.names());
-                for (int m = 0; m < d; m++) {
-                    linear &= position[a].degree(nest.names().get(m)).orElse(2) <= 1;
-                    slope[m][a] = Scalar.of(position[a].derivative(nest.names().get(m)), nest.names());
+            parameters = nest.names().size();
+            boolean linear = parameters <= 2;
+            List<Formula> all = new ArrayList<>(List.of(position));
+            for (int m = 0; m < parameters; m++) {
+                String name = nest.names().get(m);
+                for (int a = 0; a < 3; a++) {
+                    linear &= position[a].degree(name).orElse(2) <= 1;
+                    all.add(position[a].derivative(name));
                 }
             }
+            for (int a = 0; a < 3; a++) {
+                checkLength(nest, position[a], a);
+            }
             bilinear = linear;
+            at = Formula.compile(List.of(position), nest.names());
+            withSlopes = Formula.compile(all, nest.names());
+        }
+
+        private static void checkLength(Nest nest, Formula position, int axis) {
+            boolean any = position.variables().isEmpty() && position.fitsAnyUnit();
+            Dimension found = any ? Units.LENGTH : position.dimension(nest.dimensions());
+            if (!found.equals(Units.LENGTH)) {
+                throw new AuthorException("parametric region: " + "xyz".charAt(axis) + " = " + position.text() + " is " + Units.describe(found)
+                    + ", not a length. Give its lengths units, for example 0.5 m*cos(t).");
+            }
         }
 
         @Override
@@ -191,49 +209,45 @@ abstract class Embedding {
 
         @Override
         double[] position(double[] c) {
-            double[][] one = new double[3][1];
+            double[][] out = new double[3][1];
+            at.evaluate(single(c), 1, out);
+            return new double[] {out[0][0], out[1][0], out[2][0]};
+        }
+
+        private static double[][] single(double[] c) {
+            double[][] one = new double[c.length][1];
             for (int m = 0; m < c.length; m++) {
                 one[m][0] = c[m];
             }
-            double[] p = new double[3];
-            double[] out = new double[1];
-            for (int a = 0; a < 3; a++) {
-                at[a].evaluate(one, 1, out);
-                p[a] = out[0];
-            }
-            return p;
+            return one;
         }
 
         @Override
         void embed(double[] c0, double[] position0, Nodes nodes, int n) {
+            double[][] out = new double[3 + 3 * parameters][];
             for (int a = 0; a < 3; a++) {
-                for (int m = 0; m < slope.length; m++) {
-                    slope[m][a].evaluate(nodes.c, n, nodes.jacobian[m][a]);
+                out[a] = nodes.offset[a];
+                for (int m = 0; m < parameters; m++) {
+                    out[3 + 3 * m + a] = nodes.jacobian[m][a];
                 }
+            }
+            withSlopes.evaluate(nodes.c, n, out);
+            double[][] first = bilinear ? slopesAt(c0) : null;
+            for (int a = 0; a < 3; a++) {
                 double[] o = nodes.offset[a];
-                if (bilinear) {
-                    double first = slopeAt(a, c0);
-                    for (int i = 0; i < n; i++) {
-                        o[i] = first * nodes.delta[0][i] + (slope.length > 1 ? nodes.jacobian[1][a][i] * nodes.delta[1][i] : 0);
-                    }
-                    continue;
-                }
-                at[a].evaluate(nodes.c, n, o);
                 for (int i = 0; i < n; i++) {
-                    o[i] -= position0[a];
+                    o[i] = bilinear
+                        ? first[3 + a][0] * nodes.delta[0][i] + (parameters > 1 ? nodes.jacobian[1][a][i] * nodes.delta[1][i] : 0)
+                        : o[i] - position0[a];
                 }
             }
         }
 
-        /** Derivative by the first parameter at the anchor; the second one's, at a node, depends on the first only. */
-        private double slopeAt(int a, double[] c0) {
-            double[][] one = new double[3][1];
-            for (int m = 0; m < c0.length; m++) {
-                one[m][0] = c0[m];
-            }
-            double[] out = new double[1];
-            slope[0][a].evaluate(one, 1, out);
-            return out[0];
+        /** At the anchor; the second parameter's derivative, at a node, depends on the first only. */
+        private double[][] slopesAt(double[] c0) {
+            double[][] out = new double[3 + 3 * parameters][1];
+            withSlopes.evaluate(single(c0), 1, out);
+            return out;
         }
     }
 }
