@@ -27,6 +27,7 @@ final class ClusterTree {
         final int number;
         final int from;
         final int to;
+        Cluster parent;
         Cluster[] children = {};
         double x;
         double y;
@@ -92,6 +93,7 @@ final class ClusterTree {
                 Cluster[] children = new Cluster[cuts.length - 1];
                 for (int k = 0; k < children.length; k++) {
                     children[k] = divide(cuts[k], cuts[k + 1], leaf, depth + 1);
+                    children[k].parent = c;
                 }
                 c.children = children;
             }

@@ -56,6 +56,86 @@ final class FarField {
         }
     }
 
+    /** Adds the field of a local expansion up to a degree about (cx, cy, cz), radius b. */
+    void localField(double[] local, int degree, double cx, double cy, double cz, double b, double[] tx, double[] ty, double[] tz, double[] ex,
+        double[] ey, double[] ez) {
+        localCoefficients(local, degree, 1 / b);
+        startLocal(cx, cy, cz, b, tx, ty, tz);
+        for (int m = 0; m < degree; m++) {
+            localColumn(m, degree - 1);
+            add(coefficients[0], m, degree - 1, ex);
+            add(coefficients[1], m, degree - 1, ey);
+            add(coefficients[2], m, degree - 1, ez);
+        }
+    }
+
+    /** Adds its potential. */
+    void localPotential(double[] local, int degree, double cx, double cy, double cz, double b, double[] tx, double[] ty, double[] tz,
+        double[] v) {
+        double[] c = coefficients[0];
+        for (int n = 0; n <= degree; n++) {
+            for (int m = 0; m <= n; m++) {
+                int k = 2 * Moments.index(n, m);
+                c[k] = (m == 0 ? 1 : 2) * local[k];
+                c[k + 1] = (m == 0 ? 1 : 2) * local[k + 1];
+            }
+        }
+        startLocal(cx, cy, cz, b, tx, ty, tz);
+        for (int m = 0; m <= degree; m++) {
+            localColumn(m, degree);
+            add(c, m, degree, v);
+        }
+    }
+
+    /** E_x + i E_y = −Σ conj(Υ_j^q) L_{j+1}^{q+1} and E_z = −Σ conj(Υ_j^q) L_{j+1}^q over all q, put on q ≥ 0. */
+    private void localCoefficients(double[] local, int degree, double scale) {
+        for (int j = 0; j < degree; j++) {
+            for (int q = 0; q <= j; q++) {
+                int k = 2 * Moments.index(j, q);
+                int here = 2 * Moments.index(j + 1, q);
+                double a = q == 0 ? 0 : local[here - 2];
+                double b = q == 0 ? 0 : local[here - 1];
+                double c = local[here + 2];
+                double d = local[here + 3];
+                coefficients[0][k] = -scale * (c - a);
+                coefficients[0][k + 1] = -scale * (d - b);
+                coefficients[1][k] = -scale * (d + b);
+                coefficients[1][k + 1] = scale * (c + a);
+                double twice = q == 0 ? scale : 2 * scale;
+                coefficients[2][k] = -twice * local[here];
+                coefficients[2][k + 1] = -twice * local[here + 1];
+            }
+        }
+    }
+
+    private void startLocal(double cx, double cy, double cz, double b, double[] tx, double[] ty, double[] tz) {
+        for (int i = 0; i < BLOCK; i++) {
+            double dx = (tx[i] - cx) / b;
+            double dy = (ty[i] - cy) / b;
+            double dz = (tz[i] - cz) / b;
+            x[i] = dx;
+            y[i] = dy;
+            z[i] = dz;
+            inverse[i] = dx * dx + dy * dy + dz * dz;
+            diagonalRe[i] = 1;
+            diagonalIm[i] = 0;
+        }
+    }
+
+    /** Υ_n^m for n = m … top in re[n], im[n]; {@link #inverse} holds the square of the distance. */
+    private void localColumn(int m, int top) {
+        if (m > 0) {
+            turn(0.5 / m, x, y, diagonalRe, diagonalIm);
+        }
+        System.arraycopy(diagonalRe, 0, re[m], 0, BLOCK);
+        System.arraycopy(diagonalIm, 0, im[m], 0, BLOCK);
+        for (int n = m + 1; n <= top; n++) {
+            double c = 1.0 / ((double) n * n - (double) m * m);
+            int below = Math.max(m, n - 2);
+            recur((2 * n - 1) * c, n == m + 1 ? 0 : c, z, inverse, re[n - 1], im[n - 1], re[below], im[below], re[n], im[n]);
+        }
+    }
+
     /** With Θ = u + iv, conj(M_{m−1}) Θ − M_{m+1} conj(Θ) gives x and y, 2 Re conj(M_m) Θ gives z. */
     private void fieldCoefficients(double[] moments, int at, int degree, double scale) {
         double[] cx = coefficients[0];
@@ -120,7 +200,7 @@ final class FarField {
         }
     }
 
-    private static void turn(double c, double[] x, double[] y, double[] re, double[] im) {
+    static void turn(double c, double[] x, double[] y, double[] re, double[] im) {
         for (int i = 0; i < BLOCK; i++) {
             double u = c * (x[i] * re[i] - y[i] * im[i]);
             im[i] = c * (x[i] * im[i] + y[i] * re[i]);
@@ -128,7 +208,7 @@ final class FarField {
         }
     }
 
-    private static void recur(double a, double b, double[] z, double[] inverse, double[] re1, double[] im1, double[] re0, double[] im0,
+    static void recur(double a, double b, double[] z, double[] inverse, double[] re1, double[] im1, double[] re0, double[] im0,
         double[] re, double[] im) {
         for (int i = 0; i < BLOCK; i++) {
             double s = a * z[i];

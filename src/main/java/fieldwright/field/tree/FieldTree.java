@@ -1,14 +1,20 @@
 package fieldwright.field.tree;
 
+import java.util.ArrayList;
+import java.util.List;
+
 /**
  * Field or potential of very many charges at many targets, to a relative accuracy, with a bound of the error that is true.
  *
- * <p>A treecode: far clusters by their multipole moments, near ones charge by charge, for blocks of neighbouring targets at once
- * (Barnes and Hut, Nature 324, 446, 1986, with moments of any degree). A first look at each block with few moments says how large the
- * field is there and how much cancels; then each cluster takes the lowest degree whose error bound fits the block's share. The bound
- * is rigorous: what is left out up to the stored degree is bounded by the norms of its moments, what lies beyond by Σ|q| s^k.
+ * <p>Clusters of charges by their multipole moments, for boxes of targets by local expansions, what is near charge by charge (Barnes and
+ * Hut, Nature 324, 446, 1986; Greengard and Rokhlin, J. Comput. Phys. 73, 325, 1987; with degrees chosen for each pair as by Dehnen
+ * 2014). A first look at each block of targets says how large the field is there and how much cancels. Then boxes of targets, the
+ * largest first, take in what is far from them; the rest is left to their halves, and at last to the blocks, for which each cluster
+ * takes the lowest degree whose error bound fits its share, or is taken apart.
+ * The bound is rigorous: what is left out of the moments up to the stored degree is bounded by their norms, what lies beyond by
+ * Σ|q| s^k, what a local expansion leaves out by Σ|q| and the distances.
  * Relative accuracy is asked of the length of the field; where charges cancel to less than a thousandth, of that thousandth.
- * Work grows as n log n, memory as n. Immutable; the same numbers on any number of threads.
+ * Work grows as n log n at most, memory as n. Immutable; the same numbers on any number of threads.
  */
 public final class FieldTree {
     private static final int BLOCK = PointKernel.BLOCK;
@@ -16,15 +22,26 @@ public final class FieldTree {
     private static final double CANCELLED = 1e-3;
     /** Accuracy of the first look, relative to the sizes. */
     private static final double LOOK = 0.03;
+    /** Radius over distance from which on moments are of no use. */
+    private static final double OPEN = 0.6;
+    /** Highest degree of a local expansion. */
+    private static final int LOCAL = 14;
+    /** An expansion of degree p costs as much as the moments seen by (p+1)²/WORTH blocks one by one; measured. */
+    private static final double WORTH = 34;
+    /** Clusters are cut for a box of targets while they are larger than this part of it. */
+    private static final double EVEN = 0.7;
     /** Charges summed before they are added to the whole: bounds the rounding of long sums. */
     private static final int CHUNK = 256;
+    private static final int NEAR = -2;
 
     private final ClusterTree tree;
     private final double relative;
+    private final int localDegree;
 
     private FieldTree(ClusterTree tree, double relative) {
         this.tree = tree;
         this.relative = relative;
+        localDegree = Math.min(LOCAL, tree.degree);
     }
 
     /** @param relative accuracy asked, at least 1e-13 */
@@ -33,136 +50,236 @@ public final class FieldTree {
         return new FieldTree(ClusterTree.of(charges, degree(asked), workers), asked);
     }
 
-    /** Stored degree: high enough that clusters may be taken at two radii. */
+    /** Stored degree, odd: high enough that clusters may be taken at about two and a half radii. */
     private static int degree(double relative) {
-        int n = (int) Math.ceil(-2.4 * Math.log10(relative)) + 1;
-        return Math.max(5, n | 1);
+        return Math.max(5, (int) Math.ceil(-2.4 * Math.log10(relative)) + 1 | 1);
     }
 
     public Answers field(double[] x, double[] y, double[] z, Workers workers) {
-        return answers(false, x, y, z, workers);
+        return new Run(false, x, y, z).answers(workers);
     }
 
     public Answers potential(double[] x, double[] y, double[] z, Workers workers) {
-        return answers(true, x, y, z, workers);
+        return new Run(true, x, y, z).answers(workers);
     }
 
-    private Answers answers(boolean potential, double[] x, double[] y, double[] z, Workers workers) {
-        Answers all = Answers.of(potential ? 1 : 3, x.length);
-        if (tree.clusters.isEmpty()) {
+    /** A box about blocks [first, first + count), what it has taken in, and what is left to be seen by its halves. */
+    private static final class Box {
+        final int first;
+        final int count;
+        final double[] centre = new double[3];
+        double radius;
+        double share = Double.POSITIVE_INFINITY;
+        double[] local;
+        double error;
+        List<ClusterTree.Cluster> left;
+
+        Box(int first, int count) {
+            this.first = first;
+            this.count = count;
+        }
+    }
+
+    /** One question at all its targets. */
+    private final class Run {
+        final boolean potential;
+        final TargetBlocks blocks;
+        final Answers all;
+        final double[] share;
+        final double[] farError;
+
+        Run(boolean potential, double[] x, double[] y, double[] z) {
+            this.potential = potential;
+            blocks = TargetBlocks.of(x, y, z);
+            all = Answers.of(potential ? 1 : 3, x.length);
+            share = new double[blocks.count()];
+            farError = new double[blocks.count()];
+        }
+
+        Answers answers(Workers workers) {
+            if (tree.clusters.isEmpty() || blocks.count() == 0) {
+                return all;
+            }
+            workers.part(0, 0.3).each(blocks.count(), () -> new Block(this), Block::look);
+            Box root = new Box(0, blocks.count());
+            root.local = new double[Moments.length(localDegree)];
+            root.left = List.of(tree.clusters.get(0));
+            measure(root);
+            List<Box> level = List.of(root);
+            Workers rest = workers.part(0.3, 1);
+            int done = 0;
+            while (!level.isEmpty()) {
+                List<Box> now = level;
+                Box[] halves = new Box[2 * now.size()];
+                long single = now.stream().filter(b -> b.count == 1).count();
+                rest.part((double) done / blocks.count(), (double) (done + single) / blocks.count())
+                    .each(now.size(), () -> new Block(this), (block, i) -> block.descend(now.get(i), halves, 2 * i));
+                done += (int) single;
+                level = java.util.Arrays.stream(halves).filter(java.util.Objects::nonNull).toList();
+            }
             return all;
         }
-        TargetBlocks blocks = TargetBlocks.of(x, y, z);
-        workers.each(blocks.count(), () -> new Block(potential), (block, i) -> block.work(blocks, i, all));
-        return all;
+
+        /** Centre and radius of a box, and the least share of its blocks. */
+        void measure(Box box) {
+            double[] low = new double[3];
+            double[] high = new double[3];
+            blocks.bounds(box.first, box.count, low, high);
+            double square = 0;
+            double extent = 0;
+            for (int k = 0; k < 3; k++) {
+                box.centre[k] = 0.5 * low[k] + 0.5 * high[k];
+                square += (high[k] - low[k]) * (high[k] - low[k]);
+                extent += Math.abs(box.centre[k]);
+            }
+            box.radius = 0.5 * Math.sqrt(square) + 8 * EPS * extent + 1e-290;
+            for (int b = box.first; b < box.first + box.count; b++) {
+                box.share = Math.min(box.share, share[b]);
+            }
+        }
     }
 
     /** One block of targets at a time; the scratch space of one thread. */
     private final class Block {
-        private static final int NEAR = -2;
-
+        private final Run run;
         private final boolean potential;
         private final int rows;
         private final FarField far = new FarField(tree.degree);
+        private LocalField locals;
         private final double[] x = new double[BLOCK];
         private final double[] y = new double[BLOCK];
         private final double[] z = new double[BLOCK];
-        /** Sums over what is near already in the first look, over all else, and over the charges at hand. */
-        private final double[][] close;
-        private final double[][] rest;
+        /** Sums over the block, and over the charges at hand. */
+        private final double[][] total;
         private final double[][] part;
-        /** Σ|q|/R^k. */
-        private final double[][] sizes = new double[3][BLOCK];
-        private final double[] nearest = new double[BLOCK];
+        /** Σ|q|/R of a potential, Σ|q|/R² of a field. */
+        private final double[] sizes = new double[BLOCK];
+        /** The same with one power of R more. */
+        private final double[] slopes = new double[BLOCK];
         private final double[] sideError = new double[BLOCK];
         private final boolean[] onSide = new boolean[BLOCK];
         private final double[] low = new double[3];
         private final double[] high = new double[3];
         private final double[] side = new double[6];
-        private final ClusterTree.Cluster[] stack = new ClusterTree.Cluster[8 * 64];
-        /** Whether the first look took a cluster above this one as far: then nothing of it is summed yet. */
-        private final boolean[] seenFar = new boolean[stack.length];
-        private double inner;
+        private ClusterTree.Cluster[] stack = new ClusterTree.Cluster[1024];
+        /** Whether a cluster above this one, or it itself, is open no more: then nothing of it was summed in the first look. */
+        private boolean[] fresh = new boolean[stack.length];
         private double bound;
-        private int degree;
         private double farError;
         private double farSize;
         private int additions;
         private int size;
 
-        Block(boolean potential) {
-            this.potential = potential;
+        Block(Run run) {
+            this.run = run;
+            potential = run.potential;
             rows = potential ? 1 : 3;
-            close = new double[rows][BLOCK];
-            rest = new double[rows][BLOCK];
+            total = new double[rows][BLOCK];
             part = new double[rows][BLOCK];
         }
 
-        void work(TargetBlocks blocks, int number, Answers all) {
-            size = blocks.size(number);
-            blocks.copy(number, x, y, z);
-            bounds();
-            look();
-            double share = share();
-            clear(rest);
+        private void begin(int number) {
+            size = run.blocks.size(number);
+            run.blocks.copy(number, x, y, z);
+            run.blocks.bounds(number, 1, low, high);
+            clear(total);
+            java.util.Arrays.fill(sideError, 0);
             farError = 0;
-            run(share, false);
-            for (int i = 0; i < size; i++) {
-                put(i, blocks.order[number * BLOCK + i], all);
-            }
+            additions = 0;
         }
 
-        private void put(int i, int target, Answers all) {
-            double sum = sizes[potential ? 0 : 1][i];
-            double extent = Math.abs(x[i]) + Math.abs(y[i]) + Math.abs(z[i]) + reach();
-            double place = 2 * EPS * extent * (potential ? sizes[1][i] : 2 * sizes[2][i]);
-            all.error()[target] = farError + sideError[i] + (0.5 * (CHUNK + additions) + 60) * EPS * sum + place;
-            all.size()[target] = sum;
-            all.touching()[target] = onSide[i] || !(Math.sqrt(nearest[i]) > 4 * EPS * extent);
-            for (int k = 0; k < rows; k++) {
-                all.value()[k][target] = close[k][i] + rest[k][i];
-            }
-        }
+        // ---- the first look
 
-        private double reach() {
-            ClusterTree.Cluster root = tree.clusters.get(0);
-            return Math.abs(root.x) + Math.abs(root.y) + Math.abs(root.z) + root.radius;
-        }
-
-        private void bounds() {
-            double[][] p = {x, y, z};
-            for (int k = 0; k < 3; k++) {
-                low[k] = Double.POSITIVE_INFINITY;
-                high[k] = Double.NEGATIVE_INFINITY;
-                for (int i = 0; i < size; i++) {
-                    low[k] = Math.min(low[k], p[k][i]);
-                    high[k] = Math.max(high[k], p[k][i]);
+        /** Sums what is near for good, and finds from the rest, roughly, what the far clusters may leave out. */
+        void look(int number) {
+            begin(number);
+            java.util.Arrays.fill(sizes, 0);
+            java.util.Arrays.fill(slopes, 0);
+            java.util.Arrays.fill(onSide, false);
+            farSize = 0;
+            List<ClusterTree.Cluster> closed = new ArrayList<>();
+            List<ClusterTree.Cluster> opened = new ArrayList<>();
+            int top = push(0, tree.clusters.get(0), false);
+            while (top > 0) {
+                ClusterTree.Cluster c = stack[--top];
+                if (isOpen(c)) {
+                    if (c.children.length == 0) {
+                        opened.add(c);
+                        near(c, true);
+                    }
+                    for (int k = c.children.length - 1; k >= 0; k--) {
+                        top = push(top, c.children[k], false);
+                    }
+                } else {
+                    closed.add(c);
                 }
             }
+            for (int i = 0; i < size; i++) {
+                keep(i, number, opened);
+            }
+            for (ClusterTree.Cluster c : closed) {
+                roughly(c);
+            }
+            for (int i = 0; i < size; i++) {
+                run.all.size()[target(number, i)] = sizes[i];
+                // the place's own rounding moves V by Σ|q|/R² and E by twice Σ|q|/R³ at most
+                double place = (potential ? 2 : 4) * EPS * extent(i) * slopes[i];
+                run.all.error()[target(number, i)] = sideError[i] + (60 + 0.5 * additions) * EPS * sizes[i] + place;
+            }
+            run.share[number] = share();
         }
 
-        private void look() {
-            clear(close);
-            clear(rest);
-            clear(sizes);
-            java.util.Arrays.fill(nearest, Double.POSITIVE_INFINITY);
-            java.util.Arrays.fill(sideError, 0);
-            java.util.Arrays.fill(onSide, false);
-            farError = 0;
-            farSize = 0;
-            additions = 0;
-            run(LOOK, true);
+        private int target(int number, int i) {
+            return run.blocks.order[number * BLOCK + i];
+        }
+
+        private double extent(int i) {
+            ClusterTree.Cluster root = tree.clusters.get(0);
+            return Math.abs(x[i]) + Math.abs(y[i]) + Math.abs(z[i]) + Math.abs(root.x) + Math.abs(root.y) + Math.abs(root.z) + root.radius;
+        }
+
+        private void keep(int i, int number, List<ClusterTree.Cluster> opened) {
+            int target = target(number, i);
+            for (int k = 0; k < rows; k++) {
+                run.all.value()[k][target] = total[k][i];
+            }
+            double least = 4 * EPS * extent(i);
+            boolean close = !(slopes[i] * least < 0.1 * sizes[i]) && slopes[i] != 0;
+            run.all.touching()[target] = onSide[i] || close && !(nearest(i, opened) > least);
+            run.farError[number] = farError;
+        }
+
+        /** Distance of the nearest charge; looked for only where slope over size says that one may be very close. */
+        private double nearest(int i, List<ClusterTree.Cluster> opened) {
+            Charges s = tree.charges;
+            double least = Double.POSITIVE_INFINITY;
+            for (ClusterTree.Cluster c : opened) {
+                for (int j = c.from * s.each; j < c.to * s.each; j++) {
+                    double dx = x[i] - s.x[j];
+                    double dy = y[i] - s.y[j];
+                    double dz = z[i] - s.z[j];
+                    least = Math.min(least, dx * dx + dy * dy + dz * dz);
+                }
+            }
+            return Math.sqrt(least);
+        }
+
+        private void roughly(ClusterTree.Cluster c) {
+            double distance = boxDistance(c.x, c.y, c.z);
+            size(c.x, c.y, c.z, c.charge);
+            farSize += c.charge * unit(distance);
+            int degree = degree(c, distance, distance, LOOK);
+            far(c, degree == NEAR ? tree.degree : degree);
         }
 
         /** What each cluster may leave out of its Σ|q|/R², so that all together leave every target of the block its accuracy. */
         private double share() {
             double allowed = Double.POSITIVE_INFINITY;
             for (int i = 0; i < size; i++) {
-                double sum = sizes[potential ? 0 : 1][i];
+                double sum = sizes[i];
                 double square = 0;
                 for (int k = 0; k < rows; k++) {
-                    double v = close[k][i] + rest[k][i];
-                    square += v * v;
+                    square += total[k][i] * total[k][i];
                 }
                 double value = Math.sqrt(square) - farError;
                 if (sum < Double.POSITIVE_INFINITY && !Double.isNaN(value)) {
@@ -172,43 +289,169 @@ public final class FieldTree {
             return farSize > 0 ? Math.min(LOOK, allowed / farSize) : LOOK;
         }
 
-        /** All clusters, far or near; near ones of the first look are summed then and stay. */
-        private void run(double share, boolean look) {
-            int top = 0;
-            seenFar[top] = look;
-            stack[top++] = tree.clusters.get(0);
-            while (top > 0) {
-                ClusterTree.Cluster c = stack[--top];
-                boolean fresh = look || seenFar[top];
-                if (!fresh) {
-                    boolean wasNear = isNear(c, LOOK);
-                    if (wasNear && !isCut(c)) {
-                        continue;
+        // ---- boxes of targets
+
+        /** Takes in what is far from a box; its halves see the rest, a block is worked to its end. */
+        void descend(Box box, Box[] halves, int at) {
+            locals = locals == null ? new LocalField(localDegree) : locals;
+            takeIn(box);
+            if (box.count == 1) {
+                finish(box);
+                return;
+            }
+            int half = box.count / 2;
+            halves[at] = child(box, box.first, half);
+            halves[at + 1] = child(box, box.first + half, box.count - half);
+        }
+
+        private Box child(Box box, int first, int count) {
+            Box child = new Box(first, count);
+            run.measure(child);
+            child.left = box.left;
+            child.error = box.error;
+            child.local = locals.moved(box.local, (child.centre[0] - box.centre[0]) / box.radius, (child.centre[1] - box.centre[1]) / box.radius,
+                (child.centre[2] - box.centre[2]) / box.radius, child.radius / box.radius);
+            return child;
+        }
+
+        private void takeIn(Box box) {
+            int most = (int) Math.min(localDegree, Math.sqrt(WORTH * box.count) - 1);
+            List<List<ClusterTree.Cluster>> taken = new ArrayList<>();
+            for (int p = 0; p <= most; p++) {
+                taken.add(new ArrayList<>());
+            }
+            List<ClusterTree.Cluster> left = new ArrayList<>();
+            for (ClusterTree.Cluster first : box.left) {
+                int top = push(0, first, false);
+                while (top > 0) {
+                    ClusterTree.Cluster c = stack[--top];
+                    int degree = localDegree(c, box, most);
+                    if (degree != NEAR) {
+                        box.error += bound + ruleErrorOf(c, box);
+                        taken.get(degree).add(c);
+                    } else if (box.count > 1 && c.children.length > 0 && c.radius > EVEN * box.radius) {
+                        for (int k = c.children.length - 1; k >= 0; k--) {
+                            top = push(top, c.children[k], false);
+                        }
+                    } else {
+                        left.add(c);
                     }
-                    fresh = !wasNear;
                 }
-                if (!isNear(c, share)) {
-                    far(c, look);
-                } else if (isCut(c)) {
-                    for (int k = c.children.length - 1; k >= 0; k--) {
-                        seenFar[top] = fresh;
-                        stack[top++] = c.children[k];
+            }
+            box.left = left;
+            convert(taken, box);
+        }
+
+        /** Of sides as their Gauss charges. */
+        private double ruleErrorOf(ClusterTree.Cluster c, Box box) {
+            double dx = c.x - box.centre[0];
+            double dy = c.y - box.centre[1];
+            double dz = c.z - box.centre[2];
+            double distance = Math.sqrt(dx * dx + dy * dy + dz * dz) - box.radius - c.radius;
+            return tree.charges.sides == null ? 0 : Sides.RULE_ERROR * c.charge * unit(distance);
+        }
+
+        /** Lowest degrees last, so that only the last few clusters go in a block that is not full. */
+        private void convert(List<List<ClusterTree.Cluster>> taken, Box box) {
+            List<ClusterTree.Cluster> batch = new ArrayList<>();
+            int degree = 0;
+            for (int p = taken.size() - 1; p >= 0; p--) {
+                for (ClusterTree.Cluster c : taken.get(p)) {
+                    degree = batch.isEmpty() ? p : degree;
+                    batch.add(c);
+                    if (batch.size() == BLOCK) {
+                        locals.add(batch, tree, degree, box.centre[0], box.centre[1], box.centre[2], box.radius, box.local);
+                        batch.clear();
                     }
-                } else {
-                    near(c, look ? close : rest, look);
+                }
+            }
+            if (!batch.isEmpty()) {
+                locals.add(batch, tree, degree, box.centre[0], box.centre[1], box.centre[2], box.radius, box.local);
+            }
+        }
+
+        /** Lowest degree of moments and expansion that leaves no more than the share of the box; its error in {@link #bound}. */
+        private int localDegree(ClusterTree.Cluster c, Box box, int most) {
+            double dx = c.x - box.centre[0];
+            double dy = c.y - box.centre[1];
+            double dz = c.z - box.centre[2];
+            double distance = Math.sqrt(dx * dx + dy * dy + dz * dz);
+            double inner = distance - box.radius;
+            double gap = distance - c.radius;
+            if (!(inner > 0) || isOpen(c, inner) || !(box.radius < OPEN * gap)) {
+                return NEAR;
+            }
+            int p = degree(c, inner, distance + box.radius, 0.5 * box.share);
+            if (p == NEAR || p > most) {
+                return NEAR;
+            }
+            double ofMoments = bound;
+            double allowed = 0.5 * box.share * c.charge * unit(distance + box.radius);
+            double t = box.radius / gap;
+            double left = 1 / (1 - t);
+            double power = Math.pow(t, Math.max(1, p));
+            for (p = Math.max(1, p); p <= most; p++) {
+                double error = c.charge * unit(gap) * (potential ? power * t * left : power * left * (p + 1 + t * left));
+                if (error <= allowed) {
+                    bound = ofMoments + error;
+                    return p;
+                }
+                power *= t;
+            }
+            return NEAR;
+        }
+
+        // ---- a block
+
+        private void finish(Box box) {
+            int number = box.first;
+            begin(number);
+            farError = box.error + run.farError[number];
+            if (potential) {
+                far.localPotential(box.local, localDegree, box.centre[0], box.centre[1], box.centre[2], box.radius, x, y, z, total[0]);
+            } else {
+                far.localField(box.local, localDegree, box.centre[0], box.centre[1], box.centre[2], box.radius, x, y, z, total[0], total[1],
+                    total[2]);
+            }
+            for (ClusterTree.Cluster c : box.left) {
+                rest(c, number);
+            }
+            for (int i = 0; i < size; i++) {
+                int target = target(number, i);
+                run.all.error()[target] += farError + sideError[i] + 0.5 * (CHUNK + additions) * EPS * run.all.size()[target];
+                for (int k = 0; k < rows; k++) {
+                    run.all.value()[k][target] += total[k][i];
                 }
             }
         }
 
-        /** Whether the cluster must be cut, or its charges taken one by one because that costs less; leaves its degree. */
-        private boolean isNear(ClusterTree.Cluster c, double share) {
-            degree = degree(c, share);
-            return degree == NEAR || cost(degree) >= (c.to - c.from) * tree.charges.each;
+        private boolean isBelowClosed(ClusterTree.Cluster c) {
+            for (ClusterTree.Cluster p = c.parent; p != null; p = p.parent) {
+                if (!isOpen(p)) {
+                    return true;
+                }
+            }
+            return false;
         }
 
-        /** Of a near cluster: its children are looked at in its place. */
-        private boolean isCut(ClusterTree.Cluster c) {
-            return degree == NEAR && c.children.length > 0;
+        private void rest(ClusterTree.Cluster first, int number) {
+            int top = push(0, first, isBelowClosed(first));
+            while (top > 0) {
+                ClusterTree.Cluster c = stack[--top];
+                boolean closed = !isOpen(c);
+                boolean isFresh = fresh[top] || closed;
+                double distance = boxDistance(c.x, c.y, c.z);
+                int degree = closed ? degree(c, distance, distance, run.share[number]) : NEAR;
+                if (degree != NEAR && cost(degree) < (c.to - c.from) * tree.charges.each) {
+                    far(c, degree);
+                } else if (degree == NEAR && c.children.length > 0) {
+                    for (int k = c.children.length - 1; k >= 0; k--) {
+                        top = push(top, c.children[k], isFresh);
+                    }
+                } else if (isFresh) {
+                    near(c, false);
+                }
+            }
         }
 
         /** Of moments up to this degree, in pairs of the near kernel; measured. */
@@ -216,26 +459,49 @@ public final class FieldTree {
             return 10 + (degree + 2) * (degree + 3) * 2 / 3;
         }
 
-        /** Lowest degree that leaves no more than the share, its error in {@link #bound}; NEAR when the cluster is too near. */
-        private int degree(ClusterTree.Cluster c, double share) {
-            double distance = boxDistance(c.x, c.y, c.z);
-            double t = c.radius / distance;
-            if (!(t < 0.9) || !(distance - c.radius >= Sides.NEAR * c.longest) || c.radius == 0) {
-                return NEAR;
+        private int push(int top, ClusterTree.Cluster c, boolean isFresh) {
+            if (top == stack.length) {
+                stack = java.util.Arrays.copyOf(stack, 2 * top);
+                fresh = java.util.Arrays.copyOf(fresh, 2 * top);
             }
+            stack[top] = c;
+            fresh[top] = isFresh;
+            return top + 1;
+        }
+
+        /** Whether a cluster is too near, or its sides too long, for its moments. */
+        private boolean isOpen(ClusterTree.Cluster c) {
+            return isOpen(c, boxDistance(c.x, c.y, c.z));
+        }
+
+        private static boolean isOpen(ClusterTree.Cluster c, double distance) {
+            return !(c.radius < OPEN * distance) || !(distance - c.radius >= Sides.NEAR * c.longest) || c.radius == 0;
+        }
+
+        private double unit(double distance) {
+            return potential ? 1 / distance : 1 / (distance * distance);
+        }
+
+        /**
+         * Lowest degree at which targets from {@code inner} away on lose no more than the share of Σ|q|/R² at {@code outer}, its error in
+         * {@link #bound}; NEAR when there is none.
+         */
+        private int degree(ClusterTree.Cluster c, double inner, double outer, double share) {
+            double t = c.radius / inner;
             int p = tree.degree;
-            inner = potential ? 1 / distance : 1 / (distance * distance);
-            double allowed = share * c.charge * inner;
+            double unit = unit(inner);
+            double allowed = share * c.charge * unit(outer);
             double power = Math.pow(t, p + 1);
             double left = 1 / (1 - t);
-            double error = c.beyond * power * inner * (potential ? left : left * (p + 2 + t * left));
+            double error = c.beyond * power * unit * (potential ? left : left * (p + 2 + t * left));
+            bound = error;
             if (!(error <= allowed)) {
                 return NEAR;
             }
             int at = c.number * (p + 1);
             while (p >= 0) {
                 power /= t;
-                double more = error + tree.norms[at + p] * power * inner * (potential ? 1 : p + 1);
+                double more = error + tree.norms[at + p] * power * unit * (potential ? 1 : p + 1);
                 if (!(more <= allowed)) {
                     break;
                 }
@@ -246,14 +512,10 @@ public final class FieldTree {
             return p;
         }
 
-        private void far(ClusterTree.Cluster c, boolean look) {
+        private void far(ClusterTree.Cluster c, int degree) {
             farError += bound;
-            farSize += look ? c.charge * inner : 0;
             if (tree.charges.sides != null) {
                 ruleError(c.charge, boxDistance(c.x, c.y, c.z) - c.radius);
-            }
-            if (look) {
-                PointKernel.sizes(c.x, c.y, c.z, c.charge, x, y, z, sizes, part[0]);
             }
             if (degree >= 0) {
                 clear(part);
@@ -263,23 +525,19 @@ public final class FieldTree {
                 } else {
                     far.field(tree.moments, at, degree, c.x, c.y, c.z, c.radius, x, y, z, part[0], part[1], part[2]);
                 }
-                flush(rest);
+                flush();
             }
         }
 
-        /** Charge by charge. What only sizes are wanted of, and is not very near, counts as if it stood at its centre. */
-        private void near(ClusterTree.Cluster c, double[][] to, boolean first) {
+        /** Charge by charge. */
+        private void near(ClusterTree.Cluster c, boolean look) {
             Charges s = tree.charges;
-            boolean look = first && !(c.radius < 0.7 * boxDistance(c.x, c.y, c.z));
-            if (first && !look) {
-                PointKernel.sizes(c.x, c.y, c.z, c.charge, x, y, z, sizes, part[0]);
-            }
             int start = c.from;
             for (int e = c.from; s.sides != null && e < c.to; e++) {
                 double middle = boxDistance(s.middle(s.x, e), s.middle(s.y, e), s.middle(s.z, e));
                 if (middle < Sides.NEAR * s.half(e)) {
-                    nodes(start * s.each, e * s.each, to, look);
-                    side(e, to, look);
+                    nodes(start * s.each, e * s.each, look);
+                    side(e, look);
                     start = e + 1;
                 } else {
                     for (int k = s.each * e; k < s.each * (e + 1); k++) {
@@ -287,7 +545,7 @@ public final class FieldTree {
                     }
                 }
             }
-            nodes(start * s.each, c.to * s.each, to, look);
+            nodes(start * s.each, c.to * s.each, look);
         }
 
         private void ruleError(double charge, double distance) {
@@ -301,7 +559,7 @@ public final class FieldTree {
             return Math.sqrt(dx * dx + dy * dy + dz * dz);
         }
 
-        private void nodes(int from, int to, double[][] sum, boolean look) {
+        private void nodes(int from, int to, boolean look) {
             Charges s = tree.charges;
             for (int start = from; start < to; start += CHUNK) {
                 int end = Math.min(to, start + CHUNK);
@@ -311,14 +569,22 @@ public final class FieldTree {
                 } else {
                     PointKernel.field(s.x, s.y, s.z, s.q, start, end, x, y, z, part[0], part[1], part[2]);
                 }
-                flush(sum);
+                flush();
                 for (int j = start; look && j < end; j++) {
-                    PointKernel.sizes(s.x[j], s.y[j], s.z[j], s.q[j], x, y, z, sizes, nearest);
+                    size(s.x[j], s.y[j], s.z[j], Math.abs(s.q[j]));
                 }
             }
         }
 
-        private void side(int e, double[][] sum, boolean look) {
+        private void size(double cx, double cy, double cz, double charge) {
+            if (potential) {
+                PointKernel.potentialSize(cx, cy, cz, charge, x, y, z, sizes, slopes);
+            } else {
+                PointKernel.fieldSize(cx, cy, cz, charge, x, y, z, sizes, slopes);
+            }
+        }
+
+        private void side(int e, boolean look) {
             additions++;
             for (int i = 0; i < size; i++) {
                 tree.charges.sides.closed(e, x[i], y[i], z[i], side);
@@ -327,20 +593,19 @@ public final class FieldTree {
                     continue;
                 }
                 for (int k = 0; k < rows; k++) {
-                    sum[k][i] += side[potential ? 3 : k];
+                    total[k][i] += side[potential ? 3 : k];
                 }
                 sideError[i] += side[potential ? 5 : 4];
                 if (look) {
-                    sizes[0][i] += Math.abs(side[3]);
-                    sizes[1][i] += Math.sqrt(side[0] * side[0] + side[1] * side[1] + side[2] * side[2]);
+                    sizes[i] += potential ? Math.abs(side[3]) : Math.sqrt(side[0] * side[0] + side[1] * side[1] + side[2] * side[2]);
                 }
             }
         }
 
-        private void flush(double[][] sum) {
+        private void flush() {
             additions++;
             for (int k = 0; k < rows; k++) {
-                add(part[k], sum[k]);
+                add(part[k], total[k]);
             }
         }
 

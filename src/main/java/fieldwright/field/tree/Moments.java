@@ -157,7 +157,7 @@ final class Moments {
     }
 
     /** All orders −n … n, degree n times ratio^n. */
-    private static double[] full(double[] half, double ratio, int degree) {
+    static double[] full(double[] half, double ratio, int degree) {
         double[] all = new double[2 * (degree + 1) * (degree + 1)];
         double scale = 1;
         for (int n = 0; n <= degree; n++) {
@@ -178,7 +178,7 @@ final class Moments {
     }
 
     /** Υ_n^m of one place. */
-    private static void regular(double x, double y, double z, int degree, double[] out) {
+    static void regular(double x, double y, double z, int degree, double[] out) {
         double square = x * x + y * y + z * z;
         out[0] = 1;
         for (int m = 0; m <= degree; m++) {

@@ -51,33 +51,29 @@ public final class PointKernel {
         }
     }
 
-    /** Adds |q|/|d|^k for k = 1, 2, 3 and lowers {@code nearest} to the least |d|². */
-    static void sizes(double sx, double sy, double sz, double q, double[] x, double[] y, double[] z, double[][] size, double[] nearest) {
-        sizes(sx, sy, sz, Math.abs(q), x, y, z, size[0], size[1], size[2]);
-        nearest(sx, sy, sz, x, y, z, nearest);
-    }
-
-    private static void sizes(double sx, double sy, double sz, double q, double[] x, double[] y, double[] z, double[] first, double[] second,
-        double[] third) {
+    /** Adds |q|/|d| to size and |q|/|d|² to slope: of a potential. */
+    static void potentialSize(double sx, double sy, double sz, double q, double[] x, double[] y, double[] z, double[] size, double[] slope) {
         for (int i = 0; i < BLOCK; i++) {
             double dx = x[i] - sx;
             double dy = y[i] - sy;
             double dz = z[i] - sz;
             double inverse = 1 / Math.sqrt(dx * dx + dy * dy + dz * dz);
             double u = q * inverse;
-            first[i] += u;
-            u *= inverse;
-            second[i] += u;
-            third[i] += u * inverse;
+            size[i] += u;
+            slope[i] += u * inverse;
         }
     }
 
-    private static void nearest(double sx, double sy, double sz, double[] x, double[] y, double[] z, double[] nearest) {
+    /** Adds |q|/|d|² to size and |q|/|d|³ to slope: of a field. */
+    static void fieldSize(double sx, double sy, double sz, double q, double[] x, double[] y, double[] z, double[] size, double[] slope) {
         for (int i = 0; i < BLOCK; i++) {
             double dx = x[i] - sx;
             double dy = y[i] - sy;
             double dz = z[i] - sz;
-            nearest[i] = Math.min(nearest[i], dx * dx + dy * dy + dz * dz);
+            double inverse = 1 / Math.sqrt(dx * dx + dy * dy + dz * dz);
+            double u = q * inverse * inverse;
+            size[i] += u;
+            slope[i] += u * inverse;
         }
     }
 }

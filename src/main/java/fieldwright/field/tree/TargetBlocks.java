@@ -41,6 +41,19 @@ final class TargetBlocks {
         }
     }
 
+    /** Box about blocks [first, first + count). */
+    void bounds(int first, int count, double[] low, double[] high) {
+        int end = Math.min(order.length, (first + count) * BLOCK);
+        for (int k = 0; k < 3; k++) {
+            low[k] = Double.POSITIVE_INFINITY;
+            high[k] = Double.NEGATIVE_INFINITY;
+            for (int i = first * BLOCK; i < end; i++) {
+                low[k] = Math.min(low[k], place[k][i]);
+                high[k] = Math.max(high[k], place[k][i]);
+            }
+        }
+    }
+
     private void divide(int from, int to) {
         int blocks = (to - from + BLOCK - 1) / BLOCK;
         if (blocks < 2) {

@@ -28,6 +28,11 @@ public final class Workers {
         return new Workers(Runtime.getRuntime().availableProcessors(), part -> { });
     }
 
+    /** The same threads for one part of the work: its progress runs from one number to the other. */
+    Workers part(double from, double to) {
+        return new Workers(threads, part -> progress.accept(from + (to - from) * part));
+    }
+
     /** One of the tasks 0 … n − 1, with what its thread keeps for itself. */
     public interface Task<T> {
         void work(T own, int number);

@@ -196,6 +196,24 @@ class FieldTreeTest {
         }
     }
 
+    /** Enough targets for local expansions of boxes on several levels. */
+    @Test
+    void manyTargetsAreServedByTheirBoxes() {
+        double[][] s = cloud("even", 4000, 21);
+        double[][] t = targets(s, 30_000);
+        FieldTree tree = FieldTree.of(Charges.points(s[0], s[1], s[2], s[3]), 1e-4, ONE);
+        for (boolean potential : new boolean[] {false, true}) {
+            Answers a = potential ? tree.potential(t[0], t[1], t[2], ONE) : tree.field(t[0], t[1], t[2], ONE);
+            for (int i = 0; i < 30_000; i += 150) {
+                double[] exact = direct(s, t[0][i], t[1][i], t[2][i]);
+                double error = distance(a, i, potential ? new double[] {exact[3]} : exact);
+                assertTrue(error <= a.error()[i], "target " + i + ": error " + error + " stated " + a.error()[i]);
+                double value = potential ? Math.abs(exact[3]) : length(exact);
+                assertTrue(a.error()[i] <= 1e-4 * Math.max(value, 1.5e-3 * a.size()[i]) + 1e-12 * a.size()[i], "target " + i);
+            }
+        }
+    }
+
     @Test
     void theSameBitsOnAnyNumberOfThreads() {
         double[][] s = cloud("neutral", 20_000, 3);
