@@ -303,7 +303,7 @@ final class ClosedShapes {
     }
 
     /** c₀ + Σ c_k t_k when the formula is that, else null. */
-    private static double[] linear(Formula f, Map<String, Formula> names) {
+    static double[] linear(Formula f, Map<String, Formula> names) {
         if (!names.keySet().containsAll(f.variables())) {
             return null;
         }

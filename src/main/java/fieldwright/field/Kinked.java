@@ -20,8 +20,9 @@ import fieldwright.quantity.Amount;
 
 /**
  * A volume cut where its density bends or jumps: at zeros of what stands in abs, sign, min or max, or of the two sides of a condition
- * of when, if those are values of one coordinate between numbers. On each part one branch holds, so that abs(z) is z or −z, a
- * polynomial, which the radial integral takes.
+ * of when, if those are values of one coordinate between numbers; boxes and rectangles also along a slanted line or plane of two
+ * coordinates ({@link SlantedCut}). On each part one branch holds, so that abs(z) is z or −z, a polynomial, which the radial integral
+ * takes.
  */
 record Kinked(CoordinateRegion region, Formula density) {
     private static final Set<Function> BRANCHED = Set.of(Function.ABS, Function.SIGN, Function.MIN, Function.MAX);
@@ -29,8 +30,12 @@ record Kinked(CoordinateRegion region, Formula density) {
     /** The parts; the whole as it is when nothing can be cut. */
     static List<Kinked> parts(CoordinateRegion region, Formula density) {
         List<Kinked> all = List.of(new Kinked(region, density));
-        if (region.dimension() != 3 || density.kinks().isEmpty()) {
+        if (density.kinks().isEmpty() || region.dimension() < 2) {
             return all;
+        }
+        if (region.dimension() == 2) {
+            List<CoordinateRegion> cut = SlantedCut.parts(region, density);
+            return cut.size() == 1 ? all : cut.stream().map(r -> new Kinked(r, density).onOneBranch()).toList();
         }
         Chart chart = region.charts().get(0).chart();
         double[][] breaks = RegionIntegral.breaks(chart, density);
@@ -59,6 +64,7 @@ record Kinked(CoordinateRegion region, Formula density) {
             }
             all = finer;
         }
+        all = all.stream().flatMap(part -> SlantedCut.parts(part.region, density).stream().map(r -> new Kinked(r, density))).toList();
         return all.size() == 1 ? all : all.stream().map(Kinked::onOneBranch).toList();
     }
 
@@ -120,9 +126,9 @@ record Kinked(CoordinateRegion region, Formula density) {
     }
 
     /** Sign of a kink all over a part; 0 when it was not cut by this kink. */
-    private static int sign(Formula kink, Chart chart) {
+    private int sign(Formula kink, Chart chart) {
         if (kink.variables().size() != 1) {
-            return 0;
+            return SlantedCut.sign(kink, region, chart);
         }
         String name = kink.variables().iterator().next();
         int k = chartDepth(chart, name);
