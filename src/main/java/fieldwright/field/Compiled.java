@@ -367,6 +367,13 @@ final class Compiled {
         return balls[i];
     }
 
+    private final java.util.Map<SpreadBody, Boolean> round = new java.util.IdentityHashMap<>();
+
+    /** Whether all parts of a body are the same all round the axis of a cylinder; there is one cylinder for a source. */
+    boolean isRound(SpreadBody body, RoundGreen.Cylinder cylinder, Workspace space) {
+        return round.computeIfAbsent(body, b -> b.patches().stream().allMatch(patch -> Turn.of(patch, cylinder) >= 0));
+    }
+
     /** Whether the balls about all parts of a body are far in this sense; never for endless ones. */
     boolean isFar(SpreadBody body, Workspace space, java.util.function.Predicate<Ball> isFar) {
         for (int i = 0; i < body.patches().size(); i++) {

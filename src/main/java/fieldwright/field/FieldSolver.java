@@ -45,6 +45,8 @@ public final class FieldSolver {
     private final Workspace space = new Workspace();
     private boolean checked;
     private boolean lostDigits;
+    /** What series of the surroundings leave out for point charges, in units of the kernel. */
+    private double leftOut;
     private int evaluations;
 
     private FieldSolver(Source source, Accuracy accuracy, Compiled compiled) {
@@ -188,6 +190,7 @@ public final class FieldSolver {
 
     /** All of the source, through the probes and smooth parts of a view. */
     private void see(View view, double[] at, Paver paver, double[] error) {
+        leftOut = 0;
         for (PointCharge point : compiled.points) {
             if (point.charge().si() == 0) {
                 continue;
@@ -205,6 +208,10 @@ public final class FieldSolver {
         ClosedSum closed = new ClosedSum(paver, accuracy, error);
         for (SpreadBody body : compiled.bodies) {
             boolean far = view.far() != null && compiled.isFar(body, space, ball -> isFar(view, at, ball.centre(), ball.radius()));
+            if (!far && view.round() != null && compiled.isRound(body, view.round().cylinder(), space)) {
+                seeRound(body, view.round(), paver, closed, error);
+                continue;
+            }
             for (Probe probe : far ? List.<Probe>of() : view.probes()) {
                 closed.see(body, probe);
             }
@@ -215,6 +222,19 @@ public final class FieldSolver {
         lostDigits = closed.hasLostDigits();
         for (Crowd crowd : compiled.crowds) {
             see(crowd, view, at, paver, error);
+        }
+    }
+
+    /** A body that is the same all round the axis of the cylinder it is in. */
+    private void seeRound(SpreadBody body, View.Round round, Paver paver, ClosedSum closed, double[] error) {
+        List<Patch> patches = body.patches();
+        for (int i = 0; i < patches.size(); i++) {
+            RingGreen.Parts parts = round.parts().apply(compiled.ball(body.first() + i, space));
+            if (i == 0) {
+                parts.probes().forEach(probe -> closed.see(body, probe));
+            }
+            smooth(patches.get(i), parts.green(), paver, error);
+            GreenPiece.add(patches.get(i), parts.wall(), paver, space, error, Turn.of(patches.get(i), round.cylinder()));
         }
     }
 
@@ -248,6 +268,7 @@ public final class FieldSolver {
         }
         double size = norm(new double[] {out[0][0], out[1][0], out[2][0]});
         double relative = point.charge().error() / Math.abs(q) + 4 * Sampler.EPS;
+        leftOut += Math.abs(q) * doubt[0];
         for (int a = 0; a < paver.start.length; a++) {
             paver.start[a] += q * out[a][0];
             error[a] += Math.abs(q) * (doubt[0] + relative * size);
@@ -369,7 +390,7 @@ public final class FieldSolver {
 
     /** Whether an endless source has a potential there. */
     private static boolean isSettled(View view) {
-        return view.isConductor() && view.probes().isEmpty() || view.isBalanced();
+        return view.isConductor() && view.probes().isEmpty() || view.isBalanced() || view.round() != null;
     }
 
     private static AuthorException endlessPotential() {
@@ -563,6 +584,11 @@ public final class FieldSolver {
         }
         double relative = Math.max(accuracy.relative(), 4 * roughness);
         double allowed = Math.max(accuracy.absoluteFloor() / Math.abs(scale), relative * Math.max(size, 1e-3 * magnitude));
+        if (leftOut > allowed) {
+            return Standing.notConverged(String.format(java.util.Locale.ROOT, "%s: the series of the wall is cut off with %.2g %s left out, tolerance "
+                + "%.2g %s: place and charge are both close to the round wall. Move one of them off, or take the wall as a plane there", what,
+                scale * leftOut, unit, scale * allowed, unit));
+        }
         if (r.isConverged() || error <= allowed) {
             return Standing.CONVERGED;
         }
@@ -657,11 +683,14 @@ public final class FieldSolver {
         double[] direction = patch.frame().directionToSheet(unit(patch.kernel().axis));
         String axis = around instanceof Surroundings.GroundPlane g ? g.axis() : around instanceof Surroundings.DielectricHalfSpace h ? h.axis()
             : around instanceof Surroundings.GroundedPair p ? p.axis() : null;
+        if (around instanceof Surroundings.GroundedTube tube) {
+            return patch.kernel().kind != Kernel.Kind.LINE || Math.abs(direction["xyz".indexOf(tube.axis())]) < 1 - 1e-12;
+        }
         if (patch.kernel().kind == Kernel.Kind.PLANE) {
             return axis == null || around instanceof Surroundings.DielectricHalfSpace || Math.abs(direction["xyz".indexOf(axis)]) < 1 - 1e-12;
         }
         if (axis == null) {
-            return around instanceof Surroundings.GroundedBox || around instanceof Surroundings.GroundedDrum || around instanceof Surroundings.GroundedTube;
+            return around instanceof Surroundings.GroundedBox || around instanceof Surroundings.GroundedDrum;
         }
         return (patch.kernel().kind == Kernel.Kind.LINE || around instanceof Surroundings.GroundedPair)
             && Math.abs(direction["xyz".indexOf(axis)]) > 1e-12;

@@ -26,4 +26,9 @@ interface Green {
     default Green forPatch() {
         return this;
     }
+
+    /** Whether it is smooth in the place of the source up to the walls. */
+    default boolean isSmooth() {
+        return true;
+    }
 }

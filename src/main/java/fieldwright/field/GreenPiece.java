@@ -22,7 +22,11 @@ final class GreenPiece implements Integrand {
     private final double[] weight = new double[BLOCK];
     private final double[] doubt = new double[BLOCK];
 
-    private GreenPiece(Patch patch, Green green, boolean potential, Workspace space) {
+    /** The parameters it runs over: all, or all but the turn round the axis, along which nothing changes. */
+    private final int[] axes;
+
+    private GreenPiece(Patch patch, Green green, boolean potential, Workspace space, int turn) {
+        axes = java.util.stream.IntStream.range(0, patch.dimension()).filter(k -> k != turn).toArray();
         this.patch = patch;
         this.green = green;
         this.potential = potential;
@@ -34,11 +38,16 @@ final class GreenPiece implements Integrand {
 
     /** Adds the pieces, cut where the density bends; what needs no integral to the start. */
     static void add(Patch patch, Green green, Paver paver, Workspace space, double[] error) {
+        add(patch, green, paver, space, error, -1);
+    }
+
+    /** The same for charge and Green function that do not change along parameter {@code turn}, round an axis. */
+    static void add(Patch patch, Green green, Paver paver, Workspace space, double[] error, int turn) {
         if (patch.weight().isConstant() && patch.weight().constant() == 0) {
             return;
         }
-        GreenPiece f = new GreenPiece(patch, green, paver.isPotential(), space);
-        if (patch.dimension() == 0) {
+        GreenPiece f = new GreenPiece(patch, green, paver.isPotential(), space, turn);
+        if (f.dimension() == 0) {
             double[][] out = new double[paver.start.length][1];
             f.evaluate(new double[0][], 1, out, new double[1]);
             for (int c = 0; c < out.length; c++) {
@@ -52,10 +61,11 @@ final class GreenPiece implements Integrand {
 
     private static void add(GreenPiece f, List<Cubature.Piece> pieces) {
         Patch patch = f.patch;
-        int d = patch.dimension();
+        int d = f.dimension();
         double[][] cuts = new double[d][];
         for (int k = 0; k < d; k++) {
-            cuts[k] = patch.chart().isEndless(k) ? endless(patch.breaks()[k]) : patch.breaks()[k];
+            int axis = f.axes[k];
+            cuts[k] = patch.chart().isEndless(axis) ? endless(patch.breaks()[axis]) : patch.breaks()[axis];
         }
         int[] orders = new int[d];
         java.util.Arrays.fill(orders, ORDERS[d]);
@@ -88,7 +98,7 @@ final class GreenPiece implements Integrand {
 
     @Override
     public int dimension() {
-        return patch.dimension();
+        return axes.length;
     }
 
     @Override
@@ -98,7 +108,7 @@ final class GreenPiece implements Integrand {
 
     @Override
     public boolean isSmooth() {
-        return patch.weight().isSmooth();
+        return patch.weight().isSmooth() && green.isSmooth();
     }
 
     @Override
@@ -106,10 +116,13 @@ final class GreenPiece implements Integrand {
         double[][] du = space.du;
         double[] w = weight;
         java.util.Arrays.fill(w, 0, n, 1);
-        for (int k = 0; k < patch.dimension(); k++) {
+        for (int k = 0; k < 3; k++) {
+            java.util.Arrays.fill(du[k], 0, n, 0);
+        }
+        for (int k = 0; k < axes.length; k++) {
             for (int i = 0; i < n; i++) {
                 double width = patch.triangle() && k == 1 ? 1 - u[0][i] : 1;
-                du[k][i] = width * u[k][i] - 0.5;
+                du[axes[k]][i] = width * u[k][i] - 0.5;
                 w[i] *= width;
             }
         }

@@ -251,7 +251,8 @@ final class Images {
         if (q.here().isConductor() || onWall && q.side() != null) {
             return Question.of(View.GROUNDED, 1);
         }
-        View here = q.here().with(RoundGreen.rest(c, p, onWall)).orFar(new RoundGreen(c, p, onWall, true), RoundGreen.farBeyond(c));
+        View here = q.here().with(RoundGreen.rest(c, p, onWall)).orFar(new RoundGreen(c, p, onWall, true), RoundGreen.farBeyond(c))
+            .orRound(new View.Round(c, ball -> RingGreen.parts(c, p, onWall, ball)));
         double[] side = q.side();
         if (onWall) {
             side = new double[3];

@@ -1,7 +1,5 @@
 package fieldwright.field;
 
-import fieldwright.formula.special.Bessel;
-
 /**
  * Green function within a grounded circular cylinder, endless or with grounded ends, all in units of its radius.
  *
@@ -25,7 +23,7 @@ final class RoundGreen implements Green {
     private static final double PERIOD = 17;
     /** A drum longer than this is a tube seen with its image in the nearer end: exp(−2.405·16) is left out. */
     static final double TALL = 16;
-    private static final double[] ALTERNATE = alternate(22);
+    static final double[] ALTERNATE = alternate(22);
 
     /** The cylinder: axis, foot of the axis, radius; ends along it, infinite for a tube. */
     record Cylinder(int axis, double[] centre, double radius, double from, double to) {
@@ -220,6 +218,55 @@ final class RoundGreen implements Green {
         return new RoundGreen(cylinder, place, rho == 1, far, FEW, endless);
     }
 
+    @Override
+    public Green endless(Patch patch) {
+        return cylinder.isTube() && patch.kernel().kind == Kernel.Kind.LINE ? new LineGreen(cylinder, place) : Green.super.endless(patch);
+    }
+
+    /**
+     * Endless lines along the tube, without the direct one: ln (R² − 2 p·s + p² s²/R²), p and s across the axis; the image at the inverse place
+     * (Jackson, Classical Electrodynamics, 3rd ed., 2.11 and problem 2.11).
+     */
+    private record LineGreen(Cylinder cylinder, double[] place) implements Green {
+        @Override
+        public void potential(double[][] s, int n, double[] out, double[] doubt) {
+            for (int i = 0; i < n; i++) {
+                out[i] = Math.log(inverse(s, i, new double[2]));
+                doubt[i] = 1e-15;
+            }
+        }
+
+        @Override
+        public void field(double[][] s, int n, double[][] out, double[] doubt) {
+            double[] e = new double[2];
+            for (int i = 0; i < n; i++) {
+                double d = inverse(s, i, e);
+                out[cylinder.axis][i] = 0;
+                out[(cylinder.axis + 1) % 3][i] = e[0] / d;
+                out[(cylinder.axis + 2) % 3][i] = e[1] / d;
+                doubt[i] = 1e-15 * (Math.abs(e[0]) + Math.abs(e[1])) / d;
+            }
+        }
+
+        /** Argument of the logarithm, and minus its gradient. */
+        private double inverse(double[][] s, int i, double[] e) {
+            double[] centre = cylinder.centre;
+            int first = (cylinder.axis + 1) % 3;
+            int second = (cylinder.axis + 2) % 3;
+            double px = place[first] - centre[first];
+            double py = place[second] - centre[second];
+            double sx = s[first][i] - centre[first];
+            double sy = s[second][i] - centre[second];
+            double square = cylinder.radius * cylinder.radius;
+            double ratio = (sx * sx + sy * sy) / square;
+            e[0] = 2 * (sx - px * ratio);
+            e[1] = 2 * (sy - py * ratio);
+            double turn = px * sy - py * sx;
+            double along = square - px * sx - py * sy;
+            return (along * along + turn * turn) / square;
+        }
+    }
+
     private double doubt(int l, double value) {
         return missing[l] + 3e-13 * Math.abs(value) + (far ? 0 : 3e-14);
     }
@@ -407,7 +454,7 @@ final class RoundGreen implements Green {
         double[] radial = new double[most + 1];
         double[] turning = new double[most + 1];
         double[] inverse = new double[most + 1];
-        double kappa = firstRatio(k);
+        double kappa = ScaledBessel.k1(k) / ScaledBessel.k0(k);
         double a = Math.exp(-k * (1 - rho)) * atPlace / atWall;
         double byRho = 0;
         for (int m = 0; m <= most; m++) {
@@ -424,7 +471,7 @@ final class RoundGreen implements Green {
     }
 
     /** Fills q_0 … by downward recurrence; gives e^-x I_0(x), from 1 = e^-x (I_0 + 2 I_1 + 2 I_2 + …) (DLMF 10.35.5). */
-    private static double ratios(double x, double[] q) {
+    static double ratios(double x, double[] q) {
         int most = q.length - 1;
         int start = (int) Math.sqrt(most * (double) most + 75 * x) + 12;
         double square = x * x;
@@ -438,26 +485,6 @@ final class RoundGreen implements Green {
             here = 1 / (2 * m + square * here);
         }
         return 1 / (1 + 2 * sum);
-    }
-
-    /** K_1(x)/K_0(x); from 2 on by Temme's continued fraction (Temme 1975, DLMF 10.74(iii)). */
-    private static double firstRatio(double x) {
-        if (x < 2) {
-            return Bessel.k(1, x) / Bessel.k(0, x);
-        }
-        double b = 2 * (1 + x);
-        double d = 1 / b;
-        double step = d;
-        double h = d;
-        double a = -0.25;
-        for (int i = 2; i < 500 && Math.abs(step) > 1e-17 * h; i++) {
-            a -= 2 * (i - 1);
-            b += 2;
-            d = 1 / (b + a * d);
-            step *= b * d - 1;
-            h += step;
-        }
-        return (x + 0.5 - 0.25 * h) / x;
     }
 
     // ---- what the sum over k repeats along the axis

@@ -20,6 +20,14 @@
  *
  * <p>Where time goes: a question with panels kept takes 6 to 40 microseconds, of which half is the bookkeeping of pieces; a question from
  * nothing is mostly the compiling of formulas and the first nodes. Parametric regions are slowest: position and tangents are six formulas.
+ *
+ * <p>Surroundings: {@link fieldwright.field.Images} makes of a place a {@link fieldwright.field.Question}, one {@link fieldwright.field.View} for
+ * each side: the near images as probes, what is left of endless rows of them as a smooth {@link fieldwright.field.Green} part that is
+ * integrated over the source as it is ({@link fieldwright.field.GreenPiece}). {@link fieldwright.field.WalledGreen}: parallel planes and
+ * boxes; {@link fieldwright.field.RoundGreen}: tubes and drums, and {@link fieldwright.field.RingGreen} for charge that is the same all
+ * round their axis; {@link fieldwright.field.Spheres}. {@code reactionField} and {@code reactionPotential} give the induced charge's part
+ * alone. Weak: place and charge both within a few hundredths of the radius of a round wall, unless the charge is the same all round;
+ * it is said then.
  * SI units. May depend on quantity, formula, geometry, charge, integral.
  */
 package fieldwright.field;

@@ -1,6 +1,7 @@
 package fieldwright.field;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -165,6 +166,87 @@ class SurroundingsTest {
         near(0, full.electricField(new Place(1.5, 0.5, 0.5)).x(), 1 / EPS0);
     }
 
+    private static CoordinateRegion turned(double r0, double r1, double from, double to, double z0, double z1) {
+        return CoordinateRegion.in(CoordinateSystem.CYLINDRICAL).limits("rho", m(r0), m(r1))
+            .limits("phi", Formula.constant(from * Math.PI), Formula.constant(to * Math.PI)).limits("z", m(z0), m(z1));
+    }
+
+    /** A drum that fills with uniform charge, radius 1, height 2; own computation, mpmath, sum of sin I_0 along the axis. */
+    @Test
+    void chargeFillsItsDrum() {
+        FieldSolver full = solver(charge(turned(0, 1, 0, 2, 0, 2), "1", new Surroundings.GroundedDrum("z", 0, 0, 0, 1, 0, 2)));
+        near(0.2006636103448725 / EPS0, full.potential(new Place(0, 0, 1)));
+        near(0.09413179121217576 / EPS0, full.potential(new Place(0, 0.5, 0.3)));
+        near(0.1005806030265917 / EPS0, full.electricField(new Place(0, 0.5, 0.3)).y());
+        near(-0.2112382828450633 / EPS0, full.electricField(new Place(0, 0.5, 0.3)).z());
+        near(0.001649303843899853 / EPS0, full.potential(new Place(-0.99, 0, 1.9)), 0.01 / EPS0);
+        near(0.437525551441517 / EPS0, full.electricField(new Place(1, 0, 1)).onSide("-x").x());
+        near(-0.437525551441517, full.inducedDensity(new Place(0.6, 0.8, 1)));
+        near(0, full.electricField(new Place(0, 0, 1)).x(), 1 / EPS0);
+    }
+
+    /** Charge all round the axis by the wall's term m = 0, its two halves by all terms: one and the same. */
+    @Test
+    void allRoundAndInHalves() {
+        for (Surroundings around : List.of(new Surroundings.GroundedDrum("z", 0, 0, 0, 1, -0.5, 1.2), new Surroundings.GroundedTube("z", 0, 0, 0, 1))) {
+            for (Region region : List.of(turned(0.2, 0.7, 0, 2, 0, 0.4), CoordinateRegion.in(CoordinateSystem.CYLINDRICAL).fixed("rho", m(0.6))
+                .limits("phi", Formula.constant(0), Formula.constant(2 * Math.PI)).fixed("z", m(0.3)))) {
+                boolean line = region.dimension() == 1;
+                Source whole = charge(region, "1e-9*(1 + rho)", around);
+                java.util.function.BiFunction<Double, Double, Source> part = (from, to) -> charge(line
+                    ? CoordinateRegion.in(CoordinateSystem.CYLINDRICAL).fixed("rho", m(0.6)).fixed("z", m(0.3))
+                        .limits("phi", Formula.constant(from * Math.PI), Formula.constant(to * Math.PI))
+                    : turned(0.2, 0.7, from, to, 0, 0.4), "1e-9*(1 + rho)", around);
+                FieldSolver halves = solver(new fieldwright.charge.Sources(List.of(part.apply(0.0, 0.7), part.apply(0.7, 2.0))).with(around));
+                for (Place p : List.of(new Place(0.3, 0.1, 0.2), new Place(0, 0.8, 0.6))) {
+                    Amount v = solver(whole).potential(p);
+                    Amount w = halves.potential(p);
+                    assertEquals(w.si(), v.si(), v.error() + w.error());
+                    assertTrue(v.error() + w.error() < 1e-8 * Math.abs(v.si()));
+                    Vector e = solver(whole).electricField(p);
+                    Vector f = halves.electricField(p);
+                    assertEquals(f.x().si(), e.x().si(), e.x().error() + f.x().error());
+                    assertEquals(f.y().si(), e.y().si(), e.y().error() + f.y().error());
+                    assertEquals(f.z().si(), e.z().si(), e.z().error() + f.z().error());
+                }
+            }
+        }
+    }
+
+    /** A drum with far ends is a tube, and a great sphere a plane. */
+    @Test
+    void limitsOfDrumAndSphere() {
+        Source cloud = charge(turned(0, 0.4, 0, 1.5, 0.1, 0.3), "1e-9*(1 + x - z)", null);
+        Place p = new Place(0.3, 0.5, 0.2);
+        for (double end : new double[] {7, 9}) {   // height below and above 16 radii
+            Vector tube = solver(cloud.with(new Surroundings.GroundedTube("z", 0, 0, 0, 1))).electricField(p);
+            Vector drum = solver(cloud.with(new Surroundings.GroundedDrum("z", 0, 0, 0, 1, -end, end + 0.4))).electricField(p);
+            assertEquals(tube.x().si(), drum.x().si(), 3e-9 * tube.magnitude().si());
+            assertEquals(tube.y().si(), drum.y().si(), 3e-9 * tube.magnitude().si());
+            assertEquals(tube.z().si(), drum.z().si(), 3e-9 * tube.magnitude().si());
+        }
+        Vector plane = solver(cloud.with(new Surroundings.GroundPlane("z", 0, 1))).electricField(p);
+        Vector sphere = solver(cloud.with(new Surroundings.GroundedSphere(0, 0, -1e6, 1e6, true))).electricField(p);
+        assertEquals(plane.x().si(), sphere.x().si(), 3e-6 * plane.magnitude().si());
+        assertEquals(plane.z().si(), sphere.z().si(), 3e-6 * plane.magnitude().si());
+        Vector flat = solver(cloud.with(new Surroundings.GroundedDrum("z", 0, 0, 0, 9, 0, 0.5))).electricField(p);
+        Vector pair = solver(cloud.with(new Surroundings.GroundedPair("z", 0, 0.5))).electricField(p);
+        assertEquals(pair.x().si(), flat.x().si(), 2e-9 * pair.magnitude().si());
+        assertEquals(pair.z().si(), flat.z().si(), 2e-9 * pair.magnitude().si());
+    }
+
+    /** What is left out close to a wall is stated and said: 1 mm before the wall of a tube of 1 m, which is a plane there to 2 parts in 1000. */
+    @Test
+    void doubtNextToARoundWall() {
+        FieldSolver s = solver(point(0.999, 0, 0, 1e-9, new Surroundings.GroundedTube("z", 0, 0, 0, 1)));
+        Amount v = s.potential(new Place(0.999, 0, 0.001));
+        FieldSolver plane = solver(point(0.999, 0, 0, 1e-9, new Surroundings.GroundPlane("x", 1, -1)));
+        Amount flat = plane.potential(new Place(0.999, 0, 0.001));
+        assertFalse(v.isConverged());
+        assertTrue(v.standing().reason().contains("round wall"), v.standing().reason());
+        assertEquals(flat.si(), v.si(), v.error() + 2e-3 * flat.si());
+    }
+
     /** A box whose other walls are far is a plane; two of its walls a pair. */
     @Test
     void limitsOfTheBox() {
@@ -202,6 +284,28 @@ class SurroundingsTest {
         double h = 1e-4;
         double slope = (line.potential(new Place(0, 0.5 + h, 1.5)).si() - line.potential(new Place(0, 0.5 - h, 1.5)).si()) / (2 * h);
         assertEquals(-slope, line.electricField(new Place(0, 0.5, 1.5)).y().si(), 1e-6 * Math.abs(slope));
+    }
+
+    /** Line in a tube by its image at the inverse place, V = 2λK ln(…); endless uniform column that fills the tube, V = ρ(R² − r²)/4ε. */
+    @Test
+    void endlessChargeInATube() {
+        Surroundings tube = new Surroundings.GroundedTube("z", 0.1, 0, 0, 0.5);
+        Formula minus = Formula.parse("-inf").bind(ReferenceCases.NOTHING);
+        Formula plus = Formula.parse("inf").bind(ReferenceCases.NOTHING);
+        FieldSolver line = solver(charge(cartesian().fixed("x", m(0.3)).fixed("y", m(0)).limits("z", minus, plus), "1e-9", tube));
+        double image = 0.1 + 0.25 / 0.2;
+        near(2e-9 * K * Math.log((image - 0.2) / 0.1 * 0.2 / 0.5), line.potential(new Place(0.2, 0, 7)));
+        near(2e-9 * K * (-1 / 0.1 + 1 / (image - 0.2)), line.electricField(new Place(0.2, 0, 7)).x());
+        assertEquals(0, line.potential(new Place(0.1, 0.5, 2)).si());
+        near(2e-9 * K * (0.25 - 0.04) / (0.5 * 0.09), line.electricField(new Place(0.6, 0, 0)).onSide("-x").x());
+        Surroundings own = new Surroundings.GroundedTube("z", 0, 0, 0, 0.5);
+        FieldSolver column = solver(charge(CoordinateRegion.in(CoordinateSystem.CYLINDRICAL).limits("rho", m(0), m(0.5))
+            .limits("phi", Formula.constant(0), Formula.constant(2 * Math.PI)).limits("z", minus, plus), "1e-6", own));
+        near(1e-6 * (0.25 - 0.04) / (4 * EPS0), column.potential(new Place(0, 0.2, 1)));
+        near(1e-6 * 0.2 / (2 * EPS0), column.electricField(new Place(0, 0.2, 1)).y());
+        near(1e-6 * 0.5 / (2 * EPS0), column.electricField(new Place(0, 0.5, 1)).onSide("-y").y());
+        assertThrows(AuthorException.class, () -> solver(charge(cartesian().fixed("x", m(0.3)).limits("y", minus, plus).fixed("z", m(0)), "1e-9", tube))
+            .potential(new Place(0.2, 0, 0)));
     }
 
     // ---- spheres
