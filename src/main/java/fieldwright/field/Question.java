@@ -34,7 +34,11 @@ record Question(View here, double permittivity, double[] side, View behind, doub
 
     private static View reaction(View view, Place at) {
         View rest = View.of(withoutOwn(view.isConductor() ? steady(view.probes()) : view.probes(), at));
-        return rest.with(view.green());
+        View.Round round = view.round() == null ? null : new View.Round(view.round().cylinder(), ball -> {
+            RingGreen.Parts parts = view.round().parts().apply(ball);
+            return new RingGreen.Parts(withoutOwn(parts.probes(), at), parts.green(), parts.wall());
+        });
+        return rest.with(view.green()).orRound(round);
     }
 
     /** Potential only. */

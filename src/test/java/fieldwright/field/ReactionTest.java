@@ -56,7 +56,11 @@ class ReactionTest {
         var glass = new Surroundings.DielectricHalfSpace("x", 0.2, -1, 1.5, 4);
         var shell = new Surroundings.GroundedSphere(0.1, 0, 0, 0.7, false);
         var sphere = new Surroundings.GroundedSphere(0, 0.6, 0, 0.3, true);
-        return List.of(new Case(ball.with(below), new Place(0.01, 0.02, 0.05)), new Case(ball.with(below), new Place(0, 0, -0.3)),
+        Source even = Charge.of(Bodies.ball(half), Formula.plain("1e-9*(1 + z)", "m", "C/m^3", ReferenceCases.NOTHING));
+        var drum = new Surroundings.GroundedDrum("z", 0, 0, 0, 0.2, -0.3, 0.2);
+        var box = new Surroundings.GroundedBox(-0.2, 0.2, -0.16, 0.2, -0.2, 0.5);
+        return List.of(new Case(even.with(drum), new Place(0.05, 0.1, 0.02)), new Case(even.with(drum), new Place(0.05, -0.15, 0.1)),
+            new Case(ball.with(box), new Place(0.05, -0.12, 0.1)), new Case(ball.with(below), new Place(0.01, 0.02, 0.05)), new Case(ball.with(below), new Place(0, 0, -0.3)),
             new Case(ball.with(glass), new Place(0, 0.1, 0)), new Case(ball.with(glass), new Place(0.4, 0.1, 0)),
             new Case(ball.with(shell), new Place(0.1, 0, 0)), new Case(ball.with(shell), new Place(-0.1, 0.4, 0.1)),
             new Case(ball.with(sphere), new Place(0, 0, 0)), new Case(ball.with(sphere), new Place(0.1, 0.6, 0)),
