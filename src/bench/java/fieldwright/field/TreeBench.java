@@ -24,7 +24,7 @@ import org.openjdk.jmh.annotations.Warmup;
 
 /**
  * Growth of the treecode, tree and answers together, at relative 1e-6: sources and targets grow together, and a million sources at ten
- * thousand targets, on one thread and on all; beside it the direct kernel on one thread at 640 of the targets. After each run the errors of
+ * thousand targets, on one thread and on all; beside it the direct kernel on one thread at 1,280 of the targets. After each run the errors of
  * up to 1,000 targets are checked against the direct sum and printed.
  */
 @State(Scope.Benchmark)
