@@ -93,7 +93,7 @@ class SlantedCutTest {
     @Test
     void chargeOnBothSidesIsWhatIsCutOff() {
         Random random = new Random(7);
-        for (int i = 0; i < 60; i++) {
+        for (int i = 0; i < 20; i++) {
             double slope = Math.tan(3 * random.nextDouble() - 1.5);
             double start = 1.5 * random.nextGaussian();
             String line = "y - (" + slope + ")*x - (" + start + ")*1 m";
