@@ -81,6 +81,9 @@ public final class GaussLegendre {
         return weights[i];
     }
 
+    /** What the two pairs before the last predict counts by this part: the last may be small by chance. */
+    private static final double DIP = 0.1;
+
     /**
      * Error of the rule for several components, from the decay of their highest Legendre coefficients.
      * {@code weighted[c][i]} is weight times component c at node i; {@code noise[c]} what rounding alone may leave; the result goes
@@ -98,14 +101,15 @@ public final class GaussLegendre {
         double allNoise = 0;
         for (int c = 0; c < components; c++) {
             last[c] = order < 4 ? tail(weighted[c], order - 1) : pair(weighted[c], order - 1);
-            top += last[c] * last[c];
             allNoise = Math.max(allNoise, noise[c]);
             if (order >= 6) {
                 double b = pair(weighted[c], order - 3);
                 double f = pair(weighted[c], order - 5);
                 before += b * b;
                 first += f * f;
+                last[c] = Math.max(last[c], f > b ? DIP * b * b / f : DIP * b);
             }
+            top += last[c] * last[c];
         }
         double factor = 20;
         double ratio = 1;
