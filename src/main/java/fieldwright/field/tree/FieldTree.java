@@ -30,6 +30,8 @@ public final class FieldTree {
     private static final double WORTH = 34;
     /** Clusters are cut for a box of targets while they are larger than this part of it. */
     private static final double EVEN = 0.7;
+    /** Smaller boxes, of fewer blocks, leave clusters whole: a block may take them by their moments. */
+    private static final int CUTTING = 8;
     /** Charges summed before they are added to the whole: bounds the rounding of long sums. */
     private static final int CHUNK = 256;
     private static final int NEAR = -2;
@@ -329,7 +331,7 @@ public final class FieldTree {
                     if (degree != NEAR) {
                         box.error += bound + ruleErrorOf(c, box);
                         taken.get(degree).add(c);
-                    } else if (box.count > 1 && c.children.length > 0 && c.radius > EVEN * box.radius) {
+                    } else if (box.count >= CUTTING && c.children.length > 0 && c.radius > EVEN * box.radius) {
                         for (int k = c.children.length - 1; k >= 0; k--) {
                             top = push(top, c.children[k], false);
                         }
