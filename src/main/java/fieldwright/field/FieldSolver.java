@@ -603,7 +603,7 @@ public final class FieldSolver {
     }
 
     /** Charge must be on the right side of a conductor or interface; looked at on a grid of each part. */
-    private void checkSurroundings() {
+    void checkSurroundings() {
         Surroundings around = source.around();
         if (around instanceof Surroundings.Applied applied) {
             around = applied.around();

@@ -28,6 +28,11 @@
  * round their axis; {@link fieldwright.field.Spheres}. {@code reactionField} and {@code reactionPotential} give the induced charge's part
  * alone. Weak: place and charge both within a few hundredths of the radius of a round wall, unless the charge is the same all round;
  * it is said then.
+ *
+ * <p>Questions about a whole are sums of such answers: {@link fieldwright.field.Interaction} (energy, force, torque),
+ * {@link fieldwright.field.Flux} (flux, voltage), {@link fieldwright.field.Moments}. Each is a {@code Sweep} over
+ * {@code Domain}s, cut at {@code Crossings} with charged surfaces and walls. Weak places: volumes that cut each other's faces askew and
+ * surfaces through the rim of a charged one converge slowly at small tolerances and then say so.
  * SI units. May depend on quantity, formula, geometry, charge, integral.
  */
 package fieldwright.field;

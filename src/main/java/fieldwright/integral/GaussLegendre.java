@@ -123,6 +123,16 @@ public final class GaussLegendre {
         return Math.min(1, Math.pow(ratio, 0.5 + carry));
     }
 
+    /** Norm over all components of the two highest Legendre coefficients. */
+    double lastPair(double[][] weighted) {
+        double sum = 0;
+        for (double[] component : weighted) {
+            double p = pair(component, order - 1);
+            sum += p * p;
+        }
+        return Math.sqrt(sum);
+    }
+
     private double pair(double[] weighted, int degree) {
         double a = tail(weighted, degree);
         double b = degree > 0 ? tail(weighted, degree - 1) : 0;

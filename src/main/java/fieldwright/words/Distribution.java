@@ -5,7 +5,10 @@ import fieldwright.charge.Surroundings;
 import fieldwright.field.Accuracy;
 import fieldwright.field.ClosedForms;
 import fieldwright.field.FieldSolver;
+import fieldwright.field.Flux;
+import fieldwright.field.Interaction;
 import fieldwright.field.ManyPlaces;
+import fieldwright.field.Moments;
 import fieldwright.field.search.DecayExponent;
 import fieldwright.field.search.FieldLine;
 import fieldwright.field.search.Peak;
@@ -17,6 +20,7 @@ import fieldwright.quantity.Place;
 import fieldwright.quantity.Units;
 import fieldwright.quantity.Vector;
 import java.util.List;
+import java.util.function.BiFunction;
 import java.util.function.Function;
 
 /**
@@ -262,6 +266,78 @@ public final class Distribution {
         return ask(solver -> DecayExponent.at(solver, path::place, s, path.from(), path.to()));
     }
 
+    // Questions about the whole
+
+    /**
+     * Flux of D in C: through a surface towards its normal, or out of a volume through its boundary. The normal points where
+     * the coordinate that is held fixed grows; that of a parametric surface or a polygon is right-handed about its parameters or
+     * corners in the order written. The surface may cut the charge; for one that lies on charge or a conductor name the side.
+     */
+    public Amount fluxThrough(Shape surface) {
+        return askWhole((charge, accuracy) -> Flux.of(charge, accuracy).through(surface.region(), null));
+    }
+
+    /** @param side whose D is meant where the surface lies on charge or a conductor: {@code "+z"}, {@code "-r"} */
+    public Amount fluxThrough(Shape surface, String side) {
+        return askWhole((charge, accuracy) -> Flux.of(charge, accuracy).through(surface.region(), side));
+    }
+
+    /** Integral of E along a line from its beginning to its end, in V: the potential there less the potential here. */
+    public Amount voltageAlong(Shape line) {
+        return askWhole((charge, accuracy) -> Flux.of(charge, accuracy).along(line.region()));
+    }
+
+    /**
+     * Work to bring this charge together, in J; with its factor 1/2 for charge itself and for what it induces, so that its fall along a
+     * way is the force. Unbounded for lines and points: ask {@link #energyWith} or {@link #energyBySurroundings}.
+     */
+    public Amount energy() {
+        return askWhole((charge, accuracy) -> Interaction.of(charge, accuracy).energy());
+    }
+
+    /** Work to bring another charge near, in J, beyond what each takes alone. */
+    public Amount energyWith(Distribution other) {
+        return askWhole((charge, accuracy) -> Interaction.of(charge, accuracy).energyWith(other.source));
+    }
+
+    /** The share of the surroundings in the energy, in J: of induced charge, with its factor 1/2, and of an applied field. */
+    public Amount energyBySurroundings() {
+        return askWhole((charge, accuracy) -> Interaction.of(charge, accuracy).energyBySurroundings());
+    }
+
+    /**
+     * Force in N of this charge and what it induces on another charge in the same surroundings; on itself, the force of what it
+     * induces and of an applied field.
+     */
+    public Vector forceOn(Distribution other) {
+        return askWhole((charge, accuracy) -> Interaction.of(charge, accuracy).forceOn(other.source));
+    }
+
+    /** Torque in N m about a place, of the forces of {@link #forceOn}. */
+    public Vector torqueOn(Distribution other, Place about) {
+        return askWhole((charge, accuracy) -> Interaction.of(charge, accuracy).torqueOn(other.source, about));
+    }
+
+    /** Dipole moment in C m of charge whose total is zero; what it induces is not counted. */
+    public Vector dipoleMoment() {
+        return askWhole((charge, accuracy) -> Moments.dipole(charge, null, accuracy));
+    }
+
+    /** Dipole moment about a place, in C m. */
+    public Vector dipoleMoment(Place about) {
+        return askWhole((charge, accuracy) -> Moments.dipole(charge, about, accuracy));
+    }
+
+    /** Quadrupole moment, the integral of density times (3 x_i x_j - r^2 delta_ij) about a place, in C m^2: its {@code xx() … yz()}. */
+    public Moments.Quadrupole quadrupoleMoment(Place about) {
+        return askWhole((charge, accuracy) -> Moments.quadrupole(charge, about, accuracy));
+    }
+
+    private <T> T askWhole(BiFunction<Source, Accuracy, T> question) {
+        state();
+        return question.apply(source, asked.of(Desk.current().accuracy()));
+    }
+
     List<Vector> electricFields(List<Place> places) {
         return fieldSampling(false).apply(places);
     }
@@ -318,12 +394,16 @@ public final class Distribution {
     }
 
     private <T> T ask(Function<FieldSolver, T> question, Accuracy accuracy) {
+        state();
+        return question.apply(FieldSolver.of(source, accuracy));
+    }
+
+    private void state() {
         if (assumption == null) {
             throw new AuthorException(kind + ": its surroundings are not stated, so it answers nothing. Write .inFreeSpace(), .inMedium(eps_r),"
                     + " or .under(groundPlane(\"z\", \"H\")) (.above, .beside) after it. Leaving out an earthed wall errs to the unsafe side.");
         }
         Desk.current().sayOnce(new Output.Assumption(assumption));
-        return question.apply(FieldSolver.of(source, accuracy));
     }
 
     /** The charge as the engine takes it. */

@@ -8,12 +8,16 @@ import java.util.Set;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
+import fieldwright.charge.Source;
+import fieldwright.charge.Sources;
 import fieldwright.formula.Constants;
+import fieldwright.geometry.Region;
 import fieldwright.quantity.Amount;
+import fieldwright.quantity.Place;
 import fieldwright.quantity.Vector;
 
 /**
- * Groups 1 to 5 and 9 of cases.json (see the README beside it): right within the stated error and to relative 1e-9, all converged.
+ * All of cases.json (see the README beside it): right within the stated error and to relative 1e-9, all converged.
  */
 class ReferenceCasesTest {
     static List<ReferenceCases.Case> cases() {
@@ -30,6 +34,62 @@ class ReferenceCasesTest {
         assertTrue(error <= 1e-9 * c.scale(), detail);
         // the reference is a double here: half a unit in its last place
         assertTrue(error <= found.error() + Math.ulp(c.value()), detail);
+    }
+
+    static List<ReferenceCases.Case> wholes() {
+        return ReferenceCases.read(Set.of("6", "7", "8"));
+    }
+
+    /** Groups 6 to 8: fluxes of E, energy, forces, moments. */
+    @ParameterizedTest
+    @MethodSource("wholes")
+    void questionsAboutWholes(ReferenceCases.Case c) {
+        Amount found = askWhole(c);
+        double error = Math.abs(found.si() - c.value());
+        String detail = c.id() + ": found " + found.si() + " ± " + found.error() + ", reference " + c.value() + ", off by " + error + " " + found.standing();
+        assertTrue(found.isConverged(), detail);
+        assertTrue(error <= 1e-9 * c.scale(), detail);
+        assertTrue(error <= found.error() + Math.ulp(c.value()), detail);
+    }
+
+    private static Amount askWhole(ReferenceCases.Case c) {
+        Place origin = new Place(0, 0, 0);
+        String q = c.quantity();
+        if (q.equals("flux")) {
+            return Flux.of(c.source(), Accuracy.DEFAULT).through(surface(c.id()), null).dividedBy(Constants.EPS0);
+        }
+        if (q.equals("U")) {
+            return Interaction.of(c.source(), Accuracy.DEFAULT).energy();
+        }
+        if (q.startsWith("F")) {
+            List<Source> two = ((Sources) c.source()).parts();
+            return component(Interaction.of(two.get(0), Accuracy.DEFAULT).forceOn(two.get(1)), q);
+        }
+        if (q.startsWith("p")) {
+            return component(Moments.dipole(c.source(), origin, Accuracy.DEFAULT), q);
+        }
+        Moments.Quadrupole m = Moments.quadrupole(c.source(), origin, Accuracy.DEFAULT);
+        return switch (q) {
+            case "Qxx" -> m.xx();
+            case "Qyy" -> m.yy();
+            case "Qzz" -> m.zz();
+            case "Qxy" -> m.xy();
+            case "Qxz" -> m.xz();
+            default -> m.yz();
+        };
+    }
+
+    private static Amount component(Vector v, String quantity) {
+        return quantity.endsWith("x") ? v.x() : quantity.endsWith("y") ? v.y() : v.z();
+    }
+
+    private static Region surface(String id) {
+        return switch (id) {
+            case "F02-flux" -> Charges.disc(0.5);
+            case "F07-flux" -> Charges.rectangle(2, 1);
+            case "F11-flux" -> Charges.ball(0.35).movedBy(0.3, 0.1, 0.35);
+            default -> throw new IllegalArgumentException("no surface for " + id);
+        };
     }
 
     static Amount ask(ReferenceCases.Case c) {

@@ -429,4 +429,31 @@ class SheetRunnerTest {
         }
         runner.stop();
     }
+
+    /** Flux, voltage, energy, force, torque and moments, asked on a sheet; values by hand with 1/(4 pi eps0) as above. */
+    @Test
+    void questionsAboutWholesAreResults() {
+        RunOutcome outcome = work("input\nq = 2 nC\nd = 0.5 m", """
+                working
+                var a = pointCharge(at(0, 0, 0), "q").inFreeSpace();
+                var b = pointCharge(at("d", 0, 0), "q");
+                var flux = a.fluxThrough(ball("d/2"));
+                var U = a.voltageAlong(rod(at("d", 0, 0), at("2*d", 0, 0)));
+                var W = a.energyWith(b);
+                var F = a.forceOn(b);
+                var T = a.torqueOn(b, at(0, "d", 0));
+                var p = b.inFreeSpace().dipoleMoment(at(0, 0, 0));
+                var Q_xx = b.inFreeSpace().quadrupoleMoment(at(0, 0, 0)).xx();
+                var W_self = a.energy();
+                var W_film = surfaceCharge(disc("d"), "q/d^2").inFreeSpace().energy();""");
+        assertEquals(List.of(), problems(outcome));
+        double k = 1 / (4 * Math.PI * 8.8541878188e-12);
+        assertEquals(2e-9, number(outcome, "flux"), 1e-18);
+        assertEquals(k * 2e-9, number(outcome, "U"), 1e-8);
+        assertEquals(k * 8e-18, number(outcome, "W"), 1e-16);
+        assertEquals(8 * Math.PI / 3 * k * 4e-18 / 0.5, number(outcome, "W_film"), 1e-15);
+        assertEquals(1e-9, number(outcome, "Q_xx"), 1e-20);
+        assertTrue(outcome.all(Output.Result.class).stream().filter(r -> List.of("F", "T", "p").contains(r.name()))
+                .allMatch(r -> r.value() instanceof Value.Triple));
+    }
 }
