@@ -57,6 +57,7 @@ record Axis(double[] at, double[] along) {
         return other != null && contains(other.at) && isParallel(other.along);
     }
 
+    /** Whether a turn about this axis changes nothing in the surroundings; false for any it does not know. */
     boolean fits(Surroundings around) {
         if (around instanceof Surroundings.GroundPlane g) {
             return isParallel(unit(g.axis()));
@@ -64,7 +65,17 @@ record Axis(double[] at, double[] along) {
         if (around instanceof Surroundings.DielectricHalfSpace d) {
             return isParallel(unit(d.axis()));
         }
-        return !(around instanceof Surroundings.GroundedSphere s) || contains(new double[] {s.x(), s.y(), s.z()});
+        if (around instanceof Surroundings.GroundedPair p) {
+            return isParallel(unit(p.axis()));
+        }
+        if (around instanceof Surroundings.ConductingSphere s) {
+            return contains(new double[] {s.x(), s.y(), s.z()});
+        }
+        if (around instanceof Surroundings.Applied a) {
+            double[] e = {a.ex(), a.ey(), a.ez()};
+            return fits(a.around()) && Vectors.norm(Vectors.cross(e, along)) <= ROUNDING * Vectors.norm(e);
+        }
+        return around instanceof Surroundings.FreeSpace || around instanceof Surroundings.Medium;
     }
 
     boolean contains(double[] p) {

@@ -359,6 +359,6 @@ public final class Interaction {
     /** Whether what is summed is the same all round the axis of the outer charge. */
     private Axis axis(Source outer, List<Source> inner) {
         Axis axis = Axis.of(outer);
-        return axis != null && inner.stream().allMatch(axis::fits) && (induced == null || axis.fits(source) && axis.fits(around)) ? axis : null;
+        return axis != null && inner.stream().allMatch(axis::fits) && axis.fits(around) && (induced == null || axis.fits(source)) ? axis : null;
     }
 }

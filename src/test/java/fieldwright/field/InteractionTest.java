@@ -136,6 +136,22 @@ class InteractionTest {
         near(0.6 * K * q * q / 0.1 - K * q * q / (4 * 0.3), of(ball).energy(), 1e-15);
     }
 
+    /** Round bodies in surroundings that are not round about them: nothing may be left out. Three point images, by Jackson section 2.1 (from memory). */
+    @Test
+    void roundBodiesInACornerAndAcrossAField() {
+        double q = 4 * Math.PI / 3 * 1e-3 * 1e-6;
+        double x = 0.3;
+        double z = 0.4;
+        double far = Math.pow(x * x + z * z, 1.5);
+        Surroundings corner = new Surroundings.GroundedCorner(new Surroundings.GroundPlane("x", 0, 1), new Surroundings.GroundPlane("z", 0, 1));
+        Source ball = charge(ball(0.1).movedBy(x, 0, z), "1e-6").with(corner);
+        Vector f = of(ball).forceOn(ball);
+        near(K * q * q / 4 * (x / far - 1 / (x * x)), f.x(), 1e-15);
+        near(K * q * q / 4 * (z / far - 1 / (z * z)), f.z(), 1e-15);
+        Source across = charge(ball(0.1), "1e-6").with(new Surroundings.Applied(Surroundings.FREE_SPACE, 1e4, 0, 0));
+        near(q * 1e4, of(across).forceOn(across).x(), 1e-15);
+    }
+
     @Test
     void appliedFieldPullsItsCharge() {
         Source rod = charge(rod(0, 0, 0.5, 0, 0, 1.5), "2e-9*(z - 0.5)").with(new Surroundings.Applied(Surroundings.FREE_SPACE, 0, 0, 1e4));
