@@ -10,6 +10,7 @@ import fieldwright.charge.PointCharge;
 import fieldwright.charge.Source;
 import fieldwright.charge.Surroundings;
 import fieldwright.formula.Constants;
+import fieldwright.formula.Formula;
 import fieldwright.geometry.Chart;
 import fieldwright.geometry.Nodes;
 import fieldwright.integral.Cubature;
@@ -108,7 +109,8 @@ public final class FieldSolver {
             if (e.status() == Estimate.Status.NOT_A_NUMBER) {
                 standing = Standing.notConverged("total charge: the density is not a number, or has no finite total, somewhere in the region");
                 e = new Estimate(Double.NaN, Double.POSITIVE_INFINITY, e.evaluations(), e.status());
-            } else if (!e.isConverged() && e.errorEstimate() > Math.max(allowed, 1e-13 * Math.abs(e.value()))) {
+            } else if (!e.isConverged() && e.errorEstimate() > Math.max(allowed, 1e-13 * Math.abs(e.value()))
+                && !(e.errorEstimate() <= 1e-3 * accuracy.relative() * cancelling(charge))) {
                 standing = notConverged("total charge", e.evaluations(), e.errorEstimate(), allowed, "C");
             }
             sum = sum.plus(Amount.si(e.value(), e.errorEstimate(), Units.CHARGE, standing));
@@ -120,6 +122,14 @@ public final class FieldSolver {
             sum = sum.plus(crowd.total());
         }
         return sum;
+    }
+
+    /** How much charge of both signs there is, about: the root of ∫σ² times the measure of the region; C. A total of zero is judged by it. */
+    private double cancelling(Charge charge) {
+        Estimate squares = RegionIntegral.over(charge.region(), charge.density().times(charge.density()), 1e-2, 0, 20_000);
+        Estimate measure = RegionIntegral.over(charge.region(), Formula.constant(1), 1e-2, 0, 20_000);
+        evaluations += squares.evaluations() + measure.evaluations();
+        return Math.sqrt(squares.value() * measure.value());
     }
 
     // ---- field

@@ -18,6 +18,7 @@ import fieldwright.charge.Sources;
 import fieldwright.charge.Surroundings;
 import fieldwright.formula.Constants;
 import fieldwright.formula.Formula;
+import fieldwright.formula.Scope;
 import fieldwright.geometry.Bodies;
 import fieldwright.geometry.CoordinateRegion;
 import fieldwright.geometry.CoordinateSystem;
@@ -275,5 +276,16 @@ class FieldSolverTest {
     void densityThatIsNotANumber() {
         AuthorException x = assertThrows(AuthorException.class, () -> e(free(Bodies.disc(m(1)), "1e-9*sqrt(0.5-rho)"), 0, 0, 1));
         assertTrue(x.getMessage().contains("not a number"), x.getMessage());
+    }
+
+    /** ∫cos θ over a sphere vanishes: a total of zero, told from the charge of both signs that is there. */
+    @Test
+    void aTotalThatCancelsIsZeroAndConverged() {
+        for (String density : List.of("1 (nC/m^2)*cos(theta)", "1 (nC/m^2)*cos(theta)*sin(phi)")) {
+            Source shell = Charge.of(Bodies.shell(Formula.constant(Amount.of(0.7, "m"))), Formula.parse(density).bind(Scope.EMPTY));
+            Amount total = FieldSolver.totalCharge(shell, Accuracy.DEFAULT);
+            assertTrue(total.standing().isConverged(), total.standing()::toString);
+            assertTrue(Math.abs(total.si()) <= total.error() && total.error() < 1e-20, total::toString);
+        }
     }
 }
