@@ -69,23 +69,7 @@ final class GreenPiece implements Integrand {
         }
         int[] orders = new int[d];
         java.util.Arrays.fill(orders, ORDERS[d]);
-        int[] index = new int[d];
-        while (true) {
-            double[] from = new double[d];
-            double[] to = new double[d];
-            for (int k = 0; k < d; k++) {
-                from[k] = cuts[k][index[k]];
-                to[k] = cuts[k][index[k] + 1];
-            }
-            pieces.add(new Cubature.Piece(f, from, to, orders));
-            int k = 0;
-            while (k < d && ++index[k] == cuts[k].length - 1) {
-                index[k++] = 0;
-            }
-            if (k == d) {
-                return;
-            }
-        }
+        Cubature.addBetween(f, cuts, orders, pieces);
     }
 
     private static double[] endless(double[] breaks) {

@@ -24,6 +24,28 @@ public final class Cubature {
         }
     }
 
+    /** Adds a piece for each box between the cuts of every direction, the first direction fastest. */
+    public static void addBetween(Integrand f, double[][] cuts, int[] orders, List<Piece> pieces) {
+        int d = cuts.length;
+        int[] index = new int[d];
+        while (true) {
+            double[] from = new double[d];
+            double[] to = new double[d];
+            for (int k = 0; k < d; k++) {
+                from[k] = cuts[k][index[k]];
+                to[k] = cuts[k][index[k] + 1];
+            }
+            pieces.add(new Piece(f, from, to, orders));
+            int k = 0;
+            while (k < d && ++index[k] == cuts[k].length - 1) {
+                index[k++] = 0;
+            }
+            if (k == d) {
+                return;
+            }
+        }
+    }
+
     /**
      * What is asked: error at most {@code relative}·|value| or {@code relative}·{@code smallest}·(sum of absolute
      * contributions) or {@code absolute}, whichever is largest.

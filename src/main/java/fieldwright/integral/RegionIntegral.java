@@ -59,23 +59,7 @@ public final class RegionIntegral {
         double[][] cuts = breaks(chart, f);
         int[] orders = new int[d];
         java.util.Arrays.fill(orders, d == 1 ? 20 : d == 2 ? 14 : 10);
-        int[] index = new int[d];
-        while (true) {
-            double[] from = new double[d];
-            double[] to = new double[d];
-            for (int k = 0; k < d; k++) {
-                from[k] = cuts[k][index[k]];
-                to[k] = cuts[k][index[k] + 1];
-            }
-            pieces.add(new Cubature.Piece(values, from, to, orders));
-            int k = 0;
-            while (k < d && ++index[k] == cuts[k].length - 1) {
-                index[k++] = 0;
-            }
-            if (k == d) {
-                return;
-            }
-        }
+        Cubature.addBetween(values, cuts, orders, pieces);
     }
 
     /**
